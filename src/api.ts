@@ -1,0 +1,75 @@
+import * as z from 'zod/mini'
+
+/** A refusal, as the server words it (RFC 9457). */
+export class ApiProblem extends Error {
+  override name = 'ApiProblem'
+  readonly status: number
+  readonly title: string
+  /** Field path → sentence. */
+  readonly errors: Readonly<Record<string, string>>
+  constructor(status: number, title: string, errors: Readonly<Record<string, string>> = {}) {
+    super(title)
+    this.status = status
+    this.title = title
+    this.errors = errors
+  }
+}
+
+/** Nobody answered, or something that is not our server did (a hotel's sign-in page is a 200 too). */
+export class NoNetwork extends Error {
+  override name = 'NoNetwork'
+  constructor(cause?: unknown) {
+    super('No network.', { cause })
+  }
+}
+
+const Problem = z.object({ title: z.string(), errors: z.optional(z.record(z.string(), z.string())) })
+const patienceMs = 20_000
+
+async function ask(path: string, accept: string, signal: AbortSignal | undefined): Promise<Response> {
+  const patience = AbortSignal.timeout(patienceMs)
+  const either = signal === undefined ? patience : AbortSignal.any([signal, patience])
+  let answer: Response
+  try {
+    answer = await fetch(`/api${path}`, { headers: { accept }, signal: either })
+  } catch (problem) {
+    if (signal?.aborted === true) throw problem
+    throw new NoNetwork(problem)
+  }
+  if (answer.ok) return answer
+  const said = Problem.safeParse(await answer.json().catch(() => undefined))
+  throw said.success
+    ? new ApiProblem(answer.status, said.data.title, said.data.errors)
+    : new ApiProblem(answer.status, `The server answered with ${answer.status}.`)
+}
+
+/**
+ * Asks the server and reads its answer with its own contract.
+ * @param path what follows `/api`, for example `/edition`
+ * @throws ApiProblem when it refuses or answers something else than agreed; NoNetwork when nobody answers
+ */
+export async function get<Contract extends z.ZodMiniType>(
+  path: string,
+  contract: Contract,
+  signal?: AbortSignal,
+): Promise<z.output<Contract>> {
+  const answer = await ask(path, 'application/json', signal)
+  if (answer.headers.get('content-type')?.includes('json') !== true) throw new NoNetwork()
+  const read = contract.safeParse(await answer.json().catch(() => undefined))
+  if (read.success) return read.data
+  throw new ApiProblem(answer.status, 'The server and this page don’t match. Load the page again.')
+}
+
+/**
+ * Fetches a file as it is, to be checked against its hash by whoever asked.
+ * @param path what follows `/api`, for example `/edition-files/<hash>`
+ */
+export async function getBytes(path: string, signal?: AbortSignal): Promise<Uint8Array> {
+  const answer = await ask(path, '*/*', signal)
+  try {
+    return new Uint8Array(await answer.arrayBuffer())
+  } catch (problem) {
+    if (signal?.aborted === true) throw problem
+    throw new NoNetwork(problem)
+  }
+}

@@ -1,0 +1,36 @@
+import { openDB } from 'idb'
+import type { DBSchema, IDBPDatabase } from 'idb'
+import type { SheetDoc } from './sheets.ts'
+
+export type Stores = DBSchema & {
+  sheets: { key: string; value: SheetDoc }
+  files: { key: string; value: { hash: string; bytes: Uint8Array } }
+  settings: { key: string; value: { key: string; value: unknown } }
+}
+
+let opened: Promise<IDBPDatabase<Stores>> | undefined
+
+/** The device's own database, opened once. A version another tab still holds open is let go of when it asks. */
+export function database(): Promise<IDBPDatabase<Stores>> {
+  opened ??= openDB<Stores>('tracelamp', 1, {
+    upgrade(db) {
+      db.createObjectStore('sheets', { keyPath: 'id' })
+      db.createObjectStore('files', { keyPath: 'hash' })
+      db.createObjectStore('settings', { keyPath: 'key' })
+    },
+    blocking(_old, _new, event) {
+      ;(event.target as IDBDatabase).close()
+      opened = undefined
+    },
+    terminated() {
+      opened = undefined
+    },
+  }).catch((problem: unknown) => {
+    opened = undefined
+    throw problem
+  })
+  return opened
+}
+
+/** Readings must outlive a dead battery, so a write counts only once it lies on the disk. */
+export const strict = { durability: 'strict' } as const

@@ -1,0 +1,31 @@
+import { database, strict } from './database.ts'
+
+/** Small things this device remembers, by name. */
+export type Settings = {
+  /** The person stated to be qualified; device time, ISO 8601. */
+  qualified: { statedAt: string }
+  /** Side of the number pad that holds Clear, Unsteady and Done. */
+  padSide: 'left' | 'right'
+  /** Whether single letters act as keys on the Diagnosis page. */
+  letterKeys: boolean
+  /** What the server last said is in force, so that the page opens with no network. Parse it again. */
+  editionInForce: unknown
+  /** The sheet each page had open. */
+  openTriage: string
+  openDiagnosis: string
+}
+
+/** A remembered value, or undefined. */
+export async function getSetting<Key extends keyof Settings>(key: Key): Promise<Settings[Key] | undefined> {
+  return (await (await database()).get('settings', key))?.value as Settings[Key] | undefined
+}
+
+/** Remembers a value; `undefined` forgets it. */
+export async function setSetting<Key extends keyof Settings>(
+  key: Key,
+  value: Settings[Key] | undefined,
+): Promise<void> {
+  const tx = (await database()).transaction('settings', 'readwrite', strict)
+  const write = value === undefined ? tx.store.delete(key) : tx.store.put({ key, value })
+  await Promise.all([write, tx.done])
+}
