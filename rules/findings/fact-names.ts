@@ -46,7 +46,10 @@ export type Level = (typeof levels)[number]
 
 export const weights = ['light', 'middle', 'heavy'] as const
 export const drops = ['rise', 'none', 'usual', 'much', 'severe', 'collapse'] as const
-export const shares = ['none', 'small', 'half', 'most'] as const
+export const shares = ['none', 'little', 'small', 'half', 'most'] as const
+/** Hot–neutral against the limits for this kind of source. */
+export const supplies = ['far-low', 'low', 'lowish', 'within', 'highish', 'high', 'far-high'] as const
+export type Supply = (typeof supplies)[number]
 export const ohmBands = ['tied', 'poor', 'rods', 'load', 'open'] as const
 export const bulbStates = ['dark', 'dim', 'bright'] as const
 
@@ -59,13 +62,14 @@ const derived: Record<string, 'number' | readonly string[]> = {
   'drop.sits': ['source', 'feeder', 'branch'],
   'receptacle.rise-share': shares,
   'panel.rise-share': shares,
+  'feeder.rise-share': shares,
   'receptacle.ng.rise': ['none', 'small', 'some', 'much', 'collapse'],
   // Volts of one place against those of the place before it
   'panel.against-source': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
   'receptacle.against-panel': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
   'receptacle.against-source': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
   // Two legs
-  'legs.pattern': ['equal', 'apart', 'one-dead', 'both-dead', 'same-phase', 'not-twice'],
+  'legs.pattern': ['equal', 'apart', 'opposite', 'one-dead', 'both-dead', 'same-phase', 'not-twice'],
   'legs.ground': ['equal', 'apart', 'one-on-ground'],
   // Dead circuit
   'receptacle.ng.band': ohmBands,
@@ -106,6 +110,7 @@ const derived: Record<string, 'number' | readonly string[]> = {
 for (const place of places) {
   derived[`${place}.pattern`] = patterns
   derived[`${place}.meter`] = weights
+  derived[`${place}.supply`] = supplies
   for (const pair of ['hn', 'hg', 'ng']) {
     derived[`${place}.${pair}.level`] = levels
     /** The same while not all three are there: a pattern of three replaces what each says alone. */

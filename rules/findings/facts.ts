@@ -21,6 +21,8 @@ export type Findings = {
   observed: (id: string) => string | undefined
   /** Input resistance of the instrument that took it, ohms. */
   meterOhms: (id: string) => number
+  /** Source kind: the limits of its voltage are its own. */
+  source: string
   nominalVolts: number
   hertz: number
   legs: 1 | 2
@@ -60,6 +62,7 @@ function deriveAt(
       const one = taken.get(id)
       return one?.kind === 'reading' ? one.meterOhms : context.meterOhms
     },
+    source: context.source,
     nominalVolts: system.nominalVolts,
     hertz: system.hertz,
     legs: system.legs,

@@ -23,7 +23,9 @@ export function legFacts(f: Findings, say: Say): void {
             : both !== undefined && Math.abs(sum - both / n) > (f.edges['legs-sum'] ?? 0)
               ? 'not-twice'
               : apart
-                ? 'apart'
+                ? high > (f.edges['legs-high'] ?? Infinity) && low < 1
+                  ? 'opposite'
+                  : 'apart'
                 : 'equal'
     say('legs.pattern', word, from)
   }

@@ -20,13 +20,27 @@ function dropWord(drop: Drop, withLoad: number, f: Findings): string {
   return drop.relative < (e['drop-severe'] ?? 0) ? 'much' : 'severe'
 }
 
-/** How much of the fall of hot–neutral shows as a rise of neutral–ground: tells a poor neutral from a poor hot. */
-function riseShare(rise: number, drop: Drop, f: Findings): string {
-  const part = rise / drop.volts
+/** How much of a fall of hot–neutral shows as a rise of neutral–ground: tells a poor neutral from a poor hot. */
+function riseShare(rise: number, fall: number, f: Findings): string {
+  const part = rise / fall
   const e = f.edges
+  if (rise / f.nominalVolts < (e['rise-nothing'] ?? 0)) return 'none'
   if (part < (e['rise-small'] ?? 0)) return 'none'
+  if (part < (e['rise-some'] ?? 0)) return 'little'
   if (part < (e['rise-half'] ?? 0)) return 'small'
   return part < (e['rise-most'] ?? 0) ? 'half' : 'most'
+}
+
+const feederEnds = ['source.hn.volts', 'source.ng.volts', 'panel.hn.volts', 'panel.ng.volts'] as const
+
+/** The same share for the feeder, from the house's own load: where the bond is in the panel, the source shows it. */
+function feederRise(f: Findings, say: Say): void {
+  const [sourceHn, sourceNg, panelHn, panelNg] = feederEnds.map((id) => f.amount(id))
+  if (sourceHn === undefined || sourceNg === undefined || panelHn === undefined || panelNg === undefined) return
+  const fall = sourceHn - panelHn
+  const bonded = Math.min(sourceNg, panelNg) / f.nominalVolts < 0.01
+  if (bonded && panelHn > 0.5 * f.nominalVolts && fall / f.nominalVolts >= (f.edges['rise-readable'] ?? 0))
+    say('feeder.rise-share', riseShare(Math.abs(sourceNg - panelNg), fall, f), feederEnds)
 }
 
 /** What a known load makes of the volts, and where along the run the drop sits. */
@@ -41,8 +55,9 @@ export function loadFacts(f: Findings, say: Say): void {
     const [without, withLoad] = [f.amount(off), f.amount(on)]
     const steady = without !== undefined && without / f.nominalVolts < (f.edges['rise-steady'] ?? 0)
     if (steady && withLoad !== undefined && drop.relative >= (f.edges['rise-readable'] ?? 0))
-      say(`${place}.rise-share`, riseShare(withLoad - without, drop, f), [...drop.from, off, on])
+      say(`${place}.rise-share`, riseShare(withLoad - without, drop.volts, f), [...drop.from, off, on])
   }
+  feederRise(f, say)
   const loaded = f.amount('receptacle.ng.volts.loaded')
   if (loaded !== undefined) {
     const rise = (loaded - (f.amount('receptacle.ng.volts') ?? 0)) / f.nominalVolts

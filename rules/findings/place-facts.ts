@@ -1,6 +1,6 @@
 import { places } from './fact-names.ts'
 import type { Findings, Say } from './facts.ts'
-import { levelOf, patternOf } from './volts-pattern.ts'
+import { levelOf, patternOf, supplyOf } from './volts-pattern.ts'
 
 /** How much a meter pulls at what it reads: its input resistance in three classes. */
 export function weightOf(ohms: number, edges: Findings['edges']): 'light' | 'middle' | 'heavy' {
@@ -26,6 +26,7 @@ export function placeFacts(f: Findings, say: Say): void {
       const level = levelOf(volts, f.nominalVolts, f.edges)
       say(`${place}.${pair}.level`, level, [id])
       if (taken.length < 3) say(`${place}.${pair}.alone`, level, [id])
+      if (pair === 'hn' && volts / f.nominalVolts > 0.5) say(`${place}.supply`, supplyOf(volts, f), [id])
     }
     if (taken.length > 0)
       say(`${place}.meter`, weightOf(Math.min(...taken.map((t) => f.meterOhms(t.id))), f.edges), [])

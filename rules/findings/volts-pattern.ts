@@ -1,4 +1,5 @@
-import type { Level, Pattern } from './fact-names.ts'
+import type { Level, Pattern, Supply } from './fact-names.ts'
+import type { Findings } from './facts.ts'
 
 type Edges = Readonly<Record<string, number>>
 const edge = (edges: Edges, id: string): number => {
@@ -19,6 +20,24 @@ export function levelOf(volts: number, nominal: number, edges: Edges): Level {
   if (r <= edge(edges, 'level-high')) return 'within'
   if (r <= edge(edges, 'level-over')) return 'high'
   return r < edge(edges, 'level-double') ? 'over' : 'double'
+}
+
+/**
+ * Hot–neutral against the limits of this kind of source: a utility's own service limits (ANSI C84.1 range B on
+ * 120 V), else ten per cent. Just inside a limit counts apart, since meters and days differ.
+ */
+export function supplyOf(volts: number, f: Findings): Supply {
+  const american = f.source === 'utility' && f.nominalVolts === 120
+  const low = edge(f.edges, american ? 'utility-low' : 'level-low')
+  const high = edge(f.edges, american ? 'utility-high' : 'level-high')
+  const near = edge(f.edges, 'supply-near')
+  const r = volts / f.nominalVolts
+  if (r < edge(f.edges, 'supply-far-low')) return 'far-low'
+  if (r < low) return 'low'
+  if (r < low + near) return 'lowish'
+  if (r <= high - near) return 'within'
+  if (r <= high) return 'highish'
+  return r <= edge(f.edges, 'supply-far-high') ? 'high' : 'far-high'
 }
 
 /**
