@@ -37,7 +37,9 @@ export const legs: Check = ({ amount, nominal, fact }) => {
     return { because: 'Leg to leg reads the same as one leg: no split phase gives that.', again: 'panel.l1l2.volts' }
   const sum = l1 + l2
   const difference = Math.abs(l1 - l2)
-  const off = Math.min(Math.abs(sum - both), Math.abs(difference - both)) / nominal
+  // In phase, as one source feeding both legs, the difference is what stands between them; never with a leg lifted.
+  const inPhase = Math.max(l1, l2) < 1.4 * nominal ? Math.abs(difference - both) : Infinity
+  const off = Math.min(Math.abs(sum - both), inPhase) / nominal
   if (fact('legs.pattern') !== 'both-dead' && off > 0.17)
     return { because: 'The two legs don’t add up to what is read leg to leg.', again: 'panel.l1l2.volts' }
   return undefined

@@ -84,6 +84,12 @@ export const underLoad: Check = ({ amount, nominal }) => {
     if (off === undefined || on === undefined) continue
     if (on - off > 0.02 * nominal)
       return { because: `More volts with the load on than off at the ${place}.`, again: `${place}.hn.volts.loaded` }
+    // An open wire reads next to nothing under load, a poor joint most of its volts: a tenth is neither.
+    if (off > 0.7 * nominal && on < off && tenfold(off, on))
+      return {
+        because: `Under load the ${place} reads a tenth of what it reads without: a slipped point?`,
+        again: `${place}.hn.volts.loaded`,
+      }
   }
   return undefined
 }

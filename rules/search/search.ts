@@ -1,0 +1,134 @@
+/**
+ * Search over an edition's articles, causes and tests: the same in the browser, with no network, and on the server.
+ */
+import MiniSearch from 'minisearch'
+import type { QueryCombination } from 'minisearch'
+import type { Audience, Cause, ProceduresFile, Test } from '../edition/schema.ts'
+import { documentsOf } from './documents.ts'
+import type { Kind, SearchableArticle, SearchDocument } from './documents.ts'
+import { excerpt, markAll } from './marks.ts'
+import type { Matched, Piece } from './marks.ts'
+import { readQuery } from './read-query.ts'
+import type { QueryWord, Vocabulary } from './read-query.ts'
+import { fileUnder, tableWords } from './stem.ts'
+import { tokensOf } from './tokens.ts'
+
+export type SearchIndex = {
+  engine: MiniSearch<SearchDocument>
+  documents: ReadonlyMap<string, SearchDocument>
+  vocabulary: Vocabulary
+}
+
+export type Hit = {
+  kind: Kind
+  /** An article's slug, a cause's or a test's id. */
+  id: string
+  title: Piece[]
+  snippet: Piece[]
+  audience: Audience
+}
+export type Found = {
+  /** How many there are; `hits` may hold fewer. */
+  total: number
+  hits: Hit[]
+  /** How the query was read, when a slip in it was mended. */
+  readAs: string | undefined
+}
+
+// A symptom in a title or among the words people search for says more than the same word in running text.
+const boost = { title: 5, words: 5, label: 4, body: 1 } as const
+const fields = Object.keys(boost) as (keyof typeof boost)[]
+// A text that holds the whole query beats one that holds it in part, whatever the counts say.
+const leastCovered = 0.6
+const leastOfBest = 0.35
+
+/** Indexed as written, for beginnings, and as filed, for everything else. */
+const termsOf = (word: string): string[] => [...new Set([word, fileUnder(word)])]
+
+/**
+ * Builds the index.
+ * @param procedures files that causes and tests are described in; without them they are found by their titles
+ */
+export function buildIndex(
+  articles: readonly SearchableArticle[],
+  causes: readonly Cause[],
+  tests: readonly Test[],
+  procedures: readonly ProceduresFile[] = [],
+): SearchIndex {
+  const documents = documentsOf(articles, causes, tests, procedures)
+  const engine = new MiniSearch<SearchDocument>({
+    idField: 'key',
+    fields,
+    tokenize: (text) => tokensOf(text).map((token) => token.word),
+    processTerm: termsOf,
+    searchOptions: { boost, tokenize: (term) => [term], processTerm: (term) => term },
+  })
+  engine.addAll(documents)
+  const written = new Map<string, number>()
+  for (const document of documents)
+    for (const field of fields)
+      for (const { word, isNumber } of tokensOf(document[field]))
+        if (!isNumber) written.set(word, (written.get(word) ?? 0) + 1)
+  const filed = new Set([...written.keys()].map(fileUnder))
+  for (const word of tableWords) if (filed.has(fileUnder(word)) && !written.has(word)) written.set(word, 0)
+  return { engine, documents: new Map(documents.map((d) => [d.key, d])), vocabulary: { written, filed } }
+}
+
+const scored = (word: QueryWord): QueryCombination[] => {
+  const weight = word.weak ? 0.3 : 1
+  const term = (query: string, times: number, prefix = false): QueryCombination => ({
+    queries: [query],
+    combineWith: 'OR',
+    prefix,
+    boost: Object.fromEntries(fields.map((field) => [field, boost[field] * times])),
+  })
+  return [
+    ...word.terms.map((one) => term(one, weight)),
+    ...word.near.map((one) => term(one, weight * 0.6)),
+    ...(word.beginning === undefined ? [] : [term(word.beginning, weight * 0.5, true)]),
+  ]
+}
+
+/** Whether a document's found terms hold this word of the query. */
+const holds = (word: QueryWord, terms: readonly string[]) =>
+  terms.some(
+    (term) =>
+      word.terms.includes(term) ||
+      word.near.includes(term) ||
+      (word.beginning !== undefined && term.startsWith(word.beginning)),
+  )
+
+/**
+ * Finds what a query asks for, the best first. An empty query finds nothing.
+ * @param most how many to show at most; `total` counts all
+ */
+export function search(index: SearchIndex, query: string, most = 40): Found {
+  const { words, readAs } = readQuery(query, index.vocabulary)
+  if (words.length === 0) return { total: 0, hits: [], readAs: undefined }
+  const strong = words.some((word) => !word.weak) ? words.filter((word) => !word.weak) : words
+  const results = index.engine
+    .search({ combineWith: 'OR', queries: words.flatMap(scored) })
+    .map((result) => {
+      const covered = strong.filter((word) => holds(word, result.terms)).length / strong.length
+      return { key: String(result.id), covered, score: result.score * covered ** 2 }
+    })
+    .filter((result) => result.covered >= leastCovered)
+    .sort((a, b) => b.score - a.score || (a.key < b.key ? -1 : 1))
+  const best = results[0]?.score ?? 0
+  const kept = results.filter((result) => result.covered === 1 || result.score >= best * leastOfBest)
+  const matched: Matched = {
+    filed: new Set(words.flatMap((word) => [...word.terms, ...word.near])),
+    beginnings: words.flatMap((word) => (word.beginning === undefined ? [] : [word.beginning])),
+  }
+  const hits = kept.slice(0, most).map(({ key }): Hit => {
+    const found = index.documents.get(key)!
+    return {
+      kind: found.kind,
+      id: found.id,
+      title: markAll(found.title, matched),
+      snippet: excerpt(found.body === '' ? found.words : found.body, matched),
+      audience: found.audience,
+    }
+  })
+  return { total: kept.length, hits, readAs }
+}
