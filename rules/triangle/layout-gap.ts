@@ -18,7 +18,7 @@ function swing(hook: number, length: number, toward: 1 | -1): Point[] {
 }
 
 /** Ground untied: the cords' ends miss each other, and the lamp drops between their swings. */
-function groundUntied(s: Gap, ng: number, hg: number, { k, xN, xH }: Scale): Part {
+function groundUntied(s: Gap, ng: number, hg: number, { k, xN, xH, frame }: Scale): Part {
   const [left, right] = [swing(xN, ng * k, 1), swing(xH, hg * k, -1)]
   const [a, b]: [Point, Point] = [
     [xN + ng * k, lineY],
@@ -34,7 +34,7 @@ function groundUntied(s: Gap, ng: number, hg: number, { k, xN, xH }: Scale): Par
     nodes: [onRail('N', xN), onRail('H', xH), { corner: 'G', at: lamp, loose: true }],
     pull: lamp,
     gap: {
-      at: [lamp[0], lineY + measure.skirt + 34],
+      at: [lamp[0], Math.min(lineY + measure.skirt + 34, frame.height - 5)],
       text: s.nowhere ? 'nowhere' : `${inVolts(s.gap)} V missing`,
     },
   }

@@ -6,12 +6,23 @@ export type Frame = {
   height: number
   /** Volts on the sides: for a picture that is only shown. */
   lengths?: boolean
+  /** A weight hangs from the lamp: room is left for it. */
+  weighted?: boolean
   /** The same two ground readings under another meter. */
   behind?: { ng: number; hg: number } | undefined
 }
 
 /** Fixed measures of the drawing, px. */
-export const measure = { margin: 46, railY: 40, hook: 34, node: 17, drop: 58, skirt: 96, needle: 24 } as const
+export const measure = {
+  margin: 46,
+  railY: 40,
+  hook: 34,
+  node: 17,
+  drop: 58,
+  skirt: 96,
+  needle: 24,
+  pull: 44,
+} as const
 /** The line the lamp hangs from. */
 export const lineY = measure.railY + measure.hook
 

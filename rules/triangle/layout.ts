@@ -36,16 +36,24 @@ function extent(readings: Readings, s: Seat): { from: number; to: number; deep: 
   if (s.kind === 'dead') return { from: 0, to: nominal, deep: 0 }
   if (s.kind === 'gap') return { from: 0, to: Math.max(hn, readings.hg ?? 0, readings.ng ?? 0), deep: 0 }
   if (s.kind === 'closed') return { from: Math.min(0, s.x), to: Math.max(hn, s.x), deep: s.y }
-  return { from: 0, to: Math.max(hn, 1), deep: 0 }
+  // A cord may reach past the rail's other end while the third reading is missing.
+  return {
+    from: Math.min(0, hn - (volts(readings.hg) ?? 0)),
+    to: Math.max(hn, volts(readings.ng) ?? 0),
+    deep: 0,
+  }
 }
 
 function scaleOf(readings: Readings, s: Seat, frame: Frame): Scale {
   const { from, to, deep } = extent(readings, s)
   const across = frame.width - 2 * measure.margin
-  const below = frame.height - lineY - measure.node - 6
+  const below = frame.height - lineY - measure.node - 6 - (frame.weighted === true ? measure.pull : 0)
   const k = Math.min(across / Math.max(to - from, 1), deep > 0 ? below / deep : Infinity)
   const xN = (frame.width - (to - from) * k) / 2 - from * k
-  return { k, xN, xH: xN + (volts(readings.hn) ?? readings.nominal) * k, frame }
+  const apart = (volts(readings.hn) ?? readings.nominal) * k
+  // To scale, N and H would hide each other when hot–neutral is next to nothing.
+  const aside = Math.max(0, measure.needle - apart / 2)
+  return { k, xN: xN - aside, xH: xN + apart + aside, frame }
 }
 
 function layClosed(s: Seat & { kind: 'closed' }, { k, xN, xH }: Scale): Part {

@@ -5,6 +5,12 @@ import { answerCase } from './answer.ts'
 import { callFolder } from './call-folder.ts'
 import { badUsage, parseLine, readArguments, readLines } from './read-cases.ts'
 
+// A reader that has seen enough closes the pipe: that is no fault of ours.
+process.stdout.on('error', (fault: NodeJS.ErrnoException) => {
+  if (fault.code === 'EPIPE') process.exit(0)
+  throw fault
+})
+
 async function main(): Promise<number> {
   const args = readArguments(process.argv.slice(2), 1)
   if (args === undefined) {

@@ -109,7 +109,8 @@ test('evidence names its rule, its bits, its sentence, its source and the number
 })
 
 test('ruled out takes two groups against and eight bits together', async () => {
-  const { ranking } = await found(splitPhase, { ...volts(120, 0.2, 119.8), ...lamps('lit', 'dark', 'lit') })
+  const onHot = { ...volts(120, 0.2, 119.8), ...volts(120, 0.3, 119.7, 'panel'), ...lamps('lit', 'dark', 'lit') }
+  const { ranking } = await found(splitPhase, onHot)
   for (const r of ranking) {
     const net = new Map<string, number>()
     for (const e of r.evidence) net.set(e.group, (net.get(e.group) ?? 0) + e.bits)
