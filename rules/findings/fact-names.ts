@@ -63,6 +63,7 @@ const derived: Record<string, 'number' | readonly string[]> = {
   'receptacle.rise-share': shares,
   'panel.rise-share': shares,
   'feeder.rise-share': shares,
+  'receptacle.loaded-alone': ['low', 'within'],
   'receptacle.ng.rise': ['none', 'small', 'some', 'much', 'collapse'],
   // Volts of one place against those of the place before it
   'panel.against-source': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
@@ -85,6 +86,7 @@ const derived: Record<string, 'number' | readonly string[]> = {
   'source-bulb.holds': ['nothing', 'half', 'neutral', 'hot', 'sagged'],
   // Testers
   'tester.lamps': [],
+  'shock.felt': ['yes', 'no'],
   'gfci.buttons': ['both-trip', 'own-only', 'plug-only', 'neither'],
   'gfci.time': ['in-time', 'slow'],
   // Earth

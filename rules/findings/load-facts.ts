@@ -58,6 +58,12 @@ export function loadFacts(f: Findings, say: Say): void {
       say(`${place}.rise-share`, riseShare(withLoad - without, drop.volts, f), [...drop.from, off, on])
   }
   feederRise(f, say)
+  // Without the reading before the load there is no drop; what the load leaves still says something.
+  const left = f.amount('receptacle.hn.volts.loaded')
+  if (left !== undefined && falls['receptacle'] === undefined)
+    say('receptacle.loaded-alone', left / f.nominalVolts < (f.edges['level-low'] ?? 0) ? 'low' : 'within', [
+      'receptacle.hn.volts.loaded',
+    ])
   const loaded = f.amount('receptacle.ng.volts.loaded')
   if (loaded !== undefined) {
     const rise = (loaded - (f.amount('receptacle.ng.volts') ?? 0)) / f.nominalVolts

@@ -4,7 +4,6 @@ import type { Findings, Say } from './facts.ts'
 const batteries = [
   { nominal: 12, flat: 11.5, over: 15.5 },
   { nominal: 24, flat: 23, over: 31 },
-  { nominal: 36, flat: 34.5, over: 46.5 },
   { nominal: 48, flat: 46, over: 62 },
 ]
 

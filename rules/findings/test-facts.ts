@@ -49,7 +49,13 @@ export function testFacts(f: Findings, say: Say): void {
     say('gfci.buttons', word, ['gfci.own-test', 'gfci.plug-test'])
   }
   const ms = f.amount('gfci.trip.milliseconds')
-  if (ms !== undefined) say('gfci.time', ms <= (f.edges['gfci-milliseconds'] ?? 0) ? 'in-time' : 'slow', ['gfci.trip.milliseconds'])
+  const slowest = f.edges[f.nominalVolts === 230 ? 'rcd-milliseconds' : 'gfci-milliseconds'] ?? 0
+  if (ms !== undefined) say('gfci.time', ms <= slowest ? 'in-time' : 'slow', ['gfci.trip.milliseconds'])
+
+  // A tingle is a shock: one yes outweighs the other's no.
+  const felt = ['shock', 'tingle'].filter((id) => f.observed(id) !== undefined)
+  const yes = felt.filter((id) => f.observed(id) === 'yes')
+  if (felt.length > 0) say('shock.felt', yes.length > 0 ? 'yes' : 'no', yes.length > 0 ? yes : felt)
 
   const id = 'receptacle.ge.volts'
   const earth = f.amount(id)

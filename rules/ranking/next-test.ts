@@ -36,14 +36,23 @@ function stillToDo(edition: Edition, sheet: Sheet): Doing[] {
 }
 
 /** An outcome's finding as if it had been taken. */
-function asTaken(edition: Edition, context: Context, mode: string, id: string, outcome: Outcome): Taken | undefined {
+function asTaken(
+  edition: Edition,
+  context: Context,
+  mode: string,
+  id: string,
+  outcome: Outcome,
+  unloaded: ReadonlyMap<string, number>,
+): Taken | undefined {
   const given = outcome.findings[id]
   if (given === undefined) return undefined
   if (typeof given === 'string') return { kind: 'observation', id, mode, value: given }
   const reading = edition.readings.get(id)
   if (reading === undefined || !fitsContext(reading, context)) return undefined
   const nominal = edition.systems.get(context.system)?.nominalVolts ?? 120
-  const value = typeof given === 'number' ? given : given.times * nominal
+  // A loaded hot–neutral is told by what it was before the load, where that was taken.
+  const before = id.endsWith('.hn.volts.loaded') ? unloaded.get(id.replace(/\.loaded$/, '')) : undefined
+  const value = typeof given === 'number' ? given : given.times * (before ?? nominal)
   return {
     kind: 'reading',
     id,
@@ -80,9 +89,12 @@ function tryOutcomes(edition: Edition, sheet: Sheet, doing: Doing, stopsNow: num
   const fitting = doing.test.outcomes.filter((o) => fitsContext(o, context))
   const open = fitting.filter((o) => !contradicts(edition, sheet, doing, o))
   const { rules } = ready(edition)
+  const unloaded = new Map(
+    sheet.taken.flatMap((t) => (t.kind === 'reading' && t.mode === doing.mode ? [[t.id, t.value] as const] : [])),
+  )
   const seen = new Set<string>()
   return (open.length >= 2 ? open : fitting).flatMap((outcome) => {
-    const added = doing.missing.flatMap((id) => asTaken(edition, context, doing.mode, id, outcome) ?? [])
+    const added = doing.missing.flatMap((id) => asTaken(edition, context, doing.mode, id, outcome, unloaded) ?? [])
     // Outcomes that differ only in what is taken already are one.
     const key = added.map((t) => `${t.id}=${t.value}`).join()
     if (added.length === 0 || seen.has(key)) return []

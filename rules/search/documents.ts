@@ -66,7 +66,7 @@ export function documentsOf(
       title: test.title,
       words: '',
       label: test.label,
-      body: join(said.flatMap((one) => [one.shows, one.cannotShow, ...one.instruments])),
+      body: join(said.flatMap((one) => [one.shows, one.cannotShow])),
       audience: test.who === 'anyone' ? 'everyone' : 'qualified',
     }
   })

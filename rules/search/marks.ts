@@ -30,6 +30,9 @@ function cut(text: string, marks: readonly Mark[], from: number, to: number): Pi
   return pieces
 }
 
+/** Whether anything of what was searched for stands in a text. */
+export const isIn = (text: string, matched: Matched): boolean => marksIn(text, matched).length > 0
+
 /** The whole text with what was found marked. */
 export const markAll = (text: string, matched: Matched): Piece[] =>
   cut(text, marksIn(text, matched), 0, text.length)

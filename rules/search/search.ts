@@ -6,7 +6,7 @@ import type { QueryCombination } from 'minisearch'
 import type { Audience, Cause, ProceduresFile, Test } from '../edition/schema.ts'
 import { documentsOf } from './documents.ts'
 import type { Kind, SearchableArticle, SearchDocument } from './documents.ts'
-import { excerpt, markAll } from './marks.ts'
+import { excerpt, isIn, markAll } from './marks.ts'
 import type { Matched, Piece } from './marks.ts'
 import { readQuery } from './read-query.ts'
 import type { QueryWord, Vocabulary } from './read-query.ts'
@@ -126,7 +126,7 @@ export function search(index: SearchIndex, query: string, most = 40): Found {
       kind: found.kind,
       id: found.id,
       title: markAll(found.title, matched),
-      snippet: excerpt(found.body === '' ? found.words : found.body, matched),
+      snippet: excerpt(isIn(found.body, matched) || found.words === '' ? found.body : found.words, matched),
       audience: found.audience,
     }
   })

@@ -27,29 +27,42 @@ export function slipsBetween(a: string, b: string, most: number): number {
   return Math.min(last[b.length]!, most + 1)
 }
 
+type Candidate = {
+  word: string
+  slips: number
+  /** Begins with the letter that was typed. */
+  sameFirst: boolean
+  /** A letter left out, doubled or moved: commoner than one letter taken for another. */
+  sameLetters: boolean
+  times: number
+}
+const sorted = (word: string) => [...word].sort().join('')
+
+function isNearer(a: Candidate, b: Candidate): boolean {
+  if (a.slips !== b.slips) return a.slips < b.slips
+  if (a.sameFirst !== b.sameFirst) return a.sameFirst
+  if (a.sameLetters !== b.sameLetters) return a.sameLetters
+  if (a.times !== b.times) return a.times > b.times
+  return a.word < b.word
+}
+
 /**
  * The known word that a mistyped one most likely stands for, or undefined. Fewest slips first, then the same first
- * letter, then the commoner word, then by alphabet: the same answer wherever it runs.
+ * letter, then the kind of slip, then the commoner word, then by alphabet: the same answer wherever it runs.
  * @param known word → how often it occurs
  */
 export function readAs(word: string, known: ReadonlyMap<string, number>): string | undefined {
   const most = slipsAllowed(word.length)
   if (most === 0) return undefined
-  let best: { word: string; slips: number; first: number; times: number } | undefined
+  let best: Candidate | undefined
   for (const [candidate, times] of known) {
     if (candidate.length < 3) continue
-    const slips = slipsBetween(word, candidate, Math.min(most, best?.slips ?? most))
-    if (slips > most) continue
-    const one = { word: candidate, slips, first: candidate[0] === word[0] ? 0 : 1, times }
+    const slips = slipsBetween(word, candidate, best?.slips ?? most)
+    if (slips > (best?.slips ?? most)) continue
+    const sameFirst = candidate[0] === word[0]
+    const sameLetters = candidate.length !== word.length || sorted(candidate) === sorted(word)
+    const one = { word: candidate, slips, sameFirst, sameLetters, times }
     if (best === undefined || isNearer(one, best)) best = one
   }
   return best?.word
-}
-
-type Candidate = { word: string; slips: number; first: number; times: number }
-function isNearer(a: Candidate, b: Candidate): boolean {
-  if (a.slips !== b.slips) return a.slips < b.slips
-  if (a.first !== b.first) return a.first < b.first
-  if (a.times !== b.times) return a.times > b.times
-  return a.word < b.word
 }

@@ -8,10 +8,10 @@ import type { Readings } from './sides.ts'
 type Gap = Seat & { kind: 'gap' }
 
 /** How a cord's end swings down under its hook: the edge of the skirt. Below the cord's own length it hangs plumb. */
-function swing(hook: number, length: number, toward: 1 | -1): Point[] {
+function swing(hook: number, length: number, toward: 1 | -1, skirt: number): Point[] {
   const steps = 12
   return Array.from({ length: steps + 1 }, (_, i): Point => {
-    const down = (i / steps) * measure.skirt
+    const down = (i / steps) * skirt
     const deep = Math.min(down, length)
     return [hook + toward * Math.sqrt(Math.max(0, length * length - deep * deep)), lineY + down]
   })
@@ -19,12 +19,13 @@ function swing(hook: number, length: number, toward: 1 | -1): Point[] {
 
 /** Ground untied: the cords' ends miss each other, and the lamp drops between their swings. */
 function groundUntied(s: Gap, ng: number, hg: number, { k, xN, xH, frame }: Scale): Part {
-  const [left, right] = [swing(xN, ng * k, 1), swing(xH, hg * k, -1)]
+  const { drop, skirt } = frame.height < measure.tall ? measure.short : measure
+  const [left, right] = [swing(xN, ng * k, 1, skirt), swing(xH, hg * k, -1, skirt)]
   const [a, b]: [Point, Point] = [
     [xN + ng * k, lineY],
     [xH - hg * k, lineY],
   ]
-  const lamp: Point = [(a[0] + b[0]) / 2, lineY + measure.drop]
+  const lamp: Point = [(a[0] + b[0]) / 2, lineY + drop]
   return {
     sides: [rail(xN, xH), cord('ng', [xN, lineY], a), cord('hg', [xH, lineY], b)],
     hooks: hooks(xN, xH),
@@ -34,7 +35,7 @@ function groundUntied(s: Gap, ng: number, hg: number, { k, xN, xH, frame }: Scal
     nodes: [onRail('N', xN), onRail('H', xH), { corner: 'G', at: lamp, loose: true }],
     pull: lamp,
     gap: {
-      at: [lamp[0], Math.min(lineY + measure.skirt + 34, frame.height - 5)],
+      at: [lamp[0], Math.min(lineY + skirt + 34, frame.height - 5)],
       text: s.nowhere ? 'nowhere' : `${inVolts(s.gap)} V missing`,
     },
   }

@@ -18,10 +18,14 @@ export const measure = {
   railY: 40,
   hook: 34,
   node: 17,
+  needle: 24,
+  /** Room for the weight below the lamp. */
+  pull: 44,
+  /** How far the lamp drops, and its skirt is drawn, in a frame at least `tall`; and in a lower one. */
+  tall: 220,
   drop: 58,
   skirt: 96,
-  needle: 24,
-  pull: 44,
+  short: { drop: 44, skirt: 82 },
 } as const
 /** The line the lamp hangs from. */
 export const lineY = measure.railY + measure.hook

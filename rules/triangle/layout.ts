@@ -143,8 +143,10 @@ function lengthsOf(readings: Readings, s: Seat, part: Part): Scene['lengths'] {
   return (part.sides ?? []).flatMap(({ side, line, look }) => {
     const taken = volts(readings[side])
     if (taken === undefined || look === 'dotted') return []
-    if (side === 'hn') return [{ at: middle(line, 0, -12), text: `${exact(taken)} V` }]
-    if (Math.hypot(line[1][0] - line[0][0], line[1][1] - line[0][1]) < 40) return []
+    const length = Math.hypot(line[1][0] - line[0][0], line[1][1] - line[0][1])
+    // Over a short rail the volts stand above the nodes, which would hide them.
+    if (side === 'hn') return [{ at: middle(line, 0, length < 110 ? -22 : -12), text: `${exact(taken)} V` }]
+    if (length < 40) return []
     const hanging = s.kind === 'needle' || (s.kind === 'closed' && !s.taut)
     const aside = hanging ? (side === 'ng' ? -22 : 22) : 0
     return [{ at: middle(line, aside, hanging ? 8 : 24), text: exact(taken) }]

@@ -48,6 +48,15 @@ export const bulbAgainstMeter: Check = ({ observed, amount, nominal, fact }) => 
   return undefined
 }
 
+/** A split phase is bonded in its middle: half on the bulb from one leg’s two wires can’t be. */
+export const bulbOnTwoLegs: Check = ({ fact, legs }) =>
+  legs === 2 && fact('source-bulb.holds') === 'half'
+    ? {
+        because: 'The bulb keeps half both ways: a balanced output, which no 120/240 V source is. Look at what the source is.',
+        again: 'source.bulb.ng.volts',
+      }
+    : undefined
+
 /** Ohms that say the opposite of firm volts at the same receptacle. */
 export const ohmsAgainstVolts: Check = ({ amount, fact }) => {
   const [ng, hg] = [amount('receptacle.ng.ohms'), amount('receptacle.hg.ohms')]

@@ -3,7 +3,7 @@ import type { Facts } from '../../findings/facts.ts'
 import type { Sheet } from '../../findings/sheet.ts'
 import type { Misfit, RankedCause } from '../diagnosis-types.ts'
 import type { Check, Look } from './contradiction.ts'
-import { bulbAgainstMeter, ohmsAgainstVolts, testerAgainstMeter } from './instrument-checks.ts'
+import { bulbAgainstMeter, bulbOnTwoLegs, ohmsAgainstVolts, testerAgainstMeter } from './instrument-checks.ts'
 import { alongTheRun, legs, panelAgainstLegs } from './place-checks.ts'
 import { frequency, oneTriple, tooMany, underLoad } from './volts-checks.ts'
 
@@ -16,6 +16,7 @@ const checks: readonly Check[] = [
   panelAgainstLegs,
   testerAgainstMeter,
   bulbAgainstMeter,
+  bulbOnTwoLegs,
   ohmsAgainstVolts,
   frequency,
 ]
