@@ -17,7 +17,7 @@ export type ReadyRule = {
   facts: readonly string[]
   holds: Holds
 }
-export type Ready = { rules: readonly ReadyRule[]; byId: ReadonlyMap<string, ReadyRule>; engine: Engine }
+export type Ready = { rules: readonly ReadyRule[]; engine: Engine; lastRun: Promise<unknown> }
 
 const made = new WeakMap<Edition, Ready>()
 
@@ -42,16 +42,20 @@ export function ready(edition: Edition): Ready {
       }
     }),
   )
-  const result = { rules, byId: new Map(rules.map((r) => [r.id, r])), engine }
+  const result: Ready = { rules, engine, lastRun: Promise.resolve() }
   made.set(edition, result)
   return result
 }
 
 /** The rules that fire on the facts of one mode, by json-rules-engine, in the edition's order. */
 export async function fire(edition: Edition, facts: Facts): Promise<ReadyRule[]> {
-  const { engine, rules } = ready(edition)
+  const prepared = ready(edition)
+  const { engine, rules } = prepared
   const given = Object.fromEntries([...facts].map(([name, fact]) => [name, fact.value]))
-  const { events } = await engine.run(given)
+  // One engine runs one sheet at a time: the first of two runs to finish would end the other half-way.
+  const run = prepared.lastRun.then(() => engine.run(given))
+  prepared.lastRun = run.catch(() => undefined)
+  const { events } = await run
   const fired = new Set(events.map((e) => e.type))
   return rules.filter((rule) => fired.has(rule.id))
 }

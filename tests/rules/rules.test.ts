@@ -6,7 +6,8 @@ import { deriveFacts } from '../../rules/findings/facts.ts'
 import type { Facts } from '../../rules/findings/facts.ts'
 import { fire, ready } from '../../rules/ranking/engine.ts'
 import catalogue from '../references/catalogue.json' with { type: 'json' }
-import { generator, sheetOf, starter } from '../edition.ts'
+import { diagnose } from '../../rules/ranking/diagnose.ts'
+import { generator, sheetOf, starter, volts } from '../edition.ts'
 import { anyCase } from './any-case.ts'
 
 const rules = starter.file.groups.flatMap((g) => g.rules)
@@ -101,4 +102,12 @@ test('an edition with a rule on an unknown fact, cause or value does not open', 
   expect(() => openEdition(broken)).toThrow(/no-such-cause[\s\S]*no\.such\.fact[\s\S]*maybe/)
   expect(() => openEdition({ ...starter.file, format: 2 })).toThrow(/not an edition/)
   expect(sheetOf(generator, {}).taken).toEqual([])
+})
+
+test('sheets diagnosed at the same time don’t cut each other short', async () => {
+  const sheets = Array.from({ length: 8 }, (_, i) => sheetOf(generator, { ...volts(120, 57 + i, 58 - i), tingle: 'no', extent: 'everything' }))
+  const oneByOne: string[] = []
+  for (const sheet of sheets) oneByOne.push(JSON.stringify(await diagnose(starter, sheet)))
+  const together = await Promise.all(sheets.map((sheet) => diagnose(starter, sheet)))
+  expect(together.map((d) => JSON.stringify(d))).toEqual(oneByOne)
 })
