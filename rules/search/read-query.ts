@@ -44,10 +44,12 @@ function readNumber({ word }: Token): QueryWord {
  * 60 and 600 are two things.
  */
 export function readQuery(query: string, vocabulary: Vocabulary): ReadQuery {
-  const all = tokensOf(query)
+  const typed = tokensOf(query)
+  const stillTyping = !/[\s.,!?]$/.test(query)
+  // One letter of the next word says nothing yet, and must not empty the list.
+  const all = stillTyping && typed.length > 1 && typed.at(-1)!.word.length === 1 ? typed.slice(0, -1) : typed
   const meant = all.filter((token) => !emptyWords.has(token.word))
   const tokens = meant.length > 0 ? meant : all
-  const stillTyping = !/[\s.,!?]$/.test(query)
   const mended: { token: Token; as: string }[] = []
   const words = tokens.map((token, index): QueryWord => {
     if (token.isNumber) return readNumber(token)

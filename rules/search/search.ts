@@ -38,6 +38,8 @@ export type Found = {
 // A symptom in a title or among the words people search for says more than the same word in running text.
 const boost = { title: 5, words: 5, label: 4, body: 1 } as const
 const fields = Object.keys(boost) as (keyof typeof boost)[]
+// People come for something to read and do; a cause or a test is named in it.
+const weightOfKind = { article: 1.3, cause: 1, test: 0.8 } as const
 // A text that holds the whole query beats one that holds it in part, whatever the counts say.
 const leastCovered = 0.6
 const leastOfBest = 0.35
@@ -55,23 +57,29 @@ export function buildIndex(
   tests: readonly Test[],
   procedures: readonly ProceduresFile[] = [],
 ): SearchIndex {
-  const documents = documentsOf(articles, causes, tests, procedures)
+  const all = documentsOf(articles, causes, tests, procedures)
+  const documents = new Map(all.map((document) => [document.key, document]))
   const engine = new MiniSearch<SearchDocument>({
     idField: 'key',
     fields,
     tokenize: (text) => tokensOf(text).map((token) => token.word),
     processTerm: termsOf,
-    searchOptions: { boost, tokenize: (term) => [term], processTerm: (term) => term },
+    searchOptions: {
+      boost,
+      boostDocument: (key: string) => weightOfKind[documents.get(key)!.kind],
+      tokenize: (term) => [term],
+      processTerm: (term) => term,
+    },
   })
-  engine.addAll(documents)
+  engine.addAll(all)
   const written = new Map<string, number>()
-  for (const document of documents)
+  for (const document of all)
     for (const field of fields)
       for (const { word, isNumber } of tokensOf(document[field]))
         if (!isNumber) written.set(word, (written.get(word) ?? 0) + 1)
   const filed = new Set([...written.keys()].map(fileUnder))
   for (const word of tableWords) if (filed.has(fileUnder(word)) && !written.has(word)) written.set(word, 0)
-  return { engine, documents: new Map(documents.map((d) => [d.key, d])), vocabulary: { written, filed } }
+  return { engine, documents, vocabulary: { written, filed } }
 }
 
 const scored = (word: QueryWord): QueryCombination[] => {

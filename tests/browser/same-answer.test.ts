@@ -79,7 +79,9 @@ test('the browser gives the same answer as Node, to the digit', async () => {
   const differs = (JSON.parse(inBrowser) as unknown[]).flatMap((answer, i) => {
     const [there, here] = [JSON.stringify(answer), JSON.stringify(inNode[i])]
     const at = [...here].findIndex((c, k) => there[k] !== c)
-    return there === here ? [] : [{ case: i, here: here.slice(at - 60, at + 60), there: there.slice(at - 60, at + 60) }]
+    return there === here
+      ? []
+      : [{ case: i, here: here.slice(at - 60, at + 60), there: there.slice(at - 60, at + 60) }]
   })
   expect(differs).toEqual([])
 })

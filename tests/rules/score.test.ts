@@ -30,22 +30,37 @@ describe('on the 176 sample cases, flat priors', async () => {
   })
 })
 
-type Told = { id: string; truth: string; asGood?: string[] }
-describe('forty calls as a tech would tell them, field priors', async () => {
-  const calls = (await lines('field.jsonl')) as Told[]
-  test('every cause is among them', () =>
-    expect(starter.causeIds.filter((c) => !calls.some((t) => t.truth === c))).toEqual([]))
-  test('the cause on the invoice leads in 80 of 100 and is in the first three in 93', async () => {
-    let [leads, three] = [0, 0]
-    for (const call of calls) {
-      const answer = await answerCase(starter, call, 'field')
-      if (!('ranking' in answer)) throw new Error(`${call.id}: ${JSON.stringify(answer.error)}`)
-      const good = [call.truth, ...(call.asGood ?? [])]
-      const order = answer.ranking.map((r) => r.cause)
-      if (good.includes(order[0]!)) leads += 1
-      if (order.slice(0, 3).some((c) => good.includes(c))) three += 1
-    }
-    expect(leads / calls.length).toBeGreaterThanOrEqual(0.8)
-    expect(three / calls.length).toBeGreaterThanOrEqual(0.93)
+type Told = { id: string; truth: string; asGood?: string[]; stop?: boolean }
+
+/** Leads, is in the first three, and the calls whose stop was missed or made up. */
+async function scoreTold(calls: readonly Told[]) {
+  let [leads, three] = [0, 0]
+  const wrongStops: string[] = []
+  for (const call of calls) {
+    const answer = await answerCase(starter, call, 'field')
+    if (!('ranking' in answer)) throw new Error(`${call.id}: ${JSON.stringify(answer.error)}`)
+    const good = [call.truth, ...(call.asGood ?? [])]
+    const order = answer.ranking.map((r) => r.cause)
+    if (good.includes(order[0]!)) leads += 1
+    if (order.slice(0, 3).some((c) => good.includes(c))) three += 1
+    if (call.stop !== undefined && answer.stop !== call.stop) wrongStops.push(call.id)
+  }
+  return { leads: leads / calls.length, three: three / calls.length, wrongStops }
+}
+
+describe.each([
+  ['forty calls as a tech would tell them', 'field.jsonl', 40],
+  ['148 calls written blind', 'told.jsonl', 148],
+])('%s, field priors', async (_, name, count) => {
+  const calls = (await lines(name)) as Told[]
+  test('every cause is among them', () => {
+    expect(calls).toHaveLength(count)
+    expect(starter.causeIds.filter((c) => !calls.some((t) => t.truth === c))).toEqual([])
+  })
+  test('the cause on the invoice leads in 80 of 100, is in the first three in 93, and no stop is missed', async () => {
+    const told = await scoreTold(calls)
+    expect(told.leads).toBeGreaterThanOrEqual(0.8)
+    expect(told.three).toBeGreaterThanOrEqual(0.93)
+    expect(told.wrongStops).toEqual([])
   })
 })

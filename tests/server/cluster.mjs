@@ -16,7 +16,10 @@ function sweep() {
     const owner = new RegExp(`^${prefix}(\\d+)-`).exec(name)?.[1]
     if (owner === undefined || existsSync(`/proc/${owner}`)) continue
     try {
-      process.kill(Number(readFileSync(join(tmpdir(), name, 'postgres/postmaster.pid'), 'utf8').split('\n')[0]), 'SIGQUIT')
+      process.kill(
+        Number(readFileSync(join(tmpdir(), name, 'postgres/postmaster.pid'), 'utf8').split('\n')[0]),
+        'SIGQUIT',
+      )
     } catch {
       // It is down already.
     }

@@ -1,0 +1,48 @@
+import { createServer } from 'node:http'
+import type { AddressInfo } from 'node:net'
+import { createApp } from '../../server/app.ts'
+import { openDatabase } from '../../server/database.ts'
+import type { Db } from '../../server/database.ts'
+import { EditionFeed } from '../../server/editions/edition-feed.ts'
+import { followEditions } from '../../server/editions/follow-editions.ts'
+import { openLog } from '../../server/log.ts'
+import type { Log } from '../../server/log.ts'
+
+export type RunningApp = { url: string; db: Db; feed: EditionFeed; close: () => Promise<void> }
+
+export type RunningOptions = {
+  log?: Log
+  /** The built pages; the checkout's `dist` unless said. */
+  pages?: string
+  /** 0 unless said: any free one. */
+  port?: number
+}
+
+/** The whole server on a port of loopback, with a pool and a listener of its own, as one process of several would be. */
+export async function runApp(
+  databaseUrl: string,
+  { log = openLog('silent'), pages, port = 0 }: RunningOptions = {},
+): Promise<RunningApp> {
+  const db = openDatabase(databaseUrl, log)
+  const feed = new EditionFeed()
+  const unfollow = followEditions(databaseUrl, db, feed, log)
+  const { app, close } = createApp({ db, feed, log, config: { trustProxy: 0 }, ...(pages && { pages }) })
+  const server = createServer(app)
+  await new Promise<void>((resolve, reject) => {
+    server.once('error', reject)
+    server.listen(port, '127.0.0.1', resolve)
+  })
+  return {
+    url: `http://127.0.0.1:${(server.address() as AddressInfo).port}`,
+    db,
+    feed,
+    close: async () => {
+      const closed = new Promise((resolve) => server.close(resolve))
+      close()
+      server.closeAllConnections()
+      await closed
+      await unfollow()
+      await db.destroy()
+    },
+  }
+}
