@@ -47,7 +47,9 @@ export function readQuery(query: string, vocabulary: Vocabulary): ReadQuery {
   const typed = tokensOf(query)
   const stillTyping = !/[\s.,!?]$/.test(query)
   // One letter of the next word says nothing yet, and must not empty the list.
-  const all = stillTyping && typed.length > 1 && typed.at(-1)!.word.length === 1 ? typed.slice(0, -1) : typed
+  const last = typed.at(-1)
+  const barelyBegun = stillTyping && typed.length > 1 && last?.word.length === 1 && !last.isNumber
+  const all = barelyBegun ? typed.slice(0, -1) : typed
   const meant = all.filter((token) => !emptyWords.has(token.word))
   const tokens = meant.length > 0 ? meant : all
   const mended: { token: Token; as: string }[] = []

@@ -40,9 +40,9 @@ const boost = { title: 5, words: 5, label: 4, body: 1 } as const
 const fields = Object.keys(boost) as (keyof typeof boost)[]
 // People come for something to read and do; a cause or a test is named in it.
 const weightOfKind = { article: 1.3, cause: 1, test: 0.8 } as const
-// A text that holds the whole query beats one that holds it in part, whatever the counts say.
+// What only brushes the query is left out: less of it, or far less of it than the best has.
 const leastCovered = 0.6
-const leastOfBest = 0.35
+const leastOfBest = { whole: 0.1, part: 0.35 } as const
 
 /** Indexed as written, for beginnings, and as filed, for everything else. */
 const termsOf = (word: string): string[] => [...new Set([word, fileUnder(word)])]
@@ -123,7 +123,9 @@ export function search(index: SearchIndex, query: string, most = 40): Found {
     .filter((result) => result.covered >= leastCovered)
     .sort((a, b) => b.score - a.score || (a.key < b.key ? -1 : 1))
   const best = results[0]?.score ?? 0
-  const kept = results.filter((result) => result.covered === 1 || result.score >= best * leastOfBest)
+  const kept = results.filter(
+    ({ covered, score }) => score >= best * (covered === 1 ? leastOfBest.whole : leastOfBest.part),
+  )
   const matched: Matched = {
     filed: new Set(words.flatMap((word) => [...word.terms, ...word.near])),
     beginnings: words.flatMap((word) => (word.beginning === undefined ? [] : [word.beginning])),

@@ -198,7 +198,8 @@ describe('the words', () => {
   })
   test('nothing fits before anything was found', async () => {
     const verdict = plainVerdict(starter, await diagnose(starter, sheetOf(allNo)))
-    expect(verdict.fits).toEqual([])
+    expect([...verdict.fits, ...verdict.may]).toEqual([])
+    expect(verdict.metalMayBeLive).toBe(false)
   })
   test('two dim lamps on a floating system: something fits or may, and no test opens anything', async () => {
     const diagnosis = await diagnose(starter, sheetOf(halfway))

@@ -23,13 +23,17 @@ const short = fc.stringMatching(/^[abc]{0,5}$/)
 
 describe('slips between two words', () => {
   test('are what the slow way counts', () => {
-    fc.assert(fc.property(short, short, (a, b) => expect(slipsBetween(a, b, 9)).toBe(slowly(a, b))))
+    fc.assert(
+      fc.property(short, short, (a, b) => {
+        expect(slipsBetween(a, b, 9)).toBe(slowly(a, b))
+      }),
+    )
   })
   test('stop being counted one above the most', () => {
     fc.assert(
-      fc.property(short, short, fc.integer({ min: 0, max: 3 }), (a, b, most) =>
-        expect(slipsBetween(a, b, most)).toBe(Math.min(slowly(a, b), most + 1)),
-      ),
+      fc.property(short, short, fc.integer({ min: 0, max: 3 }), (a, b, most) => {
+        expect(slipsBetween(a, b, most)).toBe(Math.min(slowly(a, b), most + 1))
+      }),
     )
   })
 })

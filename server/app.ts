@@ -1,0 +1,52 @@
+import { fileURLToPath } from 'node:url'
+import express from 'express'
+import type { Express } from 'express'
+import { sql } from 'kysely'
+import { articleRoutes } from './articles/articles.routes.ts'
+import type { Config } from './config.ts'
+import type { Db } from './database.ts'
+import { editionEvents } from './editions/edition-events.ts'
+import type { EditionFeed } from './editions/edition-feed.ts'
+import { editionRoutes } from './editions/editions.routes.ts'
+import type { Log } from './log.ts'
+import { noSuchRoute, problems } from './problem.ts'
+import { requestLog } from './request-log.ts'
+import { security } from './security.ts'
+import { site } from './site.ts'
+
+export type AppParts = {
+  db: Db
+  feed: EditionFeed
+  log: Log
+  config: Pick<Config, 'trustProxy'>
+  /** Where the built pages lie; the checkout's `dist` unless said. */
+  pages?: string
+}
+
+const dist = fileURLToPath(new URL('../dist', import.meta.url))
+
+/**
+ * The application as a function of its parts: tests build it too. `close` ends the open event streams, which would
+ * otherwise keep the server from stopping.
+ */
+export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
+  app: Express
+  close: () => void
+} {
+  const events = editionEvents(feed)
+  const app = express()
+  app.disable('x-powered-by')
+  app.set('trust proxy', config.trustProxy)
+  // Bodies here are small and change; only files have tags, and those are their hashes.
+  app.set('etag', false)
+  app.set('query parser', 'simple')
+  app.use(requestLog(log), security())
+  app.get('/api/health', async (_req, res) => {
+    await sql`select 1`.execute(db)
+    res.set('Cache-Control', 'no-store').json({ status: 'up' })
+  })
+  app.use('/api', editionRoutes(db, events.route), articleRoutes(db), noSuchRoute)
+  app.use(site(pages))
+  app.use(problems(log))
+  return { app, close: events.close }
+}

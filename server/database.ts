@@ -1,0 +1,59 @@
+import { Kysely, PostgresDialect } from 'kysely'
+import type { ColumnType, Generated, Transaction } from 'kysely'
+import pg from 'pg'
+import type { Log } from './log.ts'
+
+type Audience = 'everyone' | 'qualified'
+/** Written once, by the database's clock. */
+type Stamp = ColumnType<Date, never, never>
+
+/** The tables, as the migrations leave them. */
+export type Database = {
+  edition: { number: number; hash: string; note: string; made_at: Stamp }
+  edition_file: { edition_number: number; name: string; audience: Audience; hash: string; bytes: Buffer }
+  edition_in_force: { id: Generated<number>; edition_number: number; since: Stamp; reason: string }
+}
+
+export type Db = Kysely<Database>
+export type Tx = Transaction<Database>
+
+/** Opens a pool. Nothing is asked of the server until the first query. */
+export function openDatabase(url: string, log: Log): Db {
+  const pool = new pg.Pool({
+    connectionString: url,
+    max: 10,
+    connectionTimeoutMillis: 5_000,
+    keepAlive: true,
+  })
+  // An idle connection that breaks is replaced at the next query; unheard, the event would end the process.
+  pool.on('error', (error) => log.warn({ reason: error.message }, 'a database connection broke'))
+  return new Kysely<Database>({ dialect: new PostgresDialect({ pool }) })
+}
+
+const downCodes = new Set([
+  'ECONNREFUSED',
+  'ECONNRESET',
+  'EPIPE',
+  'ETIMEDOUT',
+  'ENOTFOUND',
+  '53300', // too many connections
+  '57P01', // admin shutdown
+  '57P02', // crash shutdown
+  '57P03', // starting up
+  '08000',
+  '08003',
+  '08006',
+])
+
+/** Whether an error says that the database can't be reached just now, rather than that we asked it wrongly. */
+export function isDatabaseDown(error: unknown): boolean {
+  if (!(error instanceof Error)) return false
+  const code = (error as { code?: unknown }).code
+  return (
+    (typeof code === 'string' && downCodes.has(code)) ||
+    (error instanceof AggregateError && error.errors.some(isDatabaseDown)) ||
+    /^Connection terminated|^timeout exceeded when trying to connect|^Client has encountered a connection error/.test(
+      error.message,
+    )
+  )
+}

@@ -1,0 +1,27 @@
+import { ArticlesFile, DiagnosisFile } from '../../rules/edition/schema.ts'
+import type { Db } from '../database.ts'
+import type { EditionInForce } from './editions.contract.ts'
+import { openFile } from './editions.queries.ts'
+
+async function count(db: Db, number: number): Promise<EditionInForce['counts']> {
+  const [diagnosis, forEveryone, forQualified] = await Promise.all([
+    openFile(db, number, 'diagnosis').then((file) => DiagnosisFile.parse(file)),
+    openFile(db, number, 'articles-everyone').then((file) => ArticlesFile.parse(file)),
+    openFile(db, number, 'articles-qualified').then((file) => ArticlesFile.parse(file)),
+  ])
+  return {
+    causes: diagnosis.causes.length,
+    tests: diagnosis.tests.length,
+    rules: diagnosis.groups.reduce((sum, group) => sum + group.rules.length, 0),
+    articles: forEveryone.articles.length + forQualified.articles.length,
+  }
+}
+
+/** Counts what an edition holds, once: it never changes. */
+export function editionCounts(db: Db): (number: number) => Promise<EditionInForce['counts']> {
+  let last: { number: number; counts: EditionInForce['counts'] } | undefined
+  return async (number) => {
+    if (last?.number !== number) last = { number, counts: await count(db, number) }
+    return last.counts
+  }
+}

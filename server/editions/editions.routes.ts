@@ -1,0 +1,54 @@
+import { Router } from 'express'
+import type { RequestHandler } from 'express'
+import type { Db } from '../database.ts'
+import { Problem, notFound } from '../problem.ts'
+import { compressedFiles } from './compressed-files.ts'
+import { editionCounts } from './count-edition.ts'
+import { EditionInForce, EditionList } from './editions.contract.ts'
+import { editionInForce, listEditions, listFiles } from './editions.queries.ts'
+
+const year = 31_536_000
+// The smallest first: browsers name gzip before br without meaning it.
+const preferred = ['br', 'gzip'] as const
+
+/** What is in force, what was, and the files. A file's address holds its hash, so that it may be kept for ever. */
+export function editionRoutes(db: Db, events: RequestHandler): Router {
+  const fileOf = compressedFiles(db)
+  const countsOf = editionCounts(db)
+  return Router()
+    .get('/edition', async (_req, res) => {
+      const { since, ...inForce } = (await editionInForce(db)) ?? noneYet()
+      const [files, counts] = await Promise.all([listFiles(db, inForce.number), countsOf(inForce.number)])
+      const answer = EditionInForce.parse({ ...inForce, inForceSince: since.toISOString(), counts, files })
+      res.set('Cache-Control', 'no-cache').json(answer)
+    })
+    .get('/edition/events', events)
+    .get('/editions', async (_req, res) => {
+      const [rows, inForce] = await Promise.all([listEditions(db), editionInForce(db)])
+      const editions = rows.map(({ since, until, ...row }) => ({
+        ...row,
+        since: since?.toISOString() ?? null,
+        until: until?.toISOString() ?? null,
+        inForce: row.number === inForce?.number,
+      }))
+      res.set('Cache-Control', 'no-cache').json(EditionList.parse({ editions }))
+    })
+    .get('/edition-files/:hash', async (req, res) => {
+      const { hash } = req.params
+      const file = /^[0-9a-f]{64}$/.test(hash) ? await fileOf(hash) : undefined
+      if (file === undefined) throw notFound('file')
+      const encoding = preferred.find((one) => req.acceptsEncodings(one) === one) ?? 'identity'
+      res.set({
+        'Cache-Control': `${file.forEveryone ? 'public' : 'private'}, max-age=${year}, immutable`,
+        'Content-Type': 'application/json; charset=utf-8',
+        ETag: `"${hash}${encoding === 'identity' ? '' : `-${encoding}`}"`,
+        Vary: 'Accept-Encoding',
+        ...(encoding === 'identity' ? {} : { 'Content-Encoding': encoding }),
+      })
+      res.send(file.bytes[encoding])
+    })
+}
+
+function noneYet(): never {
+  throw new Problem('unavailable', 'No edition is in force yet.')
+}

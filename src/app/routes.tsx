@@ -1,0 +1,45 @@
+import { Navigate } from 'react-router-dom'
+import type { RouteObject } from 'react-router-dom'
+import { PageError } from './page-error.tsx'
+import { Shell } from './shell.tsx'
+
+const check = () => import('../triage/check.page.tsx')
+const volts = () => import('../triage/volts.page.tsx')
+const result = () => import('../triage/result.page.tsx')
+
+/** The check whole, fetched once the first page stands, so that it works when the network goes. */
+export const bringTriage = () => Promise.all([check(), volts(), result()])
+
+/** Every page, fetched when it is first opened. Loaders never wait for data: pages own waiting, failing, no network. */
+export const routes: RouteObject[] = [
+  {
+    Component: Shell,
+    HydrateFallback: () => null,
+    children: [
+      {
+        ErrorBoundary: PageError,
+        children: [
+          { index: true, lazy: () => import('../front/front.page.tsx') },
+          {
+            path: 'check',
+            lazy: check,
+            children: [
+              { index: true, element: <Navigate to="/check/1" replace /> },
+              { path: 'stop', lazy: async () => ({ Component: (await check()).StopNow }) },
+              { path: 'result', lazy: result },
+              { path: '5', lazy: volts },
+              { path: ':step', lazy: async () => ({ Component: (await check()).Step }) },
+            ],
+          },
+          { path: 'diagnosis', lazy: () => import('../diagnosis/diagnosis.page.tsx') },
+          { path: 'articles', lazy: () => import('../articles/articles.page.tsx') },
+          { path: 'articles/:slug', lazy: () => import('../articles/article.page.tsx') },
+          { path: 'causes/:id', lazy: () => import('../articles/cause.page.tsx') },
+          { path: 'tests/:id', lazy: () => import('../articles/test.page.tsx') },
+          { path: 'editions', lazy: () => import('../editions/editions.page.tsx') },
+          { path: '*', lazy: () => import('./not-found.page.tsx') },
+        ],
+      },
+    ],
+  },
+]

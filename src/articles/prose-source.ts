@@ -1,0 +1,43 @@
+import DOMPurify from 'dompurify'
+import { Marked } from 'marked'
+
+const inText = (text: string) =>
+  text.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;').replaceAll('"', '&quot;')
+
+// Articles are written in Markdown alone: HTML in them is shown as the text it is, pictures as their words.
+const marked = new Marked({
+  gfm: true,
+  renderer: { html: ({ text }) => inText(text), image: ({ text }) => inText(text) },
+})
+
+const tags =
+  'h1 h2 h3 h4 h5 h6 p br hr ul ol li strong em del code pre blockquote a table thead tbody tr th td'
+
+/**
+ * Markdown to a piece of a document that holds these tags, `href` and nothing else. What `prose.tsx` draws is made
+ * anew from it, tag by tag: an article must get past the renderer, the purifier and that list to do harm.
+ */
+export function proseOf(markdown: string): DocumentFragment {
+  return DOMPurify.sanitize(marked.parse(markdown, { async: false }), {
+    ALLOWED_TAGS: tags.split(' '),
+    ALLOWED_ATTR: ['href'],
+    ALLOW_DATA_ATTR: false,
+    ALLOW_ARIA_ATTR: false,
+    RETURN_DOM_FRAGMENT: true,
+  })
+}
+
+export type Target = { kind: 'page'; to: string } | { kind: 'elsewhere'; href: string }
+
+// Only pages that exist: no second slash, no backslash, no tab that a browser would read as one.
+const page =
+  /^\/(?:(?:articles|causes|tests)(?:\/[a-z0-9.-]+)?|check|diagnosis|editions)?(?:\?[\w%=&.+-]*)?(?:#[\w-]*)?$/
+
+/** Where a link in an article leads, or undefined when it leads nowhere that an article may send people. */
+export function targetOf(href: string | null): Target | undefined {
+  if (href === null) return undefined
+  if (page.test(href)) return { kind: 'page', to: href }
+  if (!/^(?:https?:\/\/|mailto:)/i.test(href) || !URL.canParse(href)) return undefined
+  const { protocol, href: whole } = new URL(href)
+  return ['https:', 'http:', 'mailto:'].includes(protocol) ? { kind: 'elsewhere', href: whole } : undefined
+}

@@ -1,0 +1,75 @@
+import { useState } from 'react'
+import { useNavigate } from 'react-router-dom'
+import { useEdition } from '../editions/edition.api.ts'
+import { Button } from '../ui/button.tsx'
+import { Failed } from '../ui/failed.tsx'
+import { Page } from '../ui/page.tsx'
+import { Rail } from '../ui/rail.tsx'
+import { useToast } from '../ui/toast.tsx'
+import { Waiting } from '../ui/waiting.tsx'
+import { NewSheet } from './new-sheet.tsx'
+import { SheetsList } from './sheets-list.tsx'
+import type { Stated } from './use-qualified.ts'
+
+type SheetsPageProps = { stated: Stated; onWithdraw: () => void; onState: () => void }
+
+/** Diagnosis without a sheet open: those on this device, and a new one. */
+export function SheetsPage({ stated, onWithdraw, onState }: SheetsPageProps) {
+  const { status, edition, info, error, retry } = useEdition()
+  const [making, setMaking] = useState(false)
+  const navigate = useNavigate()
+  const say = useToast()
+  const day = new Intl.DateTimeFormat('en-US', { dateStyle: 'medium' }).format(new Date(stated.statedAt))
+  return (
+    <Page title="Diagnosis">
+      <h1>Diagnosis</h1>
+      {status === 'error' && (
+        <Failed title="Couldn’t open the edition." onRetry={retry}>
+          {error?.message} Sheets on this device stay as they are.
+        </Failed>
+      )}
+      {making && edition !== undefined && info !== undefined ? (
+        <NewSheet
+          edition={edition}
+          editionHash={info.hash}
+          onMade={(id) => void navigate(`/diagnosis?sheet=${id}`)}
+          onClose={() => setMaking(false)}
+        />
+      ) : (
+        <Rail
+          title="Findings sheets on this device"
+          className="mt-6"
+          action={
+            <Button
+              look="main"
+              icon="plus"
+              {...(edition === undefined && status !== 'pending'
+                ? { barredBecause: 'The edition must open first.' }
+                : {})}
+              onPress={() => setMaking(true)}
+            >
+              New sheet
+            </Button>
+          }
+        >
+          <div className="mt-3">
+            {making ? <Waiting what="the edition" /> : <SheetsList onNew={() => setMaking(true)} />}
+          </div>
+        </Rail>
+      )}
+      <p className="mt-7 flex flex-wrap items-center gap-x-3 text-small text-ink-2">
+        You stated on {day} that you are qualified.
+        <Button
+          look="plain"
+          size="small"
+          onPress={() => {
+            onWithdraw()
+            say({ text: 'Statement withdrawn', action: { word: 'Undo', onPress: onState } })
+          }}
+        >
+          Withdraw the statement
+        </Button>
+      </p>
+    </Page>
+  )
+}

@@ -1,0 +1,56 @@
+import { useEffect, useMemo, useRef, useState } from 'react'
+import type { Edition } from '../../rules/edition/open.ts'
+import type { FieldErrors } from '../../rules/findings/parse.ts'
+import type { Diagnosis } from '../../rules/ranking/diagnosis-types.ts'
+import { diagnose } from '../../rules/ranking/diagnose.ts'
+import { rawSheetOf, readWhatCanBe } from './raw-sheet.ts'
+import type { SheetContent } from './sheet-content.ts'
+
+export type Live = {
+  /** Of the findings in view, or of those before while these are ranked; undefined before the first. */
+  diagnosis: Diagnosis | undefined
+  /** The one before, to say what moved. */
+  before: Diagnosis | undefined
+  errors: FieldErrors
+  /** Ranking itself failed. */
+  failed: boolean
+}
+
+const gatherMs = 60 // one ranking for keys that come in a burst
+
+/**
+ * The diagnosis of a sheet, computed anew on every change. An answer that comes after newer findings is dropped.
+ */
+export function useDiagnosis(edition: Edition, content: SheetContent): Live {
+  const raw = rawSheetOf(edition, content)
+  // NaN, where the meter's ohms are not typed in full, would be null in JSON: either way the key differs.
+  const key = JSON.stringify(raw)
+  const readable = useMemo(() => readWhatCanBe(edition, raw), [edition, key])
+  const [live, setLive] = useState<Omit<Live, 'errors'>>({
+    diagnosis: undefined,
+    before: undefined,
+    failed: false,
+  })
+  const first = useRef(true)
+  useEffect(() => {
+    let newest = true
+    const { sheet } = readable
+    if (sheet === undefined) return
+    const rank = () =>
+      void diagnose(edition, sheet).then(
+        (diagnosis) => {
+          if (newest) setLive((last) => ({ diagnosis, before: last.diagnosis, failed: false }))
+        },
+        () => {
+          if (newest) setLive((last) => ({ ...last, failed: true }))
+        },
+      )
+    const timer = setTimeout(rank, first.current ? 0 : gatherMs)
+    first.current = false
+    return () => {
+      newest = false
+      clearTimeout(timer)
+    }
+  }, [edition, readable])
+  return { ...live, errors: readable.errors }
+}

@@ -1,0 +1,83 @@
+import { queryOptions, skipToken } from '@tanstack/react-query'
+import type { QueryClient } from '@tanstack/react-query'
+import { EditionInForce } from '../../server/editions/editions.contract.ts'
+import type { FileName } from '../../server/editions/editions.contract.ts'
+import { ArticlesFile, ProceduresFile } from '../../rules/edition/schema.ts'
+import type { Audience } from '../../rules/edition/schema.ts'
+import { openEdition } from '../../rules/edition/open.ts'
+import { get } from '../api.ts'
+import { bringFile, hashOf, readJson } from './edition-file.ts'
+import { keepEdition, readKept } from './kept-editions.ts'
+
+/** A file never changes under its hash, so it is read once and stays. Maps must not be compared piece by piece. */
+const forGood = { staleTime: Infinity, gcTime: Infinity, structuralSharing: false } as const
+/** How long a page waits for the server before it opens with what lies on the device. */
+const patienceMs = 1500
+
+const whenIdle = (run: () => void) =>
+  'requestIdleCallback' in window ? window.requestIdleCallback(run) : setTimeout(run, 1500)
+
+/** What the server says is in force. */
+export const inForceQuery = queryOptions({
+  queryKey: ['edition', 'in-force'] as const,
+  queryFn: async ({ signal }) => {
+    const info = await get('/edition', EditionInForce, signal)
+    // What can't be kept now is kept at the next contact.
+    whenIdle(() => void keepEdition(info).catch(() => undefined))
+    return info
+  },
+  staleTime: 60_000,
+})
+
+async function chooseEdition(client: QueryClient): Promise<EditionInForce> {
+  const asked = client.fetchQuery(inForceQuery)
+  const kept = await readKept()
+  if (kept === undefined) return asked
+  const tired = new Promise<undefined>((resolve) => setTimeout(() => resolve(undefined), patienceMs))
+  return (await Promise.race([asked.catch(() => undefined), tired])) ?? kept.inForce
+}
+
+/**
+ * The edition this tab works with. Chosen once: an edition put in force meanwhile is offered, never slipped under
+ * someone's hands.
+ */
+export const usedQuery = (client: QueryClient) =>
+  queryOptions({
+    queryKey: ['edition', 'used'] as const,
+    queryFn: () => chooseEdition(client),
+    staleTime: Infinity,
+    gcTime: Infinity,
+  })
+
+/** An edition that was in force earlier, if its files lie on this device. */
+export const earlierQuery = (hash: string) =>
+  queryOptions({
+    queryKey: ['edition', 'earlier', hash] as const,
+    queryFn: async () => {
+      const kept = await readKept()
+      return [kept?.inForce, ...(kept?.earlier ?? [])].find((one) => one?.hash === hash) ?? null
+    },
+    staleTime: 0,
+  })
+
+function fileQuery<Content>(
+  info: EditionInForce | undefined,
+  name: FileName,
+  read: (file: unknown) => Content,
+) {
+  return queryOptions({
+    ...forGood,
+    queryKey: ['edition-file', name, info?.files.find((file) => file.name === name)?.hash] as const,
+    queryFn:
+      info === undefined
+        ? skipToken
+        : async ({ signal }) => read(readJson(await bringFile(hashOf(info, name), signal))),
+  })
+}
+
+/** What diagnosis needs, opened. Like the other files it waits where no edition is chosen yet. */
+export const openedQuery = (info: EditionInForce | undefined) => fileQuery(info, 'diagnosis', openEdition)
+export const proceduresQuery = (info: EditionInForce | undefined, audience: Audience) =>
+  fileQuery(info, `procedures-${audience}`, (file) => ProceduresFile.parse(file))
+export const articlesQuery = (info: EditionInForce | undefined, audience: Audience) =>
+  fileQuery(info, `articles-${audience}`, (file) => ArticlesFile.parse(file))
