@@ -10,6 +10,8 @@ export type SearchDocument = {
   kind: Kind
   id: string
   title: string
+  /** Title, label and each symptom by itself: a query that fits into one of them means this. */
+  phrases: readonly string[]
   /** Symptoms and other words people search for. */
   words: string
   label: string
@@ -39,6 +41,7 @@ export function documentsOf(
     kind: 'article',
     id: article.slug,
     title: article.title,
+    phrases: [article.title, ...article.words],
     words: article.words.join('; '),
     label: '',
     body: plainText(article.body ?? ''),
@@ -46,12 +49,14 @@ export function documentsOf(
   }))
   const ofCauses = causes.map((cause): SearchDocument => {
     const said = procedures.flatMap((file) => file.causes).filter((one) => one.cause === cause.id)
+    const words = bySlug.get(cause.id)?.words ?? []
     return {
       key: `cause:${cause.id}`,
       kind: 'cause',
       id: cause.id,
       title: cause.title,
-      words: (bySlug.get(cause.id)?.words ?? []).join('; '),
+      phrases: [cause.title, cause.label, ...words],
+      words: words.join('; '),
       label: cause.label,
       body: join(said.flatMap((one) => [one.means, one.homeowner?.fits, one.danger?.text])),
       audience: 'everyone',
@@ -64,6 +69,7 @@ export function documentsOf(
       kind: 'test',
       id: test.id,
       title: test.title,
+      phrases: [test.title, test.label],
       words: '',
       label: test.label,
       body: join(said.flatMap((one) => [one.shows, one.cannotShow])),

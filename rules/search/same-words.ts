@@ -70,7 +70,7 @@ export const sameWords: readonly { words: readonly string[]; because: string }[]
 ]
 
 /** Words that help where they match and cost nothing where they don't. */
-export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'after'])
+export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'after', 'once'])
 
 /** Words too common to say anything. */
 export const emptyWords: ReadonlySet<string> = new Set(

@@ -17,6 +17,8 @@ export type SearchIndex = {
   engine: MiniSearch<SearchDocument>
   documents: ReadonlyMap<string, SearchDocument>
   vocabulary: Vocabulary
+  /** Each document's phrases as sets of terms. */
+  phrases: ReadonlyMap<string, readonly ReadonlySet<string>[]>
 }
 
 export type Hit = {
@@ -40,6 +42,8 @@ const boost = { title: 5, words: 5, label: 4, body: 1 } as const
 const fields = Object.keys(boost) as (keyof typeof boost)[]
 // People come for something to read and do; a cause or a test is named in it.
 const weightOfKind = { article: 1.3, cause: 1, test: 0.8 } as const
+// Half as much again for a query that fits whole into a title or one symptom.
+const wholePhrase = 1.5
 // What only brushes the query is left out: less of it, or far less of it than the best has.
 const leastCovered = 0.6
 const leastOfBest = { whole: 0.1, part: 0.35 } as const
@@ -79,7 +83,13 @@ export function buildIndex(
         if (!isNumber) written.set(word, (written.get(word) ?? 0) + 1)
   const filed = new Set([...written.keys()].map(fileUnder))
   for (const word of tableWords) if (filed.has(fileUnder(word)) && !written.has(word)) written.set(word, 0)
-  return { engine, documents, vocabulary: { written, filed } }
+  const phrases = new Map(
+    all.map((document) => [
+      document.key,
+      document.phrases.map((phrase) => new Set(tokensOf(phrase).flatMap((token) => termsOf(token.word)))),
+    ]),
+  )
+  return { engine, documents, vocabulary: { written, filed }, phrases }
 }
 
 const scored = (word: QueryWord): QueryCombination[] => {
@@ -98,8 +108,8 @@ const scored = (word: QueryWord): QueryCombination[] => {
 }
 
 /** Whether a document's found terms hold this word of the query. */
-const holds = (word: QueryWord, terms: readonly string[]) =>
-  terms.some(
+const holds = (word: QueryWord, terms: Iterable<string>) =>
+  [...terms].some(
     (term) =>
       word.terms.includes(term) ||
       word.near.includes(term) ||
@@ -118,7 +128,9 @@ export function search(index: SearchIndex, query: string, most = 40): Found {
     .search({ combineWith: 'OR', queries: words.flatMap(scored) })
     .map((result) => {
       const covered = strong.filter((word) => holds(word, result.terms)).length / strong.length
-      return { key: String(result.id), covered, score: result.score * covered ** 2 }
+      const key = String(result.id)
+      const isPhrase = index.phrases.get(key)!.some((phrase) => words.every((word) => holds(word, phrase)))
+      return { key, covered, score: result.score * covered ** 2 * (isPhrase ? wholePhrase : 1) }
     })
     .filter((result) => result.covered >= leastCovered)
     .sort((a, b) => b.score - a.score || (a.key < b.key ? -1 : 1))
