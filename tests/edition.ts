@@ -12,7 +12,13 @@ export const powerStation = { source: 'power-station', system: '120', wiring: 'd
 export const splitPhase = { source: 'utility', system: '120/240', wiring: 'panel' }
 export const european = { source: 'generator', system: '230', wiring: 'panel' }
 
-export type CaseContext = { source: string; system: string; wiring: string; mode?: string; meterOhms?: number }
+export type CaseContext = {
+  source: string
+  system: string
+  wiring: string
+  mode?: string
+  meterOhms?: number
+}
 
 /** A sheet from plain findings; throws where they can't be read, so that a test's slip is not taken for silence. */
 export function sheetOf(

@@ -32,13 +32,26 @@ export function faultsOf(edition: Edition): string[] {
   const { file } = edition
   const faults: string[] = []
   const twice = (what: string, ids: readonly string[]) => {
-    for (const id of ids) if (ids.indexOf(id) !== ids.lastIndexOf(id)) faults.push(`${what} ${id} stands twice`)
+    for (const id of ids)
+      if (ids.indexOf(id) !== ids.lastIndexOf(id)) faults.push(`${what} ${id} stands twice`)
   }
   twice('cause', edition.causeIds)
-  twice('finding', [...file.readings, ...file.observations].map((f) => f.id))
-  twice('test', file.tests.map((t) => t.id))
-  twice('group', file.groups.map((g) => g.id))
-  twice('rule', file.groups.flatMap((g) => g.rules.map((r) => r.id)))
+  twice(
+    'finding',
+    [...file.readings, ...file.observations].map((f) => f.id),
+  )
+  twice(
+    'test',
+    file.tests.map((t) => t.id),
+  )
+  twice(
+    'group',
+    file.groups.map((g) => g.id),
+  )
+  twice(
+    'rule',
+    file.groups.flatMap((g) => g.rules.map((r) => r.id)),
+  )
   const known = factValues(file)
   for (const rule of file.groups.flatMap((g) => g.rules)) {
     for (const cause of Object.keys(rule.says))

@@ -5,7 +5,9 @@
 import * as z from 'zod/mini'
 import { Condition } from './condition.ts'
 
-const id = z.string().check(z.regex(/^[a-z0-9]+([.-][a-z0-9]+)*$/, 'id must be lower case words joined by . or -'))
+const id = z
+  .string()
+  .check(z.regex(/^[a-z0-9]+([.-][a-z0-9]+)*$/, 'id must be lower case words joined by . or -'))
 const text = z.string().check(z.minLength(1, 'must not be empty'))
 const label = z.string().check(z.minLength(1), z.maxLength(24, 'label must have 24 characters or fewer'))
 

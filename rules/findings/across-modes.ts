@@ -4,20 +4,27 @@ import { places } from './fact-names.ts'
 const floats = ['half', 'uneven', 'short', 'far-short', 'nowhere', 'off-line', 'beyond-neutral']
 
 /** Whether ground holds on neutral in a mode, as far as volts, lamps or the source's bulb tell. */
-function bondedIn(facts: ReadonlyMap<string, Fact>): { bonded: boolean; from: readonly string[] } | undefined {
+function bondedIn(
+  facts: ReadonlyMap<string, Fact>,
+): { bonded: boolean; from: readonly string[] } | undefined {
   for (const place of [...places].reverse()) {
     const pattern = facts.get(`${place}.pattern`)
     if (pattern?.value === 'on-neutral') return { bonded: true, from: pattern.from }
-    if (pattern !== undefined && floats.includes(String(pattern.value))) return { bonded: false, from: pattern.from }
+    if (pattern !== undefined && floats.includes(String(pattern.value)))
+      return { bonded: false, from: pattern.from }
   }
   for (const place of places) {
     const ng = facts.get(`${place}.ng.alone`)
     if (ng?.value === 'nil') return { bonded: true, from: ng.from }
-    if (ng !== undefined && ['part', 'half', 'trace'].includes(String(ng.value))) return { bonded: false, from: ng.from }
+    if (ng !== undefined && ['part', 'half', 'trace'].includes(String(ng.value)))
+      return { bonded: false, from: ng.from }
   }
   const lamps = facts.get('tester.lamps')
   if (lamps?.value === 'lit/lit/dark') return { bonded: true, from: lamps.from }
-  if (lamps !== undefined && ['lit/dim/dim', 'lit/dark/dark', 'lit/dim/dark', 'lit/dark/dim'].includes(String(lamps.value)))
+  if (
+    lamps !== undefined &&
+    ['lit/dim/dim', 'lit/dark/dark', 'lit/dim/dark', 'lit/dark/dim'].includes(String(lamps.value))
+  )
     return { bonded: false, from: lamps.from }
   const plug = facts.get('gfci.plug-test')
   return plug && { bonded: plug.value === 'trips', from: plug.from }

@@ -28,8 +28,12 @@ export function deadFacts(f: Findings, say: Say): void {
   }
   const insulation = f.amount('branch.insulation.megohms')
   if (insulation !== undefined)
-    say('insulation.band', insulation < 1 ? 'poor' : insulation < 5 ? 'fair' : 'good', ['branch.insulation.megohms'])
+    say('insulation.band', insulation < 1 ? 'poor' : insulation < 5 ? 'fair' : 'good', [
+      'branch.insulation.megohms',
+    ])
   const loop = f.amount('receptacle.loop.ohms')
   if (loop !== undefined)
-    say('loop.band', loop < 1.5 ? 'low' : loop < 5 ? 'raised' : loop < 500 ? 'rods' : 'open', ['receptacle.loop.ohms'])
+    say('loop.band', loop < 1.5 ? 'low' : loop < 5 ? 'raised' : loop < 500 ? 'rods' : 'open', [
+      'receptacle.loop.ohms',
+    ])
 }

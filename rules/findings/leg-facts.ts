@@ -32,7 +32,12 @@ export function legFacts(f: Findings, say: Say): void {
   const [g1, g2] = [f.amount('panel.l1g.volts'), f.amount('panel.l2g.volts')]
   if (g1 !== undefined && g2 !== undefined) {
     const [low, high] = [Math.min(g1, g2) / n, Math.max(g1, g2) / n]
-    const word = low < 0.1 && high > 0.7 ? 'one-on-ground' : high - low > (f.edges['legs-apart'] ?? 0) ? 'apart' : 'equal'
+    const word =
+      low < 0.1 && high > 0.7
+        ? 'one-on-ground'
+        : high - low > (f.edges['legs-apart'] ?? 0)
+          ? 'apart'
+          : 'equal'
     say('legs.ground', word, ['panel.l1g.volts', 'panel.l2g.volts'])
   }
 }

@@ -36,7 +36,8 @@ const feederEnds = ['source.hn.volts', 'source.ng.volts', 'panel.hn.volts', 'pan
 /** The same share for the feeder, from the house's own load: where the bond is in the panel, the source shows it. */
 function feederRise(f: Findings, say: Say): void {
   const [sourceHn, sourceNg, panelHn, panelNg] = feederEnds.map((id) => f.amount(id))
-  if (sourceHn === undefined || sourceNg === undefined || panelHn === undefined || panelNg === undefined) return
+  if (sourceHn === undefined || sourceNg === undefined || panelHn === undefined || panelNg === undefined)
+    return
   const fall = sourceHn - panelHn
   const bonded = Math.min(sourceNg, panelNg) / f.nominalVolts < 0.01
   if (bonded && panelHn > 0.5 * f.nominalVolts && fall / f.nominalVolts >= (f.edges['rise-readable'] ?? 0))
@@ -79,7 +80,14 @@ export function loadFacts(f: Findings, say: Say): void {
     ['branch', receptacle && panel && receptacle.volts - panel.volts],
   ] as const
   const known = spans.filter((s): s is [(typeof s)[0], number] => s[1] !== undefined)
-  const worst = known.reduce<(typeof known)[number] | undefined>((w, s) => (w && w[1] >= s[1] ? w : s), undefined)
+  const worst = known.reduce<(typeof known)[number] | undefined>(
+    (w, s) => (w && w[1] >= s[1] ? w : s),
+    undefined,
+  )
   if (known.length >= 2 && worst && worst[1] / f.nominalVolts >= (f.edges['drop-much'] ?? 0) / 2)
-    say('drop.sits', worst[0], Object.values(falls).flatMap((d) => d.from))
+    say(
+      'drop.sits',
+      worst[0],
+      Object.values(falls).flatMap((d) => d.from),
+    )
 }

@@ -19,7 +19,9 @@ function readContext(edition: Edition, raw: unknown, errors: FieldErrors): Conte
     const ids = [...known]
     if (typeof value === 'string' && ids.includes(value)) return value
     errors[`context.${field}`] =
-      value === undefined ? `${field} is missing: one of ${listed(ids)}` : `${field} must be one of ${listed(ids)}`
+      value === undefined
+        ? `${field} is missing: one of ${listed(ids)}`
+        : `${field} must be one of ${listed(ids)}`
     return ids[0] ?? ''
   }
   const source = one('source', edition.sources.keys())
@@ -44,9 +46,11 @@ function readAmount(raw: unknown, detailed: boolean): Amount | string {
   }
   if (!detailed || !isObject(raw)) return raw === null ? 'must be a number, not null' : 'must be a number'
   const own = raw['meterOhms']
-  if (own !== undefined && !(isNumber(own) && own > 0)) return 'the instrument’s resistance must be above 0 ohms'
+  if (own !== undefined && !(isNumber(own) && own > 0))
+    return 'the instrument’s resistance must be above 0 ohms'
   const meter = isNumber(own) ? { meterOhms: own } : {}
-  if (raw['overLimit'] === true) return { value: overLimitOhms, overLimit: true, between: undefined, ...meter }
+  if (raw['overLimit'] === true)
+    return { value: overLimitOhms, overLimit: true, between: undefined, ...meter }
   const between = raw['between']
   if (Array.isArray(between)) {
     const [a, b] = between as unknown[]
@@ -139,8 +143,7 @@ export function readSheet(edition: Edition, raw: unknown): Read {
 }
 
 export type ReadCase =
-  | { ok: true; id: string; sheet: Sheet }
-  | { ok: false; id: string | null; errors: FieldErrors }
+  { ok: true; id: string; sheet: Sheet } | { ok: false; id: string | null; errors: FieldErrors }
 
 /** Reads one line of a case file (`contract.md`, "Reading a case"): every reading is a plain number. */
 export function readCase(edition: Edition, raw: unknown): ReadCase {

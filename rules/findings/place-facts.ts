@@ -32,7 +32,11 @@ export function placeFacts(f: Findings, say: Say): void {
       say(`${place}.meter`, weightOf(Math.min(...taken.map((t) => f.meterOhms(t.id))), f.edges), [])
     const [hn, hg, ng] = ids.map(([, id]) => f.amount(id))
     if (hn !== undefined && hg !== undefined && ng !== undefined)
-      say(`${place}.pattern`, patternOf(hn, hg, ng, f.nominalVolts, f.edges), taken.map((t) => t.id))
+      say(
+        `${place}.pattern`,
+        patternOf(hn, hg, ng, f.nominalVolts, f.edges),
+        taken.map((t) => t.id),
+      )
   }
   for (const [place, before] of againstBefore) {
     const here = f.amount(`${place}.hn.volts`)

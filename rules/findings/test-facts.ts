@@ -7,7 +7,11 @@ const lamps = ['tester.hn-lamp', 'tester.hg-lamp', 'tester.ng-lamp'] as const
 function bulbState(volts: number | undefined, look: string | undefined, f: Findings): string | undefined {
   if (volts === undefined) return look
   const part = volts / f.nominalVolts
-  return part <= (f.edges['bulb-dim'] ?? 0) ? 'dark' : part <= (f.edges['bulb-bright'] ?? 0) ? 'dim' : 'bright'
+  return part <= (f.edges['bulb-dim'] ?? 0)
+    ? 'dark'
+    : part <= (f.edges['bulb-bright'] ?? 0)
+      ? 'dim'
+      : 'bright'
 }
 
 function sourceBulb(f: Findings, say: Say): void {
@@ -45,7 +49,14 @@ export function testFacts(f: Findings, say: Say): void {
 
   const [own, plug] = [f.observed('gfci.own-test'), f.observed('gfci.plug-test')]
   if (own !== undefined && plug !== undefined) {
-    const word = own === 'trips' ? (plug === 'trips' ? 'both-trip' : 'own-only') : plug === 'trips' ? 'plug-only' : 'neither'
+    const word =
+      own === 'trips'
+        ? plug === 'trips'
+          ? 'both-trip'
+          : 'own-only'
+        : plug === 'trips'
+          ? 'plug-only'
+          : 'neither'
     say('gfci.buttons', word, ['gfci.own-test', 'gfci.plug-test'])
   }
   const ms = f.amount('gfci.trip.milliseconds')

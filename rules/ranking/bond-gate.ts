@@ -72,14 +72,26 @@ function linesIn(h: Here, against: string | undefined): BondLine[] {
       met: dark(ng) && dark(hg),
       says: `Test bulb at the source’s terminals: ${h.limit} V or less across it, neutral–ground and hot–ground`,
     },
-    { line: 2, met: (least(hn) ?? 0) >= 0.9 * h.nominal, says: 'Hot–neutral stayed up while the bulb hung there' },
-    { line: 3, met: h.observed('bulb.proved') === 'yes', says: 'Bulb proved on hot–neutral before and after' },
+    {
+      line: 2,
+      met: (least(hn) ?? 0) >= 0.9 * h.nominal,
+      says: 'Hot–neutral stayed up while the bulb hung there',
+    },
+    {
+      line: 3,
+      met: h.observed('bulb.proved') === 'yes',
+      says: 'Bulb proved on hot–neutral before and after',
+    },
     {
       line: 4,
       met: h.observed('instructions.bond') === 'allowed',
       says: 'The manufacturer’s instructions allow a bond there',
     },
-    { line: 5, met: against === undefined, says: against ?? 'Nothing found, in any mode, speaks of a tie already there' },
+    {
+      line: 5,
+      met: against === undefined,
+      says: against ?? 'Nothing found, in any mode, speaks of a tie already there',
+    },
   ]
 }
 
@@ -96,5 +108,9 @@ export function bondGate(edition: Edition, sheet: Sheet): Bond {
     return { mode, lines, met: lines.filter((l) => l.met).length }
   })
   const best = tried.reduce((a, b) => (b.met > a.met ? b : a))
-  return { state: best.met === best.lines.length ? 'released' : 'held-back', mode: best.mode, lines: best.lines }
+  return {
+    state: best.met === best.lines.length ? 'released' : 'held-back',
+    mode: best.mode,
+    lines: best.lines,
+  }
 }

@@ -23,8 +23,7 @@ export async function diagnose(
 ): Promise<Diagnosis> {
   const facts = deriveFacts(edition, sheet)
   const fired: Fired[] = []
-  for (const [mode, own] of facts)
-    for (const rule of await fire(edition, own)) fired.push({ rule, mode })
+  for (const [mode, own] of facts) for (const rule of await fire(edition, own)) fired.push({ rule, mode })
   const ranked = rank(edition, sheet, facts, fired, options.priors ?? 'field')
   return {
     ranking: ranked.ranking,

@@ -30,7 +30,8 @@ const answers: readonly [string, string, string][] = [
 ]
 
 function* answersThatStop({ value, system }: Look): Generator<Says> {
-  for (const [finding, answer, id] of answers) if (value(finding) === answer) yield { id, findings: [finding] }
+  for (const [finding, answer, id] of answers)
+    if (value(finding) === answer) yield { id, findings: [finding] }
   if (value('heat') === 'warm' && value('buzz') === 'yes')
     yield { id: 'heat-warm-and-buzz', findings: ['heat', 'buzz'] }
   if (value('lights') === 'some-bright-some-dim' && system === '120/240')

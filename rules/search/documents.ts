@@ -14,6 +14,8 @@ export type SearchDocument = {
   phrases: readonly string[]
   /** Symptoms and other words people search for. */
   words: string
+  /** Symptoms of the article that bears a cause's name: the article itself goes before its cause. */
+  borrowed: string
   label: string
   body: string
   audience: Audience
@@ -43,20 +45,21 @@ export function documentsOf(
     title: article.title,
     phrases: [article.title, ...article.words],
     words: article.words.join('; '),
+    borrowed: '',
     label: '',
     body: plainText(article.body ?? ''),
     audience: article.audience,
   }))
   const ofCauses = causes.map((cause): SearchDocument => {
     const said = procedures.flatMap((file) => file.causes).filter((one) => one.cause === cause.id)
-    const words = bySlug.get(cause.id)?.words ?? []
     return {
       key: `cause:${cause.id}`,
       kind: 'cause',
       id: cause.id,
       title: cause.title,
-      phrases: [cause.title, cause.label, ...words],
-      words: words.join('; '),
+      phrases: [cause.title, cause.label],
+      words: '',
+      borrowed: (bySlug.get(cause.id)?.words ?? []).join('; '),
       label: cause.label,
       body: join(said.flatMap((one) => [one.means, one.homeowner?.fits, one.danger?.text])),
       audience: 'everyone',
@@ -71,6 +74,7 @@ export function documentsOf(
       title: test.title,
       phrases: [test.title, test.label],
       words: '',
+      borrowed: '',
       label: test.label,
       body: join(said.flatMap((one) => [one.shows, one.cannotShow])),
       audience: test.who === 'anyone' ? 'everyone' : 'qualified',

@@ -45,6 +45,10 @@ export const sameWords: readonly { words: readonly string[]; because: string }[]
   { words: ['utility', 'grid', 'mains'], because: 'The power company’s supply.' },
   { words: ['clamp', 'clampmeter'], because: 'Written together or apart.' },
   { words: ['meter', 'multimeter', 'dmm'], because: 'The same instrument.' },
+  {
+    words: ['instant', 'instantly', 'immediately', 'once'],
+    because: 'A breaker that trips at once trips the instant it is reset.',
+  },
   { words: ['leg', 'phase'], because: 'Split phase has legs; people say phase.' },
   {
     words: [
@@ -70,7 +74,7 @@ export const sameWords: readonly { words: readonly string[]; because: string }[]
 ]
 
 /** Words that help where they match and cost nothing where they don't. */
-export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'after', 'once'])
+export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'after'])
 
 /** Words too common to say anything. */
 export const emptyWords: ReadonlySet<string> = new Set(

@@ -17,9 +17,11 @@ export type SearchIndex = {
   engine: MiniSearch<SearchDocument>
   documents: ReadonlyMap<string, SearchDocument>
   vocabulary: Vocabulary
-  /** Each document's phrases as sets of terms. */
-  phrases: ReadonlyMap<string, readonly ReadonlySet<string>[]>
+  phrases: ReadonlyMap<string, readonly Phrase[]>
 }
+
+/** A title, a label or a symptom: as it is written, and its terms. */
+type Phrase = { written: string; terms: ReadonlySet<string> }
 
 export type Hit = {
   kind: Kind
@@ -38,12 +40,12 @@ export type Found = {
 }
 
 // A symptom in a title or among the words people search for says more than the same word in running text.
-const boost = { title: 5, words: 5, label: 4, body: 1 } as const
+const boost = { title: 5, words: 5, label: 4, borrowed: 2, body: 1 } as const
 const fields = Object.keys(boost) as (keyof typeof boost)[]
 // People come for something to read and do; a cause or a test is named in it.
 const weightOfKind = { article: 1.3, cause: 1, test: 0.8 } as const
-// Half as much again for a query that fits whole into a title or one symptom.
-const wholePhrase = 1.5
+// For a query that fits whole into a title or one symptom, and for one that is it, word by word.
+const phraseTimes = { within: 1.5, same: 4 } as const
 // What only brushes the query is left out: less of it, or far less of it than the best has.
 const leastCovered = 0.6
 const leastOfBest = { whole: 0.1, part: 0.35 } as const
@@ -86,11 +88,19 @@ export function buildIndex(
   const phrases = new Map(
     all.map((document) => [
       document.key,
-      document.phrases.map((phrase) => new Set(tokensOf(phrase).flatMap((token) => termsOf(token.word)))),
+      document.phrases.map((phrase) => ({
+        written: asWritten(phrase),
+        terms: new Set(tokensOf(phrase).flatMap((token) => termsOf(token.word))),
+      })),
     ]),
   )
   return { engine, documents, vocabulary: { written, filed }, phrases }
 }
+
+const asWritten = (text: string) =>
+  tokensOf(text)
+    .map((token) => token.word)
+    .join(' ')
 
 const scored = (word: QueryWord): QueryCombination[] => {
   const weight = word.weak ? 0.3 : 1
@@ -123,20 +133,26 @@ const holds = (word: QueryWord, terms: Iterable<string>) =>
 export function search(index: SearchIndex, query: string, most = 40): Found {
   const { words, readAs } = readQuery(query, index.vocabulary)
   if (words.length === 0) return { total: 0, hits: [], readAs: undefined }
+  const whole = asWritten(readAs ?? query)
   const strong = words.some((word) => !word.weak) ? words.filter((word) => !word.weak) : words
   const results = index.engine
     .search({ combineWith: 'OR', queries: words.flatMap(scored) })
     .map((result) => {
       const covered = strong.filter((word) => holds(word, result.terms)).length / strong.length
       const key = String(result.id)
-      const isPhrase = index.phrases.get(key)!.some((phrase) => words.every((word) => holds(word, phrase)))
-      return { key, covered, score: result.score * covered ** 2 * (isPhrase ? wholePhrase : 1) }
+      const phrases = index.phrases.get(key) ?? []
+      const times = phrases.some((phrase) => phrase.written === whole)
+        ? phraseTimes.same
+        : phrases.some((phrase) => words.every((word) => holds(word, phrase.terms)))
+          ? phraseTimes.within
+          : 1
+      return { key, covered, base: result.score * covered ** 2, times }
     })
     .filter((result) => result.covered >= leastCovered)
-    .sort((a, b) => b.score - a.score || (a.key < b.key ? -1 : 1))
-  const best = results[0]?.score ?? 0
+    .sort((a, b) => b.base * b.times - a.base * a.times || (a.key < b.key ? -1 : 1))
+  const best = Math.max(0, ...results.map((result) => result.base))
   const kept = results.filter(
-    ({ covered, score }) => score >= best * (covered === 1 ? leastOfBest.whole : leastOfBest.part),
+    ({ covered, base }) => base >= best * (covered === 1 ? leastOfBest.whole : leastOfBest.part),
   )
   const matched: Matched = {
     filed: new Set(words.flatMap((word) => [...word.terms, ...word.near])),
@@ -144,11 +160,12 @@ export function search(index: SearchIndex, query: string, most = 40): Found {
   }
   const hits = kept.slice(0, most).map(({ key }): Hit => {
     const found = index.documents.get(key)!
+    const symptoms = found.words + found.borrowed
     return {
       kind: found.kind,
       id: found.id,
       title: markAll(found.title, matched),
-      snippet: excerpt(isIn(found.body, matched) || found.words === '' ? found.body : found.words, matched),
+      snippet: excerpt(isIn(found.body, matched) || symptoms === '' ? found.body : symptoms, matched),
       audience: found.audience,
     }
   })

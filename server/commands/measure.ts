@@ -41,7 +41,9 @@ const fullCase = {
     onset: 'only-on-battery',
     tingle: 'no',
   },
-  otherModes: { 'pass-through': { 'receptacle.hn.volts': 121, 'receptacle.hg.volts': 120.8, 'receptacle.ng.volts': 0.3 } },
+  otherModes: {
+    'pass-through': { 'receptacle.hn.volts': 121, 'receptacle.hg.volts': 120.8, 'receptacle.ng.volts': 0.3 },
+  },
 }
 
 async function median(runs: number, work: () => Promise<unknown>): Promise<number> {
@@ -86,8 +88,18 @@ const rank2000 = (performance.now() - start) / 1000
 
 const row = (what: string, figure: string, ratio: string) =>
   console.log(`${what.padEnd(58)}${figure.padStart(12)}   ${ratio}`)
-console.log(`${rules} rules, ${edition.tests.size} tests, ${sheet.taken.length} findings in ${facts.length} modes\n`)
+console.log(
+  `${rules} rules, ${edition.tests.size} tests, ${sheet.taken.length} findings in ${facts.length} modes\n`,
+)
 row('what', 'median', 'against the bare engine')
 row('json-rules-engine alone, the same rules and facts', `${raw.toFixed(2)} ms`, '1.0')
-row('ranking, evidence, misfit, bond gate and all next tests', `${whole.toFixed(2)} ms`, (whole / raw).toFixed(1))
-row('2,000 full cases through the command line’s answer', `${rank2000.toFixed(1)} s`, ((rank2000 * 1000) / many / raw).toFixed(1))
+row(
+  'ranking, evidence, misfit, bond gate and all next tests',
+  `${whole.toFixed(2)} ms`,
+  (whole / raw).toFixed(1),
+)
+row(
+  '2,000 full cases through the command line’s answer',
+  `${rank2000.toFixed(1)} s`,
+  ((rank2000 * 1000) / many / raw).toFixed(1),
+)

@@ -14,7 +14,9 @@ process.stdout.on('error', (fault: NodeJS.ErrnoException) => {
 async function main(): Promise<number> {
   const args = readArguments(process.argv.slice(2), 1)
   if (args === undefined) {
-    console.error('usage: npm run -s rank -- FILE [--priors flat|field]   (FILE: JSON Lines, - for standard input)')
+    console.error(
+      'usage: npm run -s rank -- FILE [--priors flat|field]   (FILE: JSON Lines, - for standard input)',
+    )
     return badUsage
   }
   const lines = await readLines(args.files[0] ?? '-', callFolder()).catch((cause: unknown) => {

@@ -5,15 +5,7 @@ import type { Priors } from '../../rules/ranking/weigh.ts'
 /** Findings a cut leaves; the context stays whole. `call` keeps everything. */
 export type Cut = 'kit' | 'meter' | 'call'
 
-const kit = [
-  'tester.hn-lamp',
-  'tester.hg-lamp',
-  'tester.ng-lamp',
-  'lights',
-  'extent',
-  'onset',
-  'tingle',
-]
+const kit = ['tester.hn-lamp', 'tester.hg-lamp', 'tester.ng-lamp', 'lights', 'extent', 'onset', 'tingle']
 const meter = [...kit, 'receptacle.hn.volts', 'receptacle.hg.volts', 'receptacle.ng.volts']
 
 type Raw = Record<string, unknown>
@@ -24,7 +16,9 @@ export function cutCase(raw: unknown, cut: Cut): unknown {
   if (cut === 'call' || !isObject(raw)) return raw
   const keep = new Set(cut === 'kit' ? kit : meter)
   const only = (findings: unknown) =>
-    isObject(findings) ? Object.fromEntries(Object.entries(findings).filter(([id]) => keep.has(id))) : findings
+    isObject(findings)
+      ? Object.fromEntries(Object.entries(findings).filter(([id]) => keep.has(id)))
+      : findings
   const others = raw['otherModes']
   return {
     ...raw,

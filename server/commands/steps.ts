@@ -45,7 +45,9 @@ export async function stepsOf(
   const start = readCase(edition, cutCase(raw, 'kit'))
   if (!whole.ok || !start.ok) return undefined
   const choose = order === 'next' ? byNextTest : byFixedOrder
-  const rest = new Map(whole.sheet.taken.filter((t) => t.mode === whole.sheet.context.mode).map((t) => [t.id, t]))
+  const rest = new Map(
+    whole.sheet.taken.filter((t) => t.mode === whole.sheet.context.mode).map((t) => [t.id, t]),
+  )
   for (const t of start.sheet.taken) rest.delete(t.id)
   const truth = (raw as { truth?: unknown }).truth
   const wiring = whole.sheet.context.wiring

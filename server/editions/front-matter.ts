@@ -31,6 +31,7 @@ const unquoted = (value: string) => value.trim().replace(/^(['"])(.*)\1$/, '$2')
  */
 export function parseArticle(file: string): Article {
   const parts = /^---\n([\s\S]*?)\n---\n([\s\S]*)$/.exec(file.replaceAll('\r\n', '\n'))
-  if (parts?.[1] === undefined || parts[2] === undefined) throw new Error('an article begins with front matter')
+  if (parts?.[1] === undefined || parts[2] === undefined)
+    throw new Error('an article begins with front matter')
   return Article.parse({ ...readHead(parts[1]), body: parts[2].trim() })
 }

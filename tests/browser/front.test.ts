@@ -74,7 +74,7 @@ test('the menu opens with its word, leads on, and closes with Escape', async () 
   await menu.click()
   await articles.click()
   await page.waitForURL('**/articles')
-  expect(await menu.getAttribute('aria-expanded')).toBe('false')
+  await expect.poll(() => menu.getAttribute('aria-expanded')).toBe('false')
   await end()
 })
 

@@ -27,7 +27,10 @@ function rank(args: string[], input = ''): Promise<Run> {
     run.stderr.on('data', (chunk: Buffer) => (words += chunk.toString()))
     run.on('error', fail)
     run.on('close', (code) => {
-      const lines = out.split('\n').filter((l) => l !== '').map((l) => JSON.parse(l) as Record<string, unknown>)
+      const lines = out
+        .split('\n')
+        .filter((l) => l !== '')
+        .map((l) => JSON.parse(l) as Record<string, unknown>)
       done({ code, lines, words })
     })
     run.stdin.end(input)
@@ -49,14 +52,27 @@ describe('npm run -s rank', () => {
     expect(Object.keys(lines[0]!).sort()).toEqual(['bond', 'id', 'misfit', 'nextTests', 'ranking', 'stop'])
     expect(Object.keys(lines[1]!['error'] as object)).toEqual([''])
     expect(Object.keys(lines[2]!['error'] as object)).toEqual([''])
-    expect(Object.keys(lines[3]!['error'] as object).sort()).toEqual(['context.source', 'context.system', 'context.wiring'])
+    expect(Object.keys(lines[3]!['error'] as object).sort()).toEqual([
+      'context.source',
+      'context.system',
+      'context.wiring',
+    ])
     const ranking = lines[4]!['ranking'] as { cause: string; share: number }[]
     expect(ranking.map((r) => r.cause).sort()).toEqual([...starter.causeIds].sort())
     expect(Math.abs(ranking.reduce((a, r) => a + r.share, 0) - 1)).toBeLessThan(1e-9)
   })
 
   test('reads standard input; ranking and next tests come with stop and misfit too', async () => {
-    const live = { id: 'x', context, findings: { tingle: 'yes', 'receptacle.hn.volts': 120, 'receptacle.hg.volts': 120, 'receptacle.ng.volts': 120 } }
+    const live = {
+      id: 'x',
+      context,
+      findings: {
+        tingle: 'yes',
+        'receptacle.hn.volts': 120,
+        'receptacle.hg.volts': 120,
+        'receptacle.ng.volts': 120,
+      },
+    }
     const { code, lines } = await rank(['-', '--priors', 'flat'], JSON.stringify(live))
     expect(code).toBe(0)
     expect(lines).toHaveLength(1)

@@ -7,7 +7,11 @@ import { starter } from '../edition.ts'
 
 test('from the kit, the next test gets there in fewer steps than one fixed order, and as often right', async () => {
   const text = await readFile(new URL('../cases/sample-b.jsonl', import.meta.url), 'utf8')
-  const cases = text.trim().split('\n').map(parseLine).filter((_, i) => i % 2 === 0)
+  const cases = text
+    .trim()
+    .split('\n')
+    .map(parseLine)
+    .filter((_, i) => i % 2 === 0)
   const sum = { next: 0, fixed: 0, nextRight: 0, fixedRight: 0 }
   for (const raw of cases) {
     const next = await stepsOf(starter, raw, 'flat', 'next')

@@ -13,7 +13,9 @@ const number = fc.oneof(
 )
 
 /** A context and a handful of findings that it allows, in random order. */
-export function anyCase(edition: Edition): fc.Arbitrary<{ context: CaseContext; findings: Record<string, number | string> }> {
+export function anyCase(
+  edition: Edition,
+): fc.Arbitrary<{ context: CaseContext; findings: Record<string, number | string> }> {
   const context = fc.record({
     source: fc.constantFrom(...edition.sources.keys()),
     system: fc.constantFrom(...edition.systems.keys()),
@@ -25,10 +27,17 @@ export function anyCase(edition: Edition): fc.Arbitrary<{ context: CaseContext; 
       .filter((r) => fitsContext(r, where))
       .map((r) => fc.tuple(fc.constant(r.id), number as fc.Arbitrary<number | string>))
     const observations = edition.file.observations.map((o) =>
-      fc.tuple(fc.constant(o.id), fc.constantFrom(...o.values.map((v) => v.id)) as fc.Arbitrary<number | string>),
+      fc.tuple(
+        fc.constant(o.id),
+        fc.constantFrom(...o.values.map((v) => v.id)) as fc.Arbitrary<number | string>,
+      ),
     )
     return fc
-      .uniqueArray(fc.oneof(...readings, ...observations), { selector: ([id]) => id, minLength: 0, maxLength: 14 })
+      .uniqueArray(fc.oneof(...readings, ...observations), {
+        selector: ([id]) => id,
+        minLength: 0,
+        maxLength: 14,
+      })
       .map((entries) => ({ context: where, findings: Object.fromEntries(entries) }))
   })
 }

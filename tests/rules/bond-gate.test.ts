@@ -51,14 +51,21 @@ describe('five lines release installing a bond, and nothing less', () => {
     expect(state(halves)).toBe('released')
   })
   test('4 V are allowed on 230 V systems', () => {
-    const on230 = { ...five, 'source.bulb.ng.volts': 3.9, 'source.bulb.hg.volts': 3.9, 'source.bulb.hn.volts': 229 }
+    const on230 = {
+      ...five,
+      'source.bulb.ng.volts': 3.9,
+      'source.bulb.hg.volts': 3.9,
+      'source.bulb.hn.volts': 229,
+    }
     expect(state(on230, european)).toBe('released')
     expect(state({ ...on230, 'source.bulb.hg.volts': 4.1 }, european)).toBe('held-back')
   })
   test('the lines must hold in one mode: half of them in each of two modes release nothing', () => {
     const inverter = { source: 'all-in-one-inverter', system: '120', wiring: 'panel', mode: 'battery' }
     const { 'bulb.proved': proved, 'instructions.bond': allowed, ...bulb } = five
-    expect(state(bulb, inverter, { 'pass-through': { 'bulb.proved': proved, 'instructions.bond': allowed } })).toBe('held-back')
+    expect(
+      state(bulb, inverter, { 'pass-through': { 'bulb.proved': proved, 'instructions.bond': allowed } }),
+    ).toBe('held-back')
     expect(state({}, inverter, { 'pass-through': five })).toBe('released')
   })
   test('what speaks against it in any mode holds it back', () => {
@@ -66,7 +73,12 @@ describe('five lines release installing a bond, and nothing less', () => {
     expect(state(five, inverter, { 'pass-through': { 'panel.ng.ohms': 0.1 } })).toBe('held-back')
   })
   test('a dark bulb at a receptacle and over-limit ohms release nothing', () => {
-    const dark = { 'bulb.ng': 'dark', 'bulb.hg': 'dark', 'bulb.proved': 'yes', 'instructions.bond': 'allowed' }
+    const dark = {
+      'bulb.ng': 'dark',
+      'bulb.hg': 'dark',
+      'bulb.proved': 'yes',
+      'instructions.bond': 'allowed',
+    }
     expect(state({ ...dark, 'source.ng.ohms': 1e9, 'panel.ng.ohms': 1e9 })).toBe('held-back')
   })
 })
@@ -94,7 +106,10 @@ test('over random findings, and every prefix of them, nothing is released withou
 })
 
 test('never on a balanced output: the bulb keeps 20 V or more of it, whatever else was found', () => {
-  const balanced = fc.record({ n: fc.double({ min: 20, max: 100, noNaN: true }), h: fc.double({ min: 20, max: 100, noNaN: true }) })
+  const balanced = fc.record({
+    n: fc.double({ min: 20, max: 100, noNaN: true }),
+    h: fc.double({ min: 20, max: 100, noNaN: true }),
+  })
   fc.assert(
     fc.property(anyCase(starter), balanced, ({ findings, context }, { n, h }) => {
       const found = { ...findings, ...five, 'source.bulb.ng.volts': n, 'source.bulb.hg.volts': h }
@@ -104,5 +119,7 @@ test('never on a balanced output: the bulb keeps 20 V or more of it, whatever el
 })
 
 test('a power station’s halves alone, however many and however alike, release nothing', () => {
-  expect(state({ ...volts(119.6, 59.8, 59.8), ...volts(119.6, 59.8, 59.8, 'source') }, powerStation)).toBe('held-back')
+  expect(state({ ...volts(119.6, 59.8, 59.8), ...volts(119.6, 59.8, 59.8, 'source') }, powerStation)).toBe(
+    'held-back',
+  )
 })

@@ -17,7 +17,13 @@ describe('three volts make one picture, on 120 V and on 230 V alike', () => {
     ['swapped: ground sits on hot', 120, 0.3, 119.8, 'on-hot'],
     ['balanced: the halves add up', 119.6, 59.9, 59.8, 'half'],
     ['floating with unequal filters: a quarter and three quarters', 120, 34.8, 83.7, 'uneven'],
-    ['a floating neutral reads about half to ground on both wires, a little short', 119.6, 57.2, 56.8, 'short'],
+    [
+      'a floating neutral reads about half to ground on both wires, a little short',
+      119.6,
+      57.2,
+      56.8,
+      'short',
+    ],
     ['open ground under a low-resistance meter', 119.6, 7.4, 7.5, 'nowhere'],
     ['open ground on a short stub', 118.6, 28, 26, 'far-short'],
     ['hot and ground swapped, or an open neutral with a load', 0.6, 119.8, 120, 'needle'],
@@ -35,7 +41,8 @@ describe('three volts make one picture, on 120 V and on 230 V alike', () => {
 })
 
 describe('levels follow the source’s own limits', () => {
-  const supply = (context: CaseContext, v: number) => facts(context, { 'source.hn.volts': v }).get('source.supply')?.value
+  const supply = (context: CaseContext, v: number) =>
+    facts(context, { 'source.hn.volts': v }).get('source.supply')?.value
   // ANSI C84.1 service range B: 110 to 127 V on 120 V, for utility systems (from memory).
   test('128 V is high on a utility, and still an idling generator', () => {
     expect(supply(splitPhase, 128)).toBe('high')
@@ -51,7 +58,11 @@ describe('levels follow the source’s own limits', () => {
 
 describe('a known load', () => {
   const load = (hn: number, hnOn: number, ng: number, ngOn: number) =>
-    facts(generator, { ...volts(hn, hn, ng), 'receptacle.hn.volts.loaded': hnOn, 'receptacle.ng.volts.loaded': ngOn })
+    facts(generator, {
+      ...volts(hn, hn, ng),
+      'receptacle.hn.volts.loaded': hnOn,
+      'receptacle.ng.volts.loaded': ngOn,
+    })
   test('12 AWG, 75 ft, 10 A from one panel bond: half of the drop shows on neutral–ground', () => {
     // NEC chapter 9 table 8, 12 AWG solid 1.93 ohm per 1000 ft: HN 117.105, NG 1.448 of 120 V (computed).
     expect(load(120, 117.105, 0, 1.448).get('receptacle.rise-share')?.value).toBe('half')
@@ -73,7 +84,11 @@ test('legs that share a lost neutral stand opposite', () => {
 test('an unsteady reading says only what both its ends say', () => {
   const read = readSheet(starter, {
     context: generator,
-    findings: { ...volts(120, 60, 0), 'receptacle.ng.volts': { between: [50, 60] }, 'receptacle.hg.volts': 58 },
+    findings: {
+      ...volts(120, 60, 0),
+      'receptacle.ng.volts': { between: [50, 60] },
+      'receptacle.hg.volts': 58,
+    },
   })
   if (!read.ok) throw new Error('the sheet can be read')
   const own = [...deriveFacts(starter, read.sheet).values()][0]!

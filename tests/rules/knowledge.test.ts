@@ -12,22 +12,32 @@ describe('articles', () => {
     expect(causeIds.filter((id) => !shelf.some((a) => a.slug === id && a.causes.includes(id)))).toEqual([])
   })
   test('slugs are single', () => expect(new Set(shelf.map((a) => a.slug)).size).toBe(shelf.length))
-  test.each(shelf.map((a) => [a.slug, a] as const))('%s: length, sources, links that lead somewhere, who decides', (_, a) => {
-    expect(words(a.body)).toBeGreaterThanOrEqual(250)
-    expect(words(a.body)).toBeLessThanOrEqual(720)
-    expect(a.words.length).toBeGreaterThanOrEqual(6)
-    for (const cause of a.causes) expect(causeIds).toContain(cause)
-    for (const id of a.tests) expect([...starter.tests.keys()]).toContain(id)
-    for (const [, kind, id] of a.body.matchAll(/\]\(\/(causes|tests|articles)\/([a-z0-9-]+)\)/g)) {
-      const known = kind === 'causes' ? causeIds : kind === 'tests' ? [...starter.tests.keys()] : shelf.map((s) => s.slug)
-      expect(known, a.slug).toContain(id)
-    }
-    expect(a.body).toMatch(/authority having jurisdiction/)
-    expect(a.body).toMatch(/^> \*\*(Danger|Warning|Caution|Notice):\*\*/m)
-    expect(a.body).not.toMatch(/<script|<iframe|javascript:/i)
-  })
+  test.each(shelf.map((a) => [a.slug, a] as const))(
+    '%s: length, sources, links that lead somewhere, who decides',
+    (_, a) => {
+      expect(words(a.body)).toBeGreaterThanOrEqual(250)
+      expect(words(a.body)).toBeLessThanOrEqual(720)
+      expect(a.words.length).toBeGreaterThanOrEqual(6)
+      for (const cause of a.causes) expect(causeIds).toContain(cause)
+      for (const id of a.tests) expect([...starter.tests.keys()]).toContain(id)
+      for (const [, kind, id] of a.body.matchAll(/\]\(\/(causes|tests|articles)\/([a-z0-9-]+)\)/g)) {
+        const known =
+          kind === 'causes'
+            ? causeIds
+            : kind === 'tests'
+              ? [...starter.tests.keys()]
+              : shelf.map((s) => s.slug)
+        expect(known, a.slug).toContain(id)
+      }
+      expect(a.body).toMatch(/authority having jurisdiction/)
+      expect(a.body).toMatch(/^> \*\*(Danger|Warning|Caution|Notice):\*\*/m)
+      expect(a.body).not.toMatch(/<script|<iframe|javascript:/i)
+    },
+  )
   test('nothing promises that something is safe', () => {
-    const promises = shelf.flatMap((a) => [...a.body.matchAll(/[^.]*\b(is|are|it’s) safe\b[^.]*/gi)].map((m) => m[0]))
+    const promises = shelf.flatMap((a) =>
+      [...a.body.matchAll(/[^.]*\b(is|are|it’s) safe\b[^.]*/gi)].map((m) => m[0]),
+    )
     expect(promises).toEqual([])
   })
 })
@@ -35,20 +45,23 @@ describe('articles', () => {
 describe('procedures', () => {
   const everyone = new Map(procedures.everyone.causes.map((c) => [c.cause, c]))
   const qualified = new Map(procedures.qualified.causes.map((c) => [c.cause, c]))
-  test.each(causeIds.map((id) => [id]))('%s: what it is, its danger, homeowner’s words, look-alikes, proof', (id) => {
-    const [plain, trade] = [everyone.get(id), qualified.get(id)]
-    expect(plain?.means).toBeTruthy()
-    expect(plain?.danger).toBeTruthy()
-    expect(plain?.homeowner?.doNow.length).toBeGreaterThanOrEqual(1)
-    expect(plain?.homeowner?.fits).not.toMatch(/\d+\s*%|percent/)
-    expect(trade?.lookAlikes?.length).toBeGreaterThanOrEqual(1)
-    expect(trade?.proof?.length).toBeGreaterThanOrEqual(1)
-    for (const like of trade?.lookAlikes ?? []) {
-      expect(causeIds).toContain(like.cause)
-      expect(starter.tests.has(like.test)).toBe(true)
-    }
-    for (const proof of trade?.proof ?? []) expect(starter.tests.has(proof.test)).toBe(true)
-  })
+  test.each(causeIds.map((id) => [id]))(
+    '%s: what it is, its danger, homeowner’s words, look-alikes, proof',
+    (id) => {
+      const [plain, trade] = [everyone.get(id), qualified.get(id)]
+      expect(plain?.means).toBeTruthy()
+      expect(plain?.danger).toBeTruthy()
+      expect(plain?.homeowner?.doNow.length).toBeGreaterThanOrEqual(1)
+      expect(plain?.homeowner?.fits).not.toMatch(/\d+\s*%|percent/)
+      expect(trade?.lookAlikes?.length).toBeGreaterThanOrEqual(1)
+      expect(trade?.proof?.length).toBeGreaterThanOrEqual(1)
+      for (const like of trade?.lookAlikes ?? []) {
+        expect(causeIds).toContain(like.cause)
+        expect(starter.tests.has(like.test)).toBe(true)
+      }
+      for (const proof of trade?.proof ?? []) expect(starter.tests.has(proof.test)).toBe(true)
+    },
+  )
   test('nothing for everyone opens a cover or can make metal live', () => {
     for (const c of procedures.everyone.causes)
       for (const r of c.remedies) {
@@ -75,13 +88,16 @@ describe('procedures', () => {
   test('every test has its procedure; what anyone may do is open to everyone, the rest is not', () => {
     const forAll = new Set(procedures.everyone.tests.map((t) => t.test))
     const forTrade = new Set(procedures.qualified.tests.map((t) => t.test))
-    for (const t of diagnosis.tests) expect(t.who === 'anyone' ? forAll.has(t.id) : forTrade.has(t.id), t.id).toBe(true)
+    for (const t of diagnosis.tests)
+      expect(t.who === 'anyone' ? forAll.has(t.id) : forTrade.has(t.id), t.id).toBe(true)
   })
   test('every ohm test asks for the source off and proved dead', () => {
     const dead = diagnosis.tests.filter((t) => t.findings.some((f) => starter.readings.get(f)?.dead))
     for (const t of dead) {
       const steps = procedures.qualified.tests.find((p) => p.test === t.id)
-      expect([...(steps?.before ?? []), ...(steps?.steps ?? [])].join(' '), t.id).toMatch(/proved dead|prove/i)
+      expect([...(steps?.before ?? []), ...(steps?.steps ?? [])].join(' '), t.id).toMatch(
+        /proved dead|prove/i,
+      )
     }
   })
 })
@@ -104,7 +120,8 @@ describe('figures from outside', () => {
     expect(rod).toContain(`33 Ω drives ${(120 / dwight).toFixed(1)} A`)
     expect(rod).toContain(`two of 25 Ω, ${(120 / 50).toFixed(1)} A`)
   })
-  test('IEC 61008: 0.3 s at the rated residual current', () => expect(starter.edges['rcd-milliseconds']).toBe(300))
+  test('IEC 61008: 0.3 s at the rated residual current', () =>
+    expect(starter.edges['rcd-milliseconds']).toBe(300))
   test('ANSI C84.1 service range B on 120 V: 110 to 127 V (from memory)', () => {
     expect(starter.edges['utility-low']! * 120).toBeCloseTo(110, 0)
     expect(starter.edges['utility-high']! * 120).toBeCloseTo(127, 0)

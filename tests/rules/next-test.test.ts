@@ -48,13 +48,18 @@ test('by expected information, descending, never negative, six decimals, level o
 
 test('a test stays listed while one of its findings isn’t taken, and names only that', async () => {
   const tests = await next(generator, { 'receptacle.hn.volts': 120, 'receptacle.hg.volts': 58 })
-  expect(tests.find((t) => t.test === 'receptacle-volts' && t.mode === undefined)?.findings).toEqual(['receptacle.ng.volts'])
+  expect(tests.find((t) => t.test === 'receptacle-volts' && t.mode === undefined)?.findings).toEqual([
+    'receptacle.ng.volts',
+  ])
   const done = await next(generator, volts(120, 58, 58))
   expect(done.some((t) => t.test === 'receptacle-volts' && t.mode === undefined)).toBe(false)
 })
 
 test('a test in another mode carries that mode', async () => {
-  const tests = await next({ source: 'all-in-one-inverter', system: '120', wiring: 'panel', mode: 'battery' }, volts(120, 58, 58))
+  const tests = await next(
+    { source: 'all-in-one-inverter', system: '120', wiring: 'panel', mode: 'battery' },
+    volts(120, 58, 58),
+  )
   expect(tests.find((t) => t.test === 'receptacle-volts')?.mode).toBe('pass-through')
 })
 
@@ -67,8 +72,7 @@ describe('the fork', () => {
   test('its chances add to 1 and its shares are what the ranking itself would say', async () => {
     const findings = { ...lamps('lit', 'dim', 'dim'), extent: 'everything' }
     const tests = await next(generator, findings)
-    for (const t of tests.slice(0, 12))
-      expect(t.outcomes.reduce((a, o) => a + o.chance, 0)).toBeCloseTo(1, 9)
+    for (const t of tests.slice(0, 12)) expect(t.outcomes.reduce((a, o) => a + o.chance, 0)).toBeCloseTo(1, 9)
     const volt = tests.find((t) => t.test === 'panel-volts')!
     const outcome = starter.tests.get('panel-volts')!.outcomes[0]!
     const typed = Object.fromEntries(
@@ -94,7 +98,11 @@ describe('what a good tech would do next', () => {
     expect(rank('panel-volts')).toBeLessThan(rank('wire-metal'))
   })
   test('a test whose outcome is plain already tells nothing', async () => {
-    const tests = await next(splitPhase, { ...volts(120, 120, 0.1), ...lamps('lit', 'lit', 'dark'), ...volts(120, 120, 0.1, 'panel') })
+    const tests = await next(splitPhase, {
+      ...volts(120, 120, 0.1),
+      ...lamps('lit', 'lit', 'dark'),
+      ...volts(120, 120, 0.1, 'panel'),
+    })
     expect(tests.find((t) => t.test === 'panel-legs')!.gainBits).toBeLessThan(1)
   })
 })

@@ -26,7 +26,11 @@ describe('a case that can’t be read names each bad field', () => {
     ['a meter of null', { id: 'x', context: { ...generator, meterOhms: null } }, ['context.meterOhms']],
     ['findings that are a list', { id: 'x', context: generator, findings: [] }, ['findings']],
     ['modes that are words', { id: 'x', context: generator, otherModes: 'battery' }, ['otherModes']],
-    ['an unknown other mode', { id: 'x', context: generator, otherModes: { turbo: {} } }, ['otherModes.turbo']],
+    [
+      'an unknown other mode',
+      { id: 'x', context: generator, otherModes: { turbo: {} } },
+      ['otherModes.turbo'],
+    ],
     [
       'a bad finding in another mode',
       { id: 'x', context: generator, otherModes: { battery: { tingle: 'perhaps' } } },
@@ -48,7 +52,11 @@ describe('a case that can’t be read names each bad field', () => {
   test('a panel reading where loads plug straight into the source', () =>
     expect(one({ 'panel.hn.volts': 120 }, powerStation)).toEqual(['findings.panel.hn.volts']))
   test('every bad field has its own sentence', () => {
-    const read = readCase(starter, { id: 'x', context: generator, findings: { tingle: 'maybe', shock: 3, 'rod.amps': -2 } })
+    const read = readCase(starter, {
+      id: 'x',
+      context: generator,
+      findings: { tingle: 'maybe', shock: 3, 'rod.amps': -2 },
+    })
     expect(read.ok).toBe(false)
     if (!read.ok) expect(new Set(Object.values(read.errors)).size).toBeGreaterThan(1)
   })
@@ -56,8 +64,16 @@ describe('a case that can’t be read names each bad field', () => {
 
 describe('a case that can be read', () => {
   test('needs no findings, takes 10 MΩ and the source’s own mode where nothing is said, ignores what it doesn’t know', () => {
-    const read = readCase(starter, { id: 'x', truth: 'sound', note: 1, context: { ...generator, color: 'red' } })
-    expect(read).toMatchObject({ ok: true, sheet: { context: { meterOhms: 10_000_000, mode: 'generator' }, taken: [] } })
+    const read = readCase(starter, {
+      id: 'x',
+      truth: 'sound',
+      note: 1,
+      context: { ...generator, color: 'red' },
+    })
+    expect(read).toMatchObject({
+      ok: true,
+      sheet: { context: { meterOhms: 10_000_000, mode: 'generator' }, taken: [] },
+    })
   })
   test('what can’t be true is still read', () => expect(one({ 'receptacle.hn.volts': 99_999 })).toEqual([]))
   test('1e9 ohms is over limit', () => {

@@ -27,7 +27,9 @@ test('compiled rules and json-rules-engine fire alike on random findings', async
     fc.asyncProperty(anyCase(starter), async ({ context, findings }) => {
       for (const facts of deriveFacts(starter, sheetOf(context, findings)).values()) {
         const byEngine = (await fire(starter, facts)).map((r) => r.id)
-        const compiled = ready(starter).rules.filter((r) => r.holds(facts)).map((r) => r.id)
+        const compiled = ready(starter)
+          .rules.filter((r) => r.holds(facts))
+          .map((r) => r.id)
         expect(compiled).toEqual(byEngine)
       }
     }),
@@ -37,7 +39,9 @@ test('compiled rules and json-rules-engine fire alike on random findings', async
 
 test('a fact of the wrong type never satisfies an order', () => {
   const facts: Facts = new Map([['receptacle.hn.volts', { value: '5', from: [] }]])
-  const holds = ready(starter).rules.filter((r) => r.facts.includes('receptacle.hn.volts')).some((r) => r.holds(facts))
+  const holds = ready(starter)
+    .rules.filter((r) => r.facts.includes('receptacle.hn.volts'))
+    .some((r) => r.holds(facts))
   expect(holds).toBe(false)
 })
 
@@ -97,7 +101,12 @@ test('an edition with a rule on an unknown fact, cause or value does not open', 
   const broken = structuredClone(starter.file)
   const rule = broken.groups[0]!.rules[0]!
   rule.says['no-such-cause'] = 1
-  rule.when = { all: [{ fact: 'no.such.fact', operator: 'equal', value: 'x' }, { fact: 'tingle', operator: 'equal', value: 'maybe' }] }
+  rule.when = {
+    all: [
+      { fact: 'no.such.fact', operator: 'equal', value: 'x' },
+      { fact: 'tingle', operator: 'equal', value: 'maybe' },
+    ],
+  }
   expect(comparisons(rule.when)).toHaveLength(2)
   expect(() => openEdition(broken)).toThrow(/no-such-cause[\s\S]*no\.such\.fact[\s\S]*maybe/)
   expect(() => openEdition({ ...starter.file, format: 2 })).toThrow(/not an edition/)
@@ -105,7 +114,9 @@ test('an edition with a rule on an unknown fact, cause or value does not open', 
 })
 
 test('sheets diagnosed at the same time don’t cut each other short', async () => {
-  const sheets = Array.from({ length: 8 }, (_, i) => sheetOf(generator, { ...volts(120, 57 + i, 58 - i), tingle: 'no', extent: 'everything' }))
+  const sheets = Array.from({ length: 8 }, (_, i) =>
+    sheetOf(generator, { ...volts(120, 57 + i, 58 - i), tingle: 'no', extent: 'everything' }),
+  )
   const oneByOne: string[] = []
   for (const sheet of sheets) oneByOne.push(JSON.stringify(await diagnose(starter, sheet)))
   const together = await Promise.all(sheets.map((sheet) => diagnose(starter, sheet)))

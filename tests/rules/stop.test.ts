@@ -4,7 +4,12 @@ import { stopsOf } from '../../rules/ranking/stop.ts'
 import { european, generator, sheetOf, splitPhase, starter, volts } from '../edition.ts'
 import type { CaseContext } from '../edition.ts'
 
-type Row = [says: string, context: CaseContext, findings: Record<string, RawFinding>, stop: string | undefined]
+type Row = [
+  says: string,
+  context: CaseContext,
+  findings: Record<string, RawFinding>,
+  stop: string | undefined,
+]
 
 // The closed list of the command line's contract, each finding alone; the ones that must not stop beside them.
 const rows: Row[] = [
@@ -30,7 +35,12 @@ const rows: Row[] = [
   ['nobody can tell whether they are joined', generator, { 'two-sources-joined': 'cannot-tell' }, undefined],
   ['a headache', generator, { headache: 'yes' }, 'headache'],
   ['lights too bright', generator, { lights: 'too-bright' }, 'lights-too-bright'],
-  ['some bright, some dim on two legs', splitPhase, { lights: 'some-bright-some-dim' }, 'some-bright-some-dim'],
+  [
+    'some bright, some dim on two legs',
+    splitPhase,
+    { lights: 'some-bright-some-dim' },
+    'some-bright-some-dim',
+  ],
   ['some bright, some dim on one leg', generator, { lights: 'some-bright-some-dim' }, undefined],
   ['legs at 103 and 121 V', splitPhase, { 'panel.l1n.volts': 103, 'panel.l2n.volts': 121 }, 'legs-unequal'],
   ['legs at 119 and 133 V', splitPhase, { 'panel.l1n.volts': 119, 'panel.l2n.volts': 133 }, 'legs-unequal'],
@@ -64,12 +74,17 @@ test.each(rows)('%s', (_, context, findings, stop) => {
 })
 
 test('a stop found in another mode stops too', () => {
-  const sheet = sheetOf({ source: 'all-in-one-inverter', system: '120', wiring: 'panel' }, {}, { battery: {}, 'pass-through': { tingle: 'yes' } })
+  const sheet = sheetOf(
+    { source: 'all-in-one-inverter', system: '120', wiring: 'panel' },
+    {},
+    { battery: {}, 'pass-through': { tingle: 'yes' } },
+  )
   expect(stopsOf(starter, sheet)).toMatchObject([{ id: 'tingle', mode: 'pass-through' }])
 })
 
 test('ground to earth at a megohm or more may be a ghost, under a low-resistance meter it is not said', () => {
-  const at = (meterOhms: number) => stopsOf(starter, sheetOf({ ...generator, meterOhms }, { 'receptacle.ge.volts': 76 }))[0]
+  const at = (meterOhms: number) =>
+    stopsOf(starter, sheetOf({ ...generator, meterOhms }, { 'receptacle.ge.volts': 76 }))[0]
   expect(at(10_000_000)?.mayBeGhost).toBe(true)
   expect(at(400_000)?.mayBeGhost).toBe(false)
 })

@@ -1,7 +1,8 @@
 /** Before the tests: a cluster of their own on which nothing is forced to the disk, with one migrated template. */
-import { mkdtempSync, readFileSync, readdirSync, rmSync, existsSync } from 'node:fs'
+import { chmodSync, existsSync, mkdtempSync, readFileSync, readdirSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
+import { sql } from 'kysely'
 import { migrateToLatest } from '../../migrations/migrate.ts'
 import { openDatabase } from '../../server/database.ts'
 import { openLog } from '../../server/log.ts'
@@ -30,6 +31,7 @@ function sweep() {
 export default async function setup(project) {
   sweep()
   const home = mkdtempSync(join(tmpdir(), `${prefix}${process.pid}-`))
+  chmodSync(home, 0o711) // for the account that runs PostgreSQL where this one is root
   const postgres = await startPostgres({ folder: join(home, 'postgres'), quick: true, say: () => undefined })
   const end = async () => {
     await postgres.stop()
@@ -38,7 +40,6 @@ export default async function setup(project) {
   try {
     const log = openLog('silent')
     const admin = openDatabase(`${postgres.url}/postgres`, log)
-    const { sql } = await import('kysely')
     await sql`create database ${sql.ref(template)}`.execute(admin)
     await admin.destroy()
     // Nothing may stay connected to a template.

@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process'
 import type { ChildProcess } from 'node:child_process'
 import { existsSync, readFileSync } from 'node:fs'
-import { mkdtemp, rm } from 'node:fs/promises'
+import { chmod, mkdtemp, rm } from 'node:fs/promises'
 import { createServer } from 'node:net'
 import type { AddressInfo } from 'node:net'
 import { tmpdir } from 'node:os'
@@ -50,6 +50,7 @@ const ready = (one: Start) =>
 
 beforeAll(async () => {
   folder = await mkdtemp(join(tmpdir(), 'tracelamp-start-'))
+  await chmod(folder, 0o711) // for the account that runs PostgreSQL where this one is root
   port = String(await freePort())
   address = `http://127.0.0.1:${port}`
   running = start({ DATA_DIR: folder, PORT: port })

@@ -69,7 +69,8 @@ export function misfitOf(
   const ids = facts.get(worst.mode)
   const again = rule && ids ? findingBehind(rule.when, ids) : undefined
   return {
-    because: 'Even the best cause leaves too much unexplained. Two faults at once, or a reading that slipped?',
+    because:
+      'Even the best cause leaves too much unexplained. Two faults at once, or a reading that slipped?',
     again: again ?? sheet.taken[0]?.id ?? '',
     mode: worst.mode,
   }

@@ -10,9 +10,15 @@ export const alongTheRun: Check = ({ amount, nominal, legs, wiring, fact }) => {
   const live = (x: number | undefined) => x !== undefined && x > 0.5
   const dead = (x: number | undefined) => x !== undefined && x < 0.1
   if (live(receptacle) && dead(source) && (dead(panel) || wiring === 'direct'))
-    return { because: 'The receptacle is live with the source and the panel dead.', again: 'receptacle.hn.volts' }
+    return {
+      because: 'The receptacle is live with the source and the panel dead.',
+      again: 'receptacle.hn.volts',
+    }
   if (live(receptacle) && live(source) && dead(panel))
-    return { because: 'The panel reads dead between a live source and a live receptacle.', again: 'panel.hn.volts' }
+    return {
+      because: 'The panel reads dead between a live source and a live receptacle.',
+      again: 'panel.hn.volts',
+    }
   // With two legs a lost neutral lifts one of them, and two hots make twice the volts: only one leg is that plain.
   const spans = [
     ['source', 'panel', source, panel],
@@ -23,7 +29,10 @@ export const alongTheRun: Check = ({ amount, nominal, legs, wiring, fact }) => {
   for (const [before, place, ahead, here] of spans) {
     if (ahead === undefined || here === undefined || ahead < 0.1) continue
     if (here - ahead > (legs === 1 ? 0.08 : legsApart ? 2 : 1.1))
-      return { because: `The ${place} reads more than the ${before} that feeds it.`, again: `${place}.hn.volts` }
+      return {
+        because: `The ${place} reads more than the ${before} that feeds it.`,
+        again: `${place}.hn.volts`,
+      }
   }
   return undefined
 }
@@ -34,7 +43,10 @@ export const legs: Check = ({ amount, nominal, fact }) => {
   if (l1 === undefined || l2 === undefined || both === undefined) return undefined
   const least = Math.min(l1, l2)
   if (least > 0.5 * nominal && Math.abs(both - l1) < 0.2 * nominal && Math.abs(both - l2) < 0.2 * nominal)
-    return { because: 'Leg to leg reads the same as one leg: no split phase gives that.', again: 'panel.l1l2.volts' }
+    return {
+      because: 'Leg to leg reads the same as one leg: no split phase gives that.',
+      again: 'panel.l1l2.volts',
+    }
   const sum = l1 + l2
   const difference = Math.abs(l1 - l2)
   // In phase, as one source feeding both legs, the difference is what stands between them; never with a leg lifted.

@@ -37,7 +37,12 @@ function lopsided(t: Triple): Pair | undefined {
 
 /** Ground far outside the half circle over the rail: nothing of this system can put it there. */
 function driven(t: Triple): boolean {
-  return t.hn >= 0.5 && t.hg + t.ng > 1.08 * t.hn && Math.abs(t.hg - t.ng) < 0.9 * t.hn && t.hg ** 2 + t.ng ** 2 > 1.25 * t.hn ** 2
+  return (
+    t.hn >= 0.5 &&
+    t.hg + t.ng > 1.08 * t.hn &&
+    Math.abs(t.hg - t.ng) < 0.9 * t.hn &&
+    t.hg ** 2 + t.ng ** 2 > 1.25 * t.hn ** 2
+  )
 }
 
 /** On the line, off the line by more than error: sides that don't make one picture with ground nearly on neutral. */
@@ -65,7 +70,10 @@ export const oneTriple: Check = (look: Look) => {
       }
     }
     if (driven(t))
-      return { because: `At the ${t.place} ground lies where nothing of this system can put it.`, again: id('ng') }
+      return {
+        because: `At the ${t.place} ground lies where nothing of this system can put it.`,
+        again: id('ng'),
+      }
     if (nearlyOnNeutral(t))
       return {
         because: `Neutral–ground at the ${t.place} doesn’t go with hot–neutral and hot–ground, which read alike.`,
@@ -83,7 +91,10 @@ export const underLoad: Check = ({ amount, nominal }) => {
     const [off, on] = [amount(`${place}.hn.volts`), amount(`${place}.hn.volts.loaded`)]
     if (off === undefined || on === undefined) continue
     if (on - off > 0.02 * nominal)
-      return { because: `More volts with the load on than off at the ${place}.`, again: `${place}.hn.volts.loaded` }
+      return {
+        because: `More volts with the load on than off at the ${place}.`,
+        again: `${place}.hn.volts.loaded`,
+      }
     // An open wire reads next to nothing under load, a poor joint most of its volts: a tenth is neither.
     if (off > 0.7 * nominal && on < off && tenfold(off, on))
       return {
