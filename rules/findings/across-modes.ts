@@ -1,7 +1,7 @@
 import type { Fact, Say } from './facts.ts'
 import { places } from './fact-names.ts'
 
-const floats = ['half', 'uneven', 'short', 'far-short', 'nowhere', 'off-line', 'beyond-neutral']
+const floats = ['half', 'uneven', 'just-short', 'short', 'far-short', 'nowhere', 'off-line', 'beyond-neutral']
 
 /** Whether ground holds on neutral in a mode, as far as volts, lamps or the source's bulb tell. */
 function bondedIn(

@@ -14,6 +14,7 @@ export const patterns = [
   'on-hot',
   'half',
   'uneven',
+  'just-short',
   'short',
   'far-short',
   'nowhere',

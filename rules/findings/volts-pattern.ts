@@ -69,5 +69,6 @@ export function patternOf(hn: number, hg: number, ng: number, nominal: number, e
   const sum = a + b
   if (sum > 1 + closes) return 'off-line'
   if (sum >= 1 - closes) return Math.abs(a - b) <= edge(edges, 'pattern-even') ? 'half' : 'uneven'
+  if (sum >= edge(edges, 'pattern-just')) return 'just-short'
   return sum >= edge(edges, 'pattern-far') ? 'short' : 'far-short'
 }

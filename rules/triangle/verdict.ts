@@ -6,8 +6,6 @@ import type { Weight } from './weight.ts'
 /** What the page says below the picture: a few words first, the sentence of the picture, and what it leaves open. */
 export type Verdict = { lead: string; say: string; open: string }
 
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
-
 function leadOf(seat: Seat, { ng, hg }: Readings): string {
   switch (seat.kind) {
     case 'empty':
@@ -24,8 +22,7 @@ function leadOf(seat: Seat, { ng, hg }: Readings): string {
       if (seat.corner !== 'G') return `${inVolts(seat.gap)} V missing.`
       if (seat.nowhere) return 'Tied to nothing you can read here.'
       const share = (ng ?? 0) / ((ng ?? 0) + (hg ?? 0))
-      const where = Math.abs(share - 0.5) < 0.05 ? 'about halfway, ' : ''
-      return capital(`${where}${inVolts(seat.gap)} V short.`)
+      return Math.abs(share - 0.5) < 0.05 ? 'About halfway, untied.' : 'Ground is untied here.'
     }
     case 'closed':
       return {

@@ -2,9 +2,10 @@ import { isRouteErrorResponse, useRouteError } from 'react-router-dom'
 import { LinkButton, Button } from '../ui/button.tsx'
 import { Page } from '../ui/page.tsx'
 
-/** A part of the page that lies on the server could not be fetched. */
+/** A part of the page lies on the server and could not be fetched; each browser has its own words for that. */
 const isMissingPart = (problem: unknown): boolean =>
-  problem instanceof TypeError && /import|module|fetch|load/i.test(problem.message)
+  problem instanceof Error &&
+  /dynamically imported module|importing a module script|preload/i.test(problem.message)
 
 function wordsFor(problem: unknown): { title: string; words: string } {
   if (isRouteErrorResponse(problem) && problem.status === 404)

@@ -4,11 +4,12 @@ import { PageError } from './page-error.tsx'
 import { Shell } from './shell.tsx'
 
 const check = () => import('../triage/check.page.tsx')
+const steps = () => import('../triage/steps.page.tsx')
 const volts = () => import('../triage/volts.page.tsx')
 const result = () => import('../triage/result.page.tsx')
 
 /** The check whole, fetched once the first page stands, so that it works when the network goes. */
-export const bringTriage = () => Promise.all([check(), volts(), result()])
+export const bringTriage = () => Promise.all([check(), steps(), volts(), result()])
 
 /** Every page, fetched when it is first opened. Loaders never wait for data: pages own waiting, failing, no network. */
 export const routes: RouteObject[] = [
@@ -28,7 +29,8 @@ export const routes: RouteObject[] = [
               { path: 'stop', lazy: async () => ({ Component: (await check()).StopNow }) },
               { path: 'result', lazy: result },
               { path: '5', lazy: volts },
-              { path: ':step', lazy: async () => ({ Component: (await check()).Step }) },
+              { path: '1', lazy: async () => ({ Component: (await check()).DangerStep }) },
+              { path: ':step', lazy: steps },
             ],
           },
           { path: 'diagnosis', lazy: () => import('../diagnosis/diagnosis.page.tsx') },

@@ -27,7 +27,10 @@ function Section({ title, children }: { title: string; children: ReactNode }) {
   )
 }
 
-/** Tests with nothing opened that an article on this cause uses: what a visitor may do towards being sure. */
+/**
+ * Tests with nothing opened that an article on this cause uses: what a visitor may do towards being sure. Not where
+ * metal may be live or something may burn: there a visitor measures nothing.
+ */
 function OpenTests({ knowledge, cause }: { knowledge: Knowledge; cause: string }) {
   const ids = new Set(
     [...knowledge.articles.values()].filter((one) => one.causes.includes(cause)).flatMap((one) => one.tests),
@@ -81,7 +84,7 @@ function ForVisitors({
   const open = (said?.remedies ?? []).filter((one) => one.who === 'anyone' && one.hazard === 'closed')
   return (
     <>
-      <OpenTests knowledge={knowledge} cause={cause} />
+      {said?.danger?.level !== 'danger' && <OpenTests knowledge={knowledge} cause={cause} />}
       {open.length > 0 && (
         <Section title="Putting it right, with nothing opened">
           <Remedies remedies={open} />

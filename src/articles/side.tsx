@@ -13,6 +13,22 @@ type SideProps = {
   usedIn: readonly UsedIn[]
 }
 
+const shown = 8
+
+function Links({ usedIn }: { usedIn: readonly UsedIn[] }) {
+  return (
+    <ul className="used-in">
+      {usedIn.map((one) => (
+        <li key={`${one.kind} ${one.id}`}>
+          <Link to={addressOf(one.kind, one.id)}>
+            {one.label}: {one.title}
+          </Link>
+        </li>
+      ))}
+    </ul>
+  )
+}
+
 /** Beside an article, cause or test: the edition it belongs to, and what links to it. */
 export function Side({ knowledge, facts = [], usedIn }: SideProps) {
   const { info } = knowledge
@@ -35,15 +51,13 @@ export function Side({ knowledge, facts = [], usedIn }: SideProps) {
       </Rail>
       {usedIn.length > 0 && (
         <Rail title="Used in" className="screen-only">
-          <ul className="used-in">
-            {usedIn.map((one) => (
-              <li key={`${one.kind} ${one.id}`}>
-                <Link to={addressOf(one.kind, one.id)}>
-                  {one.label}: {one.title}
-                </Link>
-              </li>
-            ))}
-          </ul>
+          <Links usedIn={usedIn.slice(0, shown)} />
+          {usedIn.length > shown && (
+            <details className="more text-small">
+              <summary>{usedIn.length - shown} more</summary>
+              <Links usedIn={usedIn.slice(shown)} />
+            </details>
+          )}
         </Rail>
       )}
     </div>

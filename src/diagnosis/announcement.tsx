@@ -12,7 +12,9 @@ export function Announcement({ diagnosis }: { diagnosis: Diagnosis }) {
   const [first] = diagnosis.rows
   const words =
     diagnosis.misfit !== undefined
-      ? `No single cause fits. Take again: ${findingLabel(edition, diagnosis.misfit.again)}`
+      ? diagnosis.stops.length > 0
+        ? 'No single cause fits.'
+        : `No single cause fits. Take again: ${findingLabel(edition, diagnosis.misfit.again)}`
       : first === undefined
         ? ''
         : `First now: ${inSentence(rowLabel(edition, first))}, ${percent(first.share)} percent`

@@ -83,12 +83,12 @@ export function BondPlate({ bond, trying, unread }: BondPlateProps) {
         {trying && <p className="text-small font-bold">Values that are only tried release nothing.</p>}
         {unread && <p className="text-small font-bold">An entry can’t be read. It is mended first.</p>}
         <p className="text-small">Released when all five hold, in one mode; no share releases it.</p>
-        <ol className="bond-lines" aria-label="What releases it">
-          {bond.lines.map((line) => (
-            <Line key={line.line} line={line} mode={bond.mode} />
-          ))}
-        </ol>
       </div>
+      <ol className="bond-lines" aria-label="What releases it">
+        {bond.lines.map((line) => (
+          <Line key={line.line} line={line} mode={bond.mode} />
+        ))}
+      </ol>
     </section>
   )
 }

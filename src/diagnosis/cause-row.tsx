@@ -50,7 +50,7 @@ function Links({ cause, article }: { cause: RankedCause; article: Article | unde
 
 function Moved({ by }: { by: number }) {
   const points = Math.round(by * 100)
-  if (Math.abs(points) < 3) return null
+  if (Math.abs(points) < 5) return null
   return (
     <p className="mt-2 text-note text-ink-2">
       <b>
@@ -86,7 +86,9 @@ export function CauseRow({ row, rank, open, onToggle, was, articleOf, parting }:
           <span className={struck ? 'line-through' : ''}>
             {causes.map((one, index) => (
               <span key={one.cause}>
-                {index > 0 && <span className="font-normal"> or </span>}
+                {index > 0 && (
+                  <span className="font-normal">{index === causes.length - 1 ? ' or ' : ', '}</span>
+                )}
                 {causeLabel(edition, one.cause)}
               </span>
             ))}
@@ -112,14 +114,20 @@ export function CauseRow({ row, rank, open, onToggle, was, articleOf, parting }:
       )}
       {was !== undefined && rank > 0 && <Moved by={share - was} />}
       <div id={`ledger-${id}`} hidden={!open}>
-        {open &&
-          causes.map((one) => (
-            <div key={one.cause}>
-              {several && <h4 className="mt-3 text-small font-bold">{causeLabel(edition, one.cause)}</h4>}
-              <Ledger evidence={one.evidence} of={causeLabel(edition, one.cause)} />
-              <Links cause={one} article={articleOf(one.cause)} />
-            </div>
-          ))}
+        {open && (
+          <>
+            {several && <h4 className="mt-3 text-small font-bold">{causeLabel(edition, first.cause)}</h4>}
+            <Ledger evidence={first.evidence} of={causeLabel(edition, first.cause)} />
+            <Links cause={first} article={articleOf(first.cause)} />
+            {causes.slice(1).map((one) => (
+              <details key={one.cause} className="help">
+                <summary>Evidence: {inSentence(causeLabel(edition, one.cause))}</summary>
+                <Ledger evidence={one.evidence} of={causeLabel(edition, one.cause)} />
+                <Links cause={one} article={articleOf(one.cause)} />
+              </details>
+            ))}
+          </>
+        )}
       </div>
       {!open && rank === 1 && <BriefEvidence evidence={first.evidence} />}
     </li>

@@ -13,7 +13,12 @@ export type Offer = {
   hazard: Hazard
   /** The mode it is to be done in. */
   mode: string
+  /** Minutes of the test, and of bringing the source into that mode where it isn't. */
+  minutes: number
 }
+
+/** What it takes to change the operating mode and wait until the source is steady in it. */
+export const modeChangeMinutes = 5
 
 /** Names a test in a mode: what is put aside in one is still to do in another. */
 export const testKey = (next: NextTest, sheetMode: string): string => `${next.test} ${next.mode ?? sheetMode}`
@@ -25,7 +30,7 @@ export const hazardOf = (test: Test, wiring: string): Hazard =>
 const hazardOrder: readonly Hazard[] = ['closed', 'open-dead', 'closed-can-energize', 'open-live']
 
 /** What it is expected to tell for each minute it takes. */
-const worth = (offer: Offer) => offer.next.gainBits / offer.test.minutes
+const worth = (offer: Offer) => offer.next.gainBits / offer.minutes
 
 export type Offers = {
   /** By bits a minute, the less dangerous first when level; none of them put aside. */
@@ -40,9 +45,9 @@ export function offersOf(edition: Edition, content: SheetContent, nextTests: rea
     const mode = next.mode ?? content.mode
     const reachable = next.findings.some((id) => readingOf(content, mode, id)?.unreachable !== true)
     if (test === undefined || !reachable) return []
-    return [
-      { key: testKey(next, content.mode), test, next, mode, hazard: hazardOf(test, content.context.wiring) },
-    ]
+    const minutes = test.minutes + (mode === content.mode ? 0 : modeChangeMinutes)
+    const hazard = hazardOf(test, content.context.wiring)
+    return [{ key: testKey(next, content.mode), test, next, mode, hazard, minutes }]
   })
   const byWorth = (a: Offer, b: Offer) =>
     worth(b) - worth(a) ||

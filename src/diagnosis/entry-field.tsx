@@ -14,12 +14,15 @@ import { capital } from './words.ts'
 /** The line beneath the number: instrument and condition it was taken under. */
 function conditionOf(reading: Reading, entry: ReadingEntry | undefined): string {
   if (entry?.unreachable === true) return 'can’t be reached'
-  const condition = reading.loaded === true ? 'load on' : reading.dead === true ? 'proved dead' : ''
+  if (entry === undefined || entry.text === '') return reading.dead === true ? 'proved dead first' : ''
+  const unloaded = reading.unit === 'V' && reading.pair !== undefined && !reading.id.includes('bulb.')
+  const condition =
+    reading.loaded === true ? 'load on' : reading.dead === true ? 'proved dead' : unloaded ? 'no load' : ''
   const parts = [
-    entry?.upper === undefined ? '' : 'wanders',
+    entry.upper === undefined ? '' : 'wanders',
     condition,
-    entry?.meterOhms === undefined ? '' : `${ohmsInWords(entry.meterOhms)} meter`,
-    entry?.note === undefined ? '' : entry.note,
+    entry.meterOhms === undefined ? '' : `${ohmsInWords(entry.meterOhms)} meter`,
+    entry.note ?? '',
   ].filter((part) => part !== '')
   return parts.join(' · ')
 }

@@ -81,8 +81,8 @@ export function FieldStrip() {
   const twin = desk.edition.readings.get(`${id}.loaded`)
   const volts = unit === 'V'
   return (
-    <section className="strip" aria-label={`More on ${label}`}>
-      <p className="text-note font-bold text-ink-2">{label}</p>
+    <details className="help strip">
+      <summary>More on {label.charAt(0).toLowerCase() + label.slice(1)}</summary>
       <div className="mt-1 flex flex-wrap gap-2">
         <Button
           size="small"
@@ -149,6 +149,6 @@ export function FieldStrip() {
       )}
       {what === 'meter' && <OtherMeter reading={reading} onDone={() => setOpen(undefined)} />}
       {what === 'note' && <Note reading={reading} />}
-    </section>
+    </details>
   )
 }

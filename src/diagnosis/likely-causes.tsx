@@ -75,7 +75,7 @@ export function LikelyCauses({ diagnosis, before, articleOf }: LikelyCausesProps
       className="likely"
       id="causes"
     >
-      {misfit && <MisfitPlate misfit={misfit} leader={rows[0]} />}
+      {misfit && <MisfitPlate misfit={misfit} leader={rows[0]} stopped={diagnosis.stops.length > 0} />}
       <ol className="causes" onKeyDown={moveInList}>
         {shown.map((row, rank) => {
           const id = idOf(row)

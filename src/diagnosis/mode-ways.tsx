@@ -27,9 +27,14 @@ export function ModeWays() {
         className="modes"
       />
       {others.length > 0 && (
-        <Button look="plain" size="small" expanded={adding} onPress={() => setAdding(!adding)}>
+        <button
+          type="button"
+          className="link-alone text-small text-glow underline"
+          aria-expanded={adding}
+          onClick={() => setAdding(!adding)}
+        >
           Add a mode
-        </Button>
+        </button>
       )}
       {adding && (
         <div className="mb-2 flex flex-wrap gap-2">

@@ -27,8 +27,8 @@ function WhyThisOne({ offer }: { offer: Offer }) {
   const { gainBits } = offer.next
   return (
     <p className="mt-2 text-small text-ink-2">
-      It is expected to tell {gainBits.toFixed(2)} bits in {offer.test.minutes} min: more for each minute than
-      any other test still to do. One bit halves the doubt.
+      It is expected to tell {gainBits.toFixed(2)} bits in {offer.minutes} min: more for each minute than any
+      other test still to do. One bit halves the doubt.
     </p>
   )
 }
@@ -70,7 +70,7 @@ export function NextStep({ offers, diagnosis, procedure, picked, onPick }: NextS
     <section className="plate-edged next-step" aria-labelledby="next-title">
       <p className="flex flex-wrap justify-between gap-x-4 gap-y-1 text-small font-bold">
         <span className="text-ink-3">{offer === best ? 'Do this next' : 'Chosen from the list'}</span>
-        <span>{test.minutes} min</span>
+        <span>{offer.minutes} min</span>
       </p>
       <h2 id="next-title" className="mt-1 text-head">
         {test.title}
@@ -84,7 +84,8 @@ export function NextStep({ offers, diagnosis, procedure, picked, onPick }: NextS
       <p className="mt-2 text-small text-ink-2">
         {elsewhere && (
           <>
-            To be done <b className="text-ink">{modeLabel(desk.edition, mode).toLowerCase()}</b>.{' '}
+            To be done <b className="text-ink">{modeLabel(desk.edition, mode).toLowerCase()}</b>; changing the
+            mode is in the minutes.{' '}
           </>
         )}
         <Tells offer={offer} />

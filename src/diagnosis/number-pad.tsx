@@ -23,11 +23,23 @@ function usePadSide(): ['left' | 'right', (side: 'left' | 'right') => void] {
   ]
 }
 
+/** Keeps the field that is typed into above the pad. */
+function useRoomForPad(up: boolean, field: string): void {
+  useEffect(() => {
+    if (!up) return
+    const page = document.documentElement
+    page.style.scrollPaddingBottom = '400px'
+    document.activeElement?.scrollIntoView({ block: 'nearest' })
+    return () => page.style.removeProperty('scroll-padding-bottom')
+  }, [up, field])
+}
+
 /** Our own pad, up while a reading is typed on a device for fingers. */
 export function NumberPad() {
   const { edition, typed, dispatch, chosen, typing, ownPad, goOn, after, focus } = useDesk()
   const [side, setSide] = usePadSide()
   const reading = edition.readings.get(chosen?.id ?? '')
+  useRoomForPad(ownPad && typing && reading !== undefined, `${chosen?.id ?? ''} ${chosen?.which ?? ''}`)
   if (!ownPad || !typing || chosen === undefined || reading === undefined) return null
   const { id, label } = reading
   const { mode } = typed

@@ -1,9 +1,12 @@
+import { useState } from 'react'
 import { Button } from '../ui/button.tsx'
 import { HazardMark } from '../ui/hazard-mark.tsx'
 import { doneTests } from './choose-test.ts'
 import type { Offer, Offers } from './choose-test.ts'
 import { useDesk } from './desk.ts'
 import { modeLabel } from './words.ts'
+
+const shownAtFirst = 6
 
 function Row({ offer, action, onPress }: { offer: Offer; action: string; onPress: () => void }) {
   const { edition, typed } = useDesk()
@@ -13,7 +16,7 @@ function Row({ offer, action, onPress }: { offer: Offer; action: string; onPress
         <b>{offer.test.title}</b>
         {offer.mode !== typed.mode && `, ${modeLabel(edition, offer.mode).toLowerCase()}`}
         <span className="mt-1 flex flex-wrap items-center gap-x-4 gap-y-1 text-note">
-          <span>{offer.test.minutes} min</span>
+          <span>{offer.minutes} min</span>
           <HazardMark hazard={offer.hazard} />
         </span>
       </span>
@@ -35,14 +38,21 @@ export function OtherTests({ offers, leading, onPick }: OtherTestsProps) {
   const { edition, typed, dispatch } = useDesk()
   const others = offers.open.filter((offer) => offer.key !== leading)
   const done = doneTests(edition, typed)
+  const [all, setAll] = useState(false)
+  const shown = all ? others : others.slice(0, shownAtFirst)
   return (
     <div className="mt-3">
       {others.length > 0 && (
         <ul aria-label="Other tests">
-          {others.map((offer) => (
+          {shown.map((offer) => (
             <Row key={offer.key} offer={offer} action="Take this one" onPress={() => onPick(offer.key)} />
           ))}
         </ul>
+      )}
+      {others.length > shownAtFirst && (
+        <Button look="plain" size="small" expanded={all} onPress={() => setAll(!all)}>
+          {all ? 'Show fewer' : `Show all ${others.length}`}
+        </Button>
       )}
       {offers.skipped.length > 0 && (
         <>

@@ -59,7 +59,8 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   const unread = Object.keys(errors).length > 0
   const byCause = useMemo(() => {
     const all = [...articles.values()]
-    return (cause: string) => all.find((article) => article.causes.includes(cause))
+    return (cause: string) =>
+      all.find((article) => article.slug === cause) ?? all.find((article) => article.causes.includes(cause))
   }, [articles])
 
   const loadedTwin = () => {

@@ -1,7 +1,6 @@
 import { Link } from 'react-router-dom'
 import type { EditionInForce } from '../../server/editions/editions.contract.ts'
 import { ohmsInWords } from '../../rules/triangle/weight.ts'
-import { Button } from '../ui/button.tsx'
 import { Stamp } from '../ui/stamp.tsx'
 import { useDesk } from './desk.ts'
 import { ChangeContext } from './change-context.tsx'
@@ -38,14 +37,22 @@ export function SheetHead({ info, open, onOpen, letters, onLetters }: SheetHeadP
         <h1>{typed.title}</h1>
         <p className="flex flex-wrap items-center gap-x-2 text-small text-ink-2">
           {capital(kind)}, {system} V, {how}; meter {ohmsInWords(meterOhms)}.
-          <Button look="plain" size="small" expanded={open === 'context'} onPress={() => turn('context')}>
+          <button
+            type="button"
+            className="link-alone text-glow underline"
+            aria-expanded={open === 'context'}
+            onClick={() => turn('context')}
+          >
             Change
-          </Button>
-          <span className="desk-keys">
-            <Button look="plain" size="small" expanded={open === 'keys'} onPress={() => turn('keys')}>
-              Keys
-            </Button>
-          </span>
+          </button>
+          <button
+            type="button"
+            className="link-alone desk-keys text-glow underline"
+            aria-expanded={open === 'keys'}
+            onClick={() => turn('keys')}
+          >
+            Keys
+          </button>
         </p>
       </div>
       <Stamp hash={info.hash} number={info.number} line={`in force since ${since}`} />

@@ -24,7 +24,8 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
 
   const seats = place?.seats
   const sides = useMemo(() => (seats === undefined ? [] : [seats.hn.id, seats.ng.id, seats.hg.id]), [seats])
-  const order = useCallback((id: string) => (sequence.includes(id) ? sequence : sides), [sequence, sides])
+  // The sides of the triangle keep their order, whichever test asked for them.
+  const order = useCallback((id: string) => (sides.includes(id) ? sides : sequence), [sequence, sides])
   const following = useCallback(
     (id: string): string | undefined => {
       const ids = order(id)
@@ -34,6 +35,13 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
     [order],
   )
 
+  /** At once where the field is in sight, so that no key typed meanwhile goes astray. */
+  const focus = useCallback((next: Chosen) => {
+    const input = inputs.current.get(`${next.id} ${next.which}`)
+    if (input === undefined || input.offsetParent === null) return setWanted(next)
+    input.focus()
+    input.scrollIntoView({ block: 'nearest' })
+  }, [])
   // A field may only come into being with the place or the group it lies in, so the cursor follows after the draw.
   useEffect(() => {
     if (wanted === undefined) return
@@ -55,9 +63,9 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
       const where = placeOf(places, reading)
       if (where !== undefined) setAt(where.id)
       setChosen({ id: reading, which: 'lower' })
-      if (first === reading) setWanted({ id: reading, which: 'lower' })
+      if (first === reading) focus({ id: reading, which: 'lower' })
     },
-    [edition, dispatch, places],
+    [edition, dispatch, places, focus],
   )
 
   return {
@@ -85,10 +93,10 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
       dispatch({ do: 'settle' })
     },
     go,
-    focus: (next) => setWanted(next),
+    focus,
     goOn: (id) => {
       const next = following(id)
-      if (next !== undefined) setWanted({ id: next, which: 'lower' })
+      if (next !== undefined) focus({ id: next, which: 'lower' })
       else if (document.activeElement instanceof HTMLElement) document.activeElement.blur()
     },
     after: (id) => {

@@ -9,7 +9,7 @@ import type { SheetContent } from './sheet-content.ts'
 export type Live = {
   /** Of the findings in view, or of those before while these are ranked; undefined before the first. */
   diagnosis: Diagnosis | undefined
-  /** The one before, to say what moved. */
+  /** The one before the last finding was begun, to say what that moved. */
   before: Diagnosis | undefined
   errors: FieldErrors
   /** Ranking itself failed. */
@@ -32,6 +32,8 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
     failed: false,
   })
   const first = useRef(true)
+  const since = useRef<{ step: number; diagnosis: Diagnosis | undefined }>({ step: -1, diagnosis: undefined })
+  const step = content.past.length
   useEffect(() => {
     let newest = true
     const { sheet } = readable
@@ -39,7 +41,12 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
     const rank = () =>
       void diagnose(edition, sheet).then(
         (diagnosis) => {
-          if (newest) setLive((last) => ({ diagnosis, before: last.diagnosis, failed: false }))
+          if (!newest) return
+          setLive((last) => {
+            // Keys of one number are one step: what moved is told against the ranking before its first.
+            if (since.current.step !== step) since.current = { step, diagnosis: last.diagnosis }
+            return { diagnosis, before: since.current.diagnosis, failed: false }
+          })
         },
         () => {
           if (newest) setLive((last) => ({ ...last, failed: true }))

@@ -10,14 +10,3 @@ export async function putFile(hash: string, bytes: Uint8Array): Promise<void> {
   const tx = (await database()).transaction('files', 'readwrite', strict)
   await Promise.all([tx.store.put({ hash, bytes }), tx.done])
 }
-
-/** Hashes of all files on this device. */
-export async function listFiles(): Promise<string[]> {
-  return (await database()).getAllKeys('files')
-}
-
-/** Drops files that nothing on this device names any more. */
-export async function removeFiles(hashes: readonly string[]): Promise<void> {
-  const tx = (await database()).transaction('files', 'readwrite', strict)
-  await Promise.all([...hashes.map((hash) => tx.store.delete(hash)), tx.done])
-}

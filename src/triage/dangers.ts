@@ -1,7 +1,7 @@
 import type { DangerId } from './triage-state.ts'
 
 /** One of the things a question joins: what is recorded, and which stop's words it has. */
-export type Part = {
+type Part = {
   id: string
   label: string
   /** Finding → value. */

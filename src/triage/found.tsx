@@ -97,7 +97,7 @@ function MoreTests({ edition, diagnosis }: { edition: Edition; diagnosis: Diagno
         <ul>
           {tests.map(({ test }) => (
             <li key={test} className="border-b border-rule">
-              <Link to={wayTo(test)} className="link-alone min-h-touch">
+              <Link to={wayTo(test)} className="link-alone py-2 leading-[1.3]">
                 {inHomeownerWords(edition.tests.get(test)?.title ?? test)}
               </Link>
             </li>
@@ -120,7 +120,7 @@ function ToRead({ verdict }: { verdict: PlainVerdict }) {
       <ul>
         {found.slice(0, 4).map((article) => (
           <li key={article.slug} className="border-b border-rule">
-            <Link to={`/articles/${article.slug}`} className="link-alone min-h-touch">
+            <Link to={`/articles/${article.slug}`} className="link-alone py-2 leading-[1.3]">
               {article.title}
             </Link>
           </li>
@@ -135,8 +135,11 @@ export function Found({ edition, diagnosis }: { edition: Edition; diagnosis: Dia
   const { causes: procedures } = useProcedures(false)
   const verdict = plainVerdict(edition, diagnosis)
   const misfit = diagnosis.misfit !== undefined
-  const first = verdict.fits[0]?.causes[0]?.cause
-  const danger = first === undefined ? undefined : procedures.get(first)?.danger
+  const [fitting] = verdict.fits
+  const first = fitting?.causes[0]?.cause
+  // Where sound wiring looks the same, a warning of one fault would say too much.
+  const asSound = fitting?.causes.some(({ cause }) => cause === 'sound') === true
+  const danger = first === undefined || asSound ? undefined : procedures.get(first)?.danger
   return (
     <>
       {verdict.metalMayBeLive || misfit ? (
@@ -145,7 +148,12 @@ export function Found({ edition, diagnosis }: { edition: Edition; diagnosis: Dia
           Switch its breaker off if you can reach it without touching other metal. Leave it off and call.
         </SignalPanel>
       ) : (
-        danger !== undefined && <SignalPanel word={danger.level}>{danger.text}</SignalPanel>
+        danger !== undefined && (
+          <SignalPanel word={danger.level}>
+            <b>{inHomeownerWords(edition.causes.get(first ?? '')?.title ?? '')}.</b>{' '}
+            {inHomeownerWords(danger.text)}
+          </SignalPanel>
+        )
       )}
       {diagnosis.misfit === undefined ? (
         <Verdict edition={edition} verdict={verdict} procedures={procedures} />

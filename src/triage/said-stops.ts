@@ -9,13 +9,14 @@ export const dangersSaid = (triage: Triage): readonly Danger[] =>
 /** A stop as the page shows it. */
 export type Here = { id: string; mayBeGhost: boolean }
 
-const place = (id: string): number => {
-  const at = worstFirst.indexOf(id)
+/** Where a stop stands among the words: 0 is the worst. */
+export const rank = (stop: string | undefined): number => {
+  const at = worstFirst.indexOf(stop ?? '')
   return at < 0 ? worstFirst.length : at
 }
 
 /** The worst first. */
-export const byWorst = (stops: Iterable<Here>): Here[] => [...stops].sort((a, b) => place(a.id) - place(b.id))
+export const byWorst = (stops: Iterable<Here>): Here[] => [...stops].sort((a, b) => rank(a.id) - rank(b.id))
 
 /** Stops that the answers to step 1 say, needing no edition, the worst first: an open "which" counts as the worst of its question. */
 export function saidStops(triage: Triage): Here[] {

@@ -12,11 +12,13 @@ import { StopWords } from './stop-words.tsx'
 import type { DangerId } from './triage-state.ts'
 import { useTriage } from './triage-store.tsx'
 import { WhichWasIt } from './which-was-it.tsx'
-import { onlyWarm, saidStops } from './said-stops.ts'
+import { onlyWarm, rank, saidStops } from './said-stops.ts'
 
-const parts = dangers.flatMap((danger) =>
-  danger.parts.map((part) => ({ value: `${danger.id}/${part.id}`, label: part.label })),
-)
+/** Every danger that can be named, in a sentence of its own, the worst first. */
+const choices = dangers
+  .flatMap((danger) => danger.parts.map((part) => ({ danger: danger.id, part })))
+  .sort((a, b) => rank(a.part.stop) - rank(b.part.stop))
+  .map(({ danger, part }) => ({ value: `${danger}/${part.id}`, label: part.said }))
 
 /** Come straight from the danger bar: first what holds for all, then which it is. */
 function StraightHere() {
@@ -39,7 +41,7 @@ function StraightHere() {
       </CallButton>
       <Rail title="What is it?">
         <p className="mb-2 mt-1 text-small text-ink-2">Choose one, and we say what to do in that case.</p>
-        <OptionList label="What is it?" ways={parts} value={undefined} onChoose={choose} />
+        <OptionList label="What is it?" ways={choices} value={undefined} onChoose={choose} />
       </Rail>
       <LinkButton to="/check/1" wide>
         None of these: ask me the questions

@@ -25,6 +25,15 @@ export function useTriage(): TriageStore {
   return store
 }
 
+const patienceMs = 3000
+
+/** What a promise brings, or a rejection when it takes too long. */
+const within = <T,>(ms: number, promise: Promise<T>): Promise<T> =>
+  Promise.race([
+    promise,
+    new Promise<never>((_, reject) => setTimeout(() => reject(new Error('took too long')), ms)),
+  ])
+
 const titleOf = (triage: Triage): string =>
   triage.where.trim() === '' ? 'Check my power' : triage.where.trim()
 
@@ -41,31 +50,36 @@ export function TriageProvider({ edition, children }: { edition: string | undefi
   useEffect(() => {
     hash.current = edition
   }, [edition])
+  /** The last write failed, or never ended. */
+  const broken = useRef(false)
   /** Writes go one after another, so that an older answer never lands on a newer one. */
   const queue = useRef<Promise<void>>(Promise.resolve())
 
   useEffect(() => {
     let wanted = true
+    const start = (triage: Triage) => {
+      if (!wanted) return
+      wanted = false
+      latest.current = triage
+      setDrawn(triage)
+    }
     const open = async () => {
       const kept = await getSetting('openTriage')
       const doc = kept === undefined ? undefined : await loadSheet(kept)
       const read = Triage.safeParse(doc?.content)
-      if (doc === undefined || !read.success) return blank
-      id.current = doc.id
-      return read.data
+      if (doc === undefined || !read.success) return start(blank)
+      if (wanted) id.current = doc.id
+      start(read.data)
     }
-    open()
-      .catch(() => {
-        if (wanted) setKeepsNothing(true)
-        return blank
-      })
-      .then((triage) => {
-        if (!wanted) return
-        latest.current = triage
-        setDrawn(triage)
-      })
-      .catch(() => undefined)
+    const withoutStore = () => {
+      if (wanted) setKeepsNothing((broken.current = true))
+      start(blank)
+    }
+    void open().catch(withoutStore)
+    // A store that never answers must not keep back what to do in danger.
+    const impatient = setTimeout(withoutStore, patienceMs)
     return () => {
+      clearTimeout(impatient)
       wanted = false
     }
   }, [])
@@ -89,13 +103,16 @@ export function TriageProvider({ edition, children }: { edition: string | undefi
       const next = how(latest.current)
       latest.current = next
       const written = queue.current
-        .then(() => keep(next))
+        .then(() => within(patienceMs, keep(next)))
         .then(
-          () => setKeepsNothing(false),
-          () => setKeepsNothing(true),
+          () => setKeepsNothing((broken.current = false)),
+          () => setKeepsNothing((broken.current = true)),
         )
       queue.current = written
-      return written.then(() => setDrawn(latest.current))
+      const draw = () => setDrawn(latest.current)
+      // Where nothing is kept, waiting for it would only keep back the answer.
+      if (broken.current) draw()
+      return written.then(draw)
     },
     [keep],
   )

@@ -13,9 +13,6 @@ const marks: Record<HazardClass, { path: string; words: string }> = {
   'open-live': { path: open + wave, words: 'Cover off, live: qualified only' },
 }
 
-/** The words of a hazard class, where they are needed without the drawing. */
-export const hazardWords = (hazard: HazardClass): string => marks[hazard].words
-
 /** How much of the enclosure is open and whether something may be live: a box, always with its words. */
 export function HazardMark({ hazard, words }: { hazard: HazardClass; words?: string }) {
   return (

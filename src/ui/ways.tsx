@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import { useRoving } from './use-roving.ts'
 
-export type Way<Value extends string> = {
+type Way<Value extends string> = {
   value: Value
   label: ReactNode
   /** Second line, smaller: "7 readings". */

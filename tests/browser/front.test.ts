@@ -1,5 +1,8 @@
 import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { editionBytes } from '../../server/editions/edition-bytes.ts'
+import { putInForce } from '../../server/editions/put-in-force.ts'
+import { readStarter } from '../../server/editions/read-starter.ts'
 import { axeFindings } from './axe.ts'
 import { desk, openBrowser, openSite, phone, settled, visit } from './browser.ts'
 import type { Site } from './browser.ts'
@@ -113,4 +116,22 @@ test('after a navigation the focus stands on the new page’s heading', async ()
     .poll(() => page.evaluate(() => document.activeElement?.textContent))
     .toBe('Before you touch anything')
   await end()
+})
+
+test('an edition put in force meanwhile is offered, and changes nothing until its button is pressed', async () => {
+  const own = await openSite()
+  const { page, end } = await visit(browser, own)
+  await page.goto('/')
+  await page.getByText(/Answers from edition 1,/).waitFor()
+  const next = await readStarter()
+  next.diagnosis.causes[0]!.title += ' (revised)'
+  await putInForce(own.database.db, editionBytes(next), { note: 'second', reason: 'for this test' })
+  await page.getByText('Edition 2 is in force.').waitFor()
+  await page.getByText('Your sheet stays on 1.').waitFor()
+  expect(await page.getByText(/Answers from edition 1,/).isVisible()).toBe(true)
+  await page.getByRole('button', { name: 'Load edition 2' }).click()
+  await page.getByText(/Answers from edition 2,/).waitFor()
+  expect(await page.getByText('Edition 2 is in force.').count()).toBe(0)
+  await end()
+  await own.close()
 })

@@ -85,7 +85,7 @@ describe('one yes stops', () => {
     await page.goto('/')
     await page.getByRole('link', { name: /What to do now/ }).click()
     await page.getByRole('heading', { level: 1, name: 'Stop. Keep away from it.' }).waitFor()
-    await page.getByRole('radio', { name: 'Hot, swollen or hissing' }).click()
+    await page.getByRole('radio', { name: 'A battery is hot, swollen or hissing.' }).click()
     await page.getByRole('heading', { level: 1, name: 'The battery may burn. Leave now.' }).waitFor()
     await end()
   })
@@ -261,6 +261,20 @@ describe('nothing is lost', () => {
     await end()
     await own.close()
   })
+})
+
+test('a browser that keeps nothing says so, and the check goes on', async () => {
+  const { page, end } = await visit(browser, site)
+  await page.addInitScript(() => {
+    IDBFactory.prototype.open = () => {
+      throw new DOMException('not here', 'SecurityError')
+    }
+  })
+  await answerAllNo(page)
+  await page.getByText('This device can’t keep your answers.').waitFor()
+  await page.getByRole('button', { name: 'Next: what feeds it' }).click()
+  await page.getByRole('heading', { level: 1, name: 'What feeds it?' }).waitFor()
+  await end()
 })
 
 describe.each(['light', 'dark'] as const)('in the %s theme axe finds nothing', (theme: Theme) => {

@@ -147,8 +147,8 @@ describe('what is said of it', () => {
     expect(verdict(on(119.6, 0.3, 119.2), bulbWeight).open).toMatch(/only bond/)
   })
   it('leads with halfway only where it is', () => {
-    expect(verdict(on(119.6, 56.8, 57.2)).lead).toBe('About halfway, 5.6 V short.')
-    expect(verdict(on(119.6, 20, 70)).lead).toBe('29.6 V short.')
+    expect(verdict(on(119.6, 56.8, 57.2)).lead).toBe('About halfway, untied.')
+    expect(verdict(on(119.6, 20, 70)).lead).toBe('Ground is untied here.')
   })
   it('never says that something is safe, and never names a bond from a picture', () => {
     const maybe = fc.option(fc.double({ min: 0, max: 300, noNaN: true }), { nil: undefined })

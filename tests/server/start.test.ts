@@ -8,6 +8,8 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { afterAll, beforeAll, expect, test } from 'vitest'
+import { editionInForce } from '../../server/editions/editions.queries.ts'
+import { testDatabase } from './database.ts'
 import { until } from './until.ts'
 
 const root = fileURLToPath(new URL('../..', import.meta.url))
@@ -91,6 +93,22 @@ test('a wrong variable stops the start before a database is made, with every fau
   expect(second.said()).toMatch(/^ {2}PORT must.*\n {2}LOG_LEVEL must/m)
   expect(existsSync(join(elsewhere, 'postgres'))).toBe(false)
   await rm(elsewhere, { recursive: true })
+})
+
+test('with DATABASE_URL it uses that PostgreSQL and starts none', async () => {
+  const database = await testDatabase('empty')
+  const elsewhere = await mkdtemp(join(tmpdir(), 'tracelamp-start-'))
+  const other = start({ DATA_DIR: elsewhere, PORT: String(await freePort()), DATABASE_URL: database.url })
+  try {
+    await until(() => (other.said().includes('Tracelamp is at') ? true : undefined), patienceMs)
+    expect(await editionInForce(database.db)).toMatchObject({ number: 1, note: 'starter edition' })
+    expect(existsSync(join(elsewhere, 'postgres'))).toBe(false)
+  } finally {
+    other.child.kill('SIGTERM')
+    expect(await other.code).toBe(0)
+    await database.close()
+    await rm(elsewhere, { recursive: true })
+  }
 })
 
 test('PostgreSQL killed under it is started again; meanwhile it answers 503 with Retry-After', async () => {

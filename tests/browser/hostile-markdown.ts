@@ -1,0 +1,37 @@
+/** Markdown that tries to be more than text: what each tries, and how. A mark in `window.harmed` would tell. */
+const harm = 'window.harmed=true'
+export const hostileMarkdown: readonly (readonly [tries: string, markdown: string])[] = [
+  ['a script', `<script>${harm}</script>`],
+  ['a script in a quotation', `> **Danger:** <script>${harm}</script> text`],
+  ['a script split by quotations', `> <scr\n>> ipt>${harm}</script>`],
+  ['nested quotations', `${'>'.repeat(60)} **Warning:** <img src=x onerror="${harm}">`],
+  ['a picture that fails', `<img src=x onerror="${harm}">`],
+  ['a picture in Markdown', `![x](x" onerror="${harm})`],
+  ['a picture with a script for its words', `![<img src=x onerror="${harm}">](x.png)`],
+  ['a link that runs', `[press](javascript:${harm})`],
+  ['a link that runs, in capitals', `[press](JAVASCRIPT:${harm})`],
+  ['a link that runs, with entities', `[press](&#106;avascript:${harm})`],
+  ['a link that runs, by reference', `[press][1]\n\n[1]: javascript:${harm}`],
+  ['a bare address that runs', `<javascript:${harm}>`],
+  ['data for an address', `[press](data:text/html;base64,PHNjcmlwdD5oYXJtPC9zY3JpcHQ+)`],
+  ['a title that breaks out', `[press](/tests/x "\\" onmouseover=\\"${harm}")`],
+  ['a drawing', `<svg onload="${harm}"><a xlink:href="javascript:${harm}"><text>x</text></a></svg>`],
+  [
+    'mathematics',
+    `<math><mtext><table><mglyph><style><img src=x onerror="${harm}"></style></mglyph></table></mtext></math>`,
+  ],
+  ['styles', `<style>*{display:none}</style><p style="position:fixed;inset:0">over everything</p>`],
+  ['a frame', `<iframe srcdoc="<script>parent.harmed=true</script>"></iframe>`],
+  ['a form', `<form action="https://elsewhere.test"><input name="password"><button>Sign in</button></form>`],
+  ['names of the page', `<a id="root" name="main" href="#">x</a><form id="location"></form>`],
+  ['another base', `<base href="https://elsewhere.test/">`],
+  ['a code block', '```\n<script>' + harm + '</script>\n```'],
+  ['code in a line', '`<img src=x onerror="' + harm + '">`'],
+  ['a heading', `## <img src=x onerror="${harm}">`],
+  ['a cell', `| a |\n|---|\n| <img src=x onerror="${harm}"> |`],
+  ['a comment', `<!--><img src=x onerror="${harm}">-->`],
+  [
+    'a template',
+    `<template><script>${harm}</script></template><noscript><p title="</noscript><img src=x onerror=${harm}>">`,
+  ],
+]

@@ -1,0 +1,79 @@
+// @vitest-environment jsdom
+import { describe, expect, test } from 'vitest'
+import { proseOf, targetOf } from '../../src/articles/prose-source.ts'
+import { hostileMarkdown } from './hostile-markdown.ts'
+
+const allowed = new Set(
+  'H1 H2 H3 H4 H5 H6 P BR HR UL OL LI STRONG EM DEL CODE PRE BLOCKQUOTE A TABLE THEAD TBODY TR TH TD'.split(
+    ' ',
+  ),
+)
+const elementsOf = (markdown: string) => [...proseOf(markdown).querySelectorAll('*')]
+
+describe('hostile Markdown', () => {
+  test.each(hostileMarkdown)('%s leaves known tags and nothing but harmless links', (_, markdown) => {
+    for (const element of elementsOf(markdown)) {
+      expect(allowed).toContain(element.tagName)
+      for (const { name } of element.attributes) expect([element.tagName, name]).toEqual(['A', 'href'])
+      const href = element.getAttribute('href')
+      const target = href === null ? undefined : targetOf(href)
+      if (target?.kind === 'elsewhere') expect(target.href).toMatch(/^(https?:\/\/|mailto:)/)
+      if (target?.kind === 'page')
+        expect(new URL(target.to, 'https://here.test').origin).toBe('https://here.test')
+    }
+  })
+  test('HTML is shown as the text it is', () => {
+    const fragment = proseOf('Read <b onclick="alert(1)">this</b>')
+    expect(fragment.textContent?.trim()).toBe('Read <b onclick="alert(1)">this</b>')
+    expect(fragment.querySelector('b')).toBeNull()
+  })
+  test('a picture is its words', () => {
+    expect(proseOf('![a panel](https://elsewhere.test/p.png)').querySelector('img')).toBeNull()
+    expect(proseOf('![a panel](https://elsewhere.test/p.png)').textContent?.trim()).toBe('a panel')
+  })
+})
+
+describe('where links lead', () => {
+  test.each([
+    '/articles/floating-neutral',
+    '/causes/open-ground',
+    '/tests/source-bulb',
+    '/articles?q=half%20voltage',
+    '/check',
+    '/diagnosis',
+  ])('%s is a page', (href) => expect(targetOf(href)).toEqual({ kind: 'page', to: href }))
+  test.each(['https://example.test/a?b=c', 'http://example.test/', 'mailto:shop@example.test'])(
+    '%s lies elsewhere',
+    (href) => expect(targetOf(href)).toEqual({ kind: 'elsewhere', href }),
+  )
+  test.each([
+    'javascript:alert(1)',
+    'JaVaScRiPt:alert(1)',
+    'java\tscript:alert(1)',
+    ' javascript:alert(1)',
+    'data:text/html,<script>alert(1)</script>',
+    'vbscript:msgbox(1)',
+    'blob:https://here.test/1',
+    'file:///etc/passwd',
+    '//elsewhere.test/x',
+    '/\\elsewhere.test/x',
+    '/\t/elsewhere.test',
+    '\\\\elsewhere.test',
+    '/api/edition-files/0',
+    '../articles/x',
+    'articles/x',
+    '/articles/../api/edition',
+    '',
+    'https://',
+  ])('%j leads nowhere', (href) => expect(targetOf(href)).toBeUndefined())
+})
+
+describe('what an article may hold', () => {
+  test('headings, steps, quotations, tables, links', () => {
+    const names = elementsOf(
+      '## Danger\n\n> **Warning:** hot\n\n1. one\n2. two\n\n- a\n\n| x | y |\n|---|---|\n| 1 | 2 |\n\n[test](/tests/source-bulb) *and* `code`',
+    ).map((element) => element.tagName)
+    for (const name of ['H2', 'BLOCKQUOTE', 'STRONG', 'OL', 'LI', 'UL', 'TABLE', 'TD', 'A', 'EM', 'CODE'])
+      expect(names).toContain(name)
+  })
+})
