@@ -28,15 +28,14 @@ export async function needPostgres() {
   await installPackage('postgresql', 'PostgreSQL')
 }
 
-/**
- * The folder of PostgreSQL's programs.
- * @param version of the cluster that is there already; without one, the newest
- */
+/** The version a new cluster is made with. */
+export const newestVersion = () => versions()[0]
+
+/** The folder of the programs of one version. A cluster works with the version that made it alone. */
 export function postgresPrograms(version) {
-  const chosen = version ?? versions()[0]
-  if (!versions().includes(chosen))
+  if (!versions().includes(version))
     throw new Fault(
-      `The database was made by PostgreSQL ${chosen}, which is missing: apt-get install postgresql-${chosen}`,
+      `The database was made by PostgreSQL ${version}, which is missing: apt-get install postgresql-${version}`,
     )
-  return join(debian, chosen, 'bin')
+  return join(debian, version, 'bin')
 }

@@ -39,9 +39,7 @@ async function checkConfig() {
 
 async function databaseUrl() {
   if (process.env.DATABASE_URL) return process.env.DATABASE_URL
-  const database = await startDatabase('tracelamp', { folder: join(dataFolder, 'postgres') })
-  beforeEnd(database.stop)
-  return database.url
+  return startDatabase('tracelamp', { folder: join(dataFolder, 'postgres'), beforeEnd })
 }
 
 async function main() {

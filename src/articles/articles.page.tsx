@@ -34,6 +34,7 @@ function Articles({ knowledge }: { knowledge: Knowledge }) {
   const articles = [...knowledge.articles.values()].sort((a, b) => a.title.localeCompare(b.title, 'en'))
   return (
     <Rail
+      id="articles"
       title="Articles"
       action={<span className="text-note text-ink-2">{articles.length} in this edition</span>}
     >
@@ -58,6 +59,7 @@ function Articles({ knowledge }: { knowledge: Knowledge }) {
 function Causes({ causes }: { causes: readonly Cause[] }) {
   return (
     <Rail
+      id="causes"
       title="Causes"
       action={<span className="text-note text-ink-2">{causes.length} in this edition</span>}
     >
@@ -75,7 +77,11 @@ function Causes({ causes }: { causes: readonly Cause[] }) {
 function Tests({ knowledge }: { knowledge: Knowledge }) {
   const { tests } = knowledge.edition.file
   return (
-    <Rail title="Tests" action={<span className="text-note text-ink-2">{tests.length} in this edition</span>}>
+    <Rail
+      id="tests"
+      title="Tests"
+      action={<span className="text-note text-ink-2">{tests.length} in this edition</span>}
+    >
       <ul className="shelf">
         {tests.map((one) => (
           <Row key={one.id} to={addressOf('test', one.id)}>
@@ -107,6 +113,11 @@ export function Component() {
       ) : (
         <div className="mt-4">
           <SearchColumn knowledge={state.knowledge}>
+            <nav className="jumps screen-only" aria-label="On this page">
+              <a href="#articles">Articles</a>
+              <a href="#causes">Causes</a>
+              <a href="#tests">Tests</a>
+            </nav>
             <div className="shelves">
               <Articles knowledge={state.knowledge} />
               <Causes causes={state.knowledge.edition.file.causes} />

@@ -30,7 +30,9 @@ function useRoomForPad(up: boolean, field: string): void {
     const page = document.documentElement
     page.style.scrollPaddingBottom = '400px'
     document.activeElement?.scrollIntoView({ block: 'nearest' })
-    return () => page.style.removeProperty('scroll-padding-bottom')
+    return () => {
+      page.style.removeProperty('scroll-padding-bottom')
+    }
   }, [up, field])
 }
 

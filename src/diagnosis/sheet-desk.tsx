@@ -39,7 +39,7 @@ type SheetDeskProps = { sheet: OpenSheet; edition: Edition; info: EditionInForce
 /** The open sheet: readings at the left, what to do and what it may be at the right; on a phone one below the other. */
 export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   const { typed, stored, dispatch, unkept, keepAgain } = sheet
-  const { diagnosis, before, errors, failed } = useDiagnosis(edition, stored)
+  const { diagnosis, before, stops, errors, failed } = useDiagnosis(edition, stored)
   const desk = useDeskState(edition, sheet, errors)
   const { tests } = useProcedures(true)
   const { articles } = useArticles(true)
@@ -88,7 +88,6 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   })
 
   const offer = offers.open.find((one) => one.key === picked) ?? offers.open[0]
-  const stops = diagnosis?.stops ?? []
   return (
     <DeskContext value={desk}>
       <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
@@ -146,7 +145,7 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
               mended.
             </p>
           )}
-          {diagnosis === undefined ? (
+          {failed ? null : diagnosis === undefined ? (
             <Waiting what="the ranking" />
           ) : (
             <>

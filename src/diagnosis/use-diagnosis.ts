@@ -1,7 +1,8 @@
 import { useEffect, useMemo, useRef, useState } from 'react'
 import type { Edition } from '../../rules/edition/open.ts'
 import type { FieldErrors } from '../../rules/findings/parse.ts'
-import type { Diagnosis } from '../../rules/ranking/diagnosis-types.ts'
+import { stopsOf } from '../../rules/ranking/stop.ts'
+import type { Diagnosis, Stop } from '../../rules/ranking/diagnosis-types.ts'
 import { diagnose } from '../../rules/ranking/diagnose.ts'
 import { rawSheetOf, readWhatCanBe } from './raw-sheet.ts'
 import type { SheetContent } from './sheet-content.ts'
@@ -11,6 +12,8 @@ export type Live = {
   diagnosis: Diagnosis | undefined
   /** The one before the last finding was begun, to say what that moved. */
   before: Diagnosis | undefined
+  /** What stops, at once: it waits for no ranking, and stands even if that fails. */
+  stops: readonly Stop[]
   errors: FieldErrors
   /** Ranking itself failed. */
   failed: boolean
@@ -26,7 +29,11 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
   // NaN, where the meter's ohms are not typed in full, would be null in JSON: either way the key differs.
   const key = JSON.stringify(raw)
   const readable = useMemo(() => readWhatCanBe(edition, raw), [edition, key])
-  const [live, setLive] = useState<Omit<Live, 'errors'>>({
+  const stops = useMemo(
+    () => (readable.sheet === undefined ? [] : stopsOf(edition, readable.sheet)),
+    [edition, readable],
+  )
+  const [live, setLive] = useState<Omit<Live, 'errors' | 'stops'>>({
     diagnosis: undefined,
     before: undefined,
     failed: false,
@@ -49,7 +56,8 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
           })
         },
         () => {
-          if (newest) setLive((last) => ({ ...last, failed: true }))
+          // An older answer must not stand beside newer findings.
+          if (newest) setLive({ diagnosis: undefined, before: undefined, failed: true })
         },
       )
     const timer = setTimeout(rank, first.current ? 0 : gatherMs)
@@ -59,5 +67,5 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
       clearTimeout(timer)
     }
   }, [edition, readable])
-  return { ...live, errors: readable.errors }
+  return { ...live, stops, errors: readable.errors }
 }

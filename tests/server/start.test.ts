@@ -7,13 +7,14 @@ import type { AddressInfo } from 'node:net'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
-import { afterAll, beforeAll, expect, test } from 'vitest'
+import { afterAll, beforeAll, expect, test, vi } from 'vitest'
 import { editionInForce } from '../../server/editions/editions.queries.ts'
 import { testDatabase } from './database.ts'
 import { until } from './until.ts'
 
 const root = fileURLToPath(new URL('../..', import.meta.url))
 const patienceMs = 60_000
+vi.setConfig({ testTimeout: patienceMs, hookTimeout: patienceMs })
 
 type Start = { child: ChildProcess; said: () => string; code: Promise<number | null> }
 
@@ -57,7 +58,7 @@ beforeAll(async () => {
   address = `http://127.0.0.1:${port}`
   running = start({ DATA_DIR: folder, PORT: port })
   await ready(running)
-}, patienceMs)
+})
 afterAll(async () => {
   running.child.kill('SIGTERM')
   await running.code
