@@ -4,7 +4,7 @@
  */
 import * as z from 'zod/mini'
 
-export const operators = [
+const operators = [
   'equal',
   'in',
   'lessThan',
@@ -26,8 +26,8 @@ const Comparison = z.strictObject({
   value: z.union([Literal, z.array(Literal).check(z.minLength(1))]),
 })
 
-export const maxDepth = 4
-export const maxComparisons = 32
+const maxDepth = 4
+const maxComparisons = 32
 
 const Tree: z.ZodMiniType<Condition> = z.lazy(() =>
   z.union([

@@ -28,7 +28,7 @@ const byId = <T extends { id: string }>(list: readonly T[]): ReadonlyMap<string,
   new Map(list.map((one) => [one.id, one]))
 
 /** Every fault of an edition that its schema can't see: ids that lead nowhere, rules on unknown facts. */
-export function faultsOf(edition: Edition): string[] {
+function faultsOf(edition: Edition): string[] {
   const { file } = edition
   const faults: string[] = []
   const twice = (what: string, ids: readonly string[]) => {

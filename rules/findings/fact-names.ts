@@ -8,7 +8,7 @@ export const places = ['receptacle', 'panel', 'source'] as const
 export type Place = (typeof places)[number]
 
 /** Where the third corner lies, from three volts at one place; `volts-pattern.ts` says how each is told. */
-export const patterns = [
+const patterns = [
   'dead',
   'on-neutral',
   'on-hot',
@@ -31,7 +31,7 @@ export const patterns = [
 export type Pattern = (typeof patterns)[number]
 
 /** A voltage against the system's nominal one. */
-export const levels = [
+const levels = [
   'nil',
   'trace',
   'part',
@@ -45,14 +45,14 @@ export const levels = [
 ] as const
 export type Level = (typeof levels)[number]
 
-export const weights = ['light', 'middle', 'heavy'] as const
-export const drops = ['rise', 'none', 'usual', 'much', 'severe', 'collapse'] as const
-export const shares = ['none', 'little', 'small', 'half', 'most'] as const
+const weights = ['light', 'middle', 'heavy'] as const
+const drops = ['rise', 'none', 'usual', 'much', 'severe', 'collapse'] as const
+const shares = ['none', 'little', 'small', 'half', 'most'] as const
 /** Hot–neutral against the limits for this kind of source. */
-export const supplies = ['far-low', 'low', 'lowish', 'within', 'highish', 'high', 'far-high'] as const
+const supplies = ['far-low', 'low', 'lowish', 'within', 'highish', 'high', 'far-high'] as const
 export type Supply = (typeof supplies)[number]
-export const ohmBands = ['tied', 'poor', 'rods', 'load', 'open'] as const
-export const bulbStates = ['dark', 'dim', 'bright'] as const
+const ohmBands = ['tied', 'poor', 'rods', 'load', 'open'] as const
+const bulbStates = ['dark', 'dim', 'bright'] as const
 
 const derived: Record<string, 'number' | readonly string[]> = {
   'context.legs': ['1', '2'],
@@ -123,7 +123,7 @@ for (const place of places) {
 const lamp = ['lit', 'dim', 'dark']
 derived['tester.lamps'] = lamp.flatMap((a) => lamp.flatMap((b) => lamp.map((c) => `${a}/${b}/${c}`)))
 
-export const derivedFacts: Readonly<Record<string, 'number' | readonly string[]>> = derived
+const derivedFacts: Readonly<Record<string, 'number' | readonly string[]>> = derived
 
 /** Every fact a rule of this edition may ask for, with its values, or 'number'. */
 export function factValues(file: DiagnosisFile): ReadonlyMap<string, 'number' | readonly string[]> {

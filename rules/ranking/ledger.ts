@@ -10,7 +10,7 @@ export type Entry = { for: Fired | undefined; against: Fired | undefined }
 const bitsOf = (one: Fired | undefined, cause: number) => one?.rule.bits[cause] ?? 0
 
 /** Net bits of an entry for a cause. */
-export const netOf = (entry: Entry, cause: number) => bitsOf(entry.for, cause) + bitsOf(entry.against, cause)
+const netOf = (entry: Entry, cause: number) => bitsOf(entry.for, cause) + bitsOf(entry.against, cause)
 
 /** By cause index, then group. Per group and cause the strongest for and the strongest against count. */
 export function ledgerOf(edition: Edition, fired: readonly Fired[]): ReadonlyMap<string, Entry>[] {

@@ -6,7 +6,7 @@ import type { ReadyRule } from './engine.ts'
 const short = (x: number) => (x >= 100 ? String(Math.round(x)) : String(Math.round(x * 10) / 10))
 
 /** A finding in words: "Hot–ground 57.2 V", "Tester lamp H–G dim". */
-export function inWords(edition: Edition, id: string, value: string | number): string {
+function inWords(edition: Edition, id: string, value: string | number): string {
   const reading = edition.readings.get(id)
   if (reading !== undefined && typeof value === 'number') {
     const over = (reading.unit === 'Ω' || reading.unit === 'MΩ') && value >= overLimitOhms

@@ -88,13 +88,9 @@ export function FieldStrip() {
           size="small"
           pressed={unsteady}
           onPress={() => {
-            dispatch({
-              do: 'set',
-              mode,
-              id,
-              part: { upper: unsteady ? undefined : '' },
-              of: `${label}, unsteady`,
-            })
+            const part = { upper: unsteady ? undefined : '' }
+            dispatch({ do: 'set', mode, id, part, of: `${label}, unsteady` })
+            desk.focus({ id, which: unsteady || (entry?.text ?? '') === '' ? 'lower' : 'upper' })
           }}
         >
           Unsteady

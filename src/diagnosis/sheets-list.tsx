@@ -56,7 +56,7 @@ function Row({ doc }: { doc: SheetDoc }) {
   }
   const remove = async () => {
     await removeSheet(doc.id)
-    say({ text: `“${doc.title}” removed`, action: { word: 'Undo', onPress: () => void saveSheet(doc) } })
+    say({ text: 'Sheet removed', action: { word: 'Undo', onPress: () => void saveSheet(doc) } })
   }
   const taken = read.success
     ? Object.values(read.data.entries).flatMap((here) => Object.values(here).filter(isTaken)).length

@@ -19,7 +19,7 @@ export type Check = (look: Look) => Contradiction | undefined
 /** A triple of volts at one place, as parts of nominal. */
 export type Triple = { place: string; hn: number; hg: number; ng: number }
 
-export const places = ['receptacle', 'panel', 'source'] as const
+const places = ['receptacle', 'panel', 'source'] as const
 
 export function triples({ amount, nominal }: Look): Triple[] {
   return places.flatMap((place) => {
