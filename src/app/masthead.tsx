@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react'
-import { Link, NavLink, useLocation } from 'react-router-dom'
+import { Link, useLocation } from 'react-router-dom'
 import { getSetting } from '../offline/settings.ts'
 import { Icon } from '../ui/icon.tsx'
 import { Mark } from './mark.tsx'
@@ -35,6 +35,10 @@ function useStaff(path: string): boolean {
   return staffOnly.test(path) || (shared.test(path) && qualified)
 }
 
+/** Causes and tests are read among the articles, so they stand under that word too. */
+const isUnder = (to: string, path: string) =>
+  to === '/articles' ? shared.test(path) : path === to || path.startsWith(`${to}/`)
+
 /** The head of every page: mark, ways to go, where what was typed lies, theme. On a phone they fold under "Menu". */
 export function Masthead() {
   const { pathname } = useLocation()
@@ -65,9 +69,9 @@ export function Masthead() {
         <div className="mast-panel" id="mast-panel" data-open={open}>
           <nav aria-label="Main">
             {links.map(([to, words]) => (
-              <NavLink key={to} to={to}>
+              <Link key={to} to={to} aria-current={isUnder(to, pathname) ? 'page' : undefined}>
                 {words}
-              </NavLink>
+              </Link>
             ))}
           </nav>
           <ThemeButton />
