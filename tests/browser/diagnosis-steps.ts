@@ -54,8 +54,16 @@ export async function observe(page: Page, word: string, name: string, value: str
   await page.getByRole('button', { name: 'Done', exact: true }).click()
 }
 
-/** The ranking as it stands, first first: "Floating neutral 61 %". */
-export const ranking = (page: Page): Promise<string[]> =>
-  page
-    .locator('[data-cause]')
-    .evaluateAll((heads) => heads.map((head) => (head.textContent ?? '').replace(/\s+/g, ' ')))
+/** The ranking, first first ("Floating neutral61 %"), once it has stood still for a while. */
+export async function ranking(page: Page): Promise<string[]> {
+  const read = () =>
+    page
+      .locator('[data-cause]')
+      .evaluateAll((heads) => heads.map((head) => (head.textContent ?? '').replace(/\s+/g, ' ')))
+  for (let before = await read(); ;) {
+    await page.waitForTimeout(300)
+    const now = await read()
+    if (now.length > 0 && now.join() === before.join()) return now
+    before = now
+  }
+}
