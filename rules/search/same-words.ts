@@ -78,7 +78,7 @@ export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'af
 
 /** Words too common to say anything. */
 export const emptyWords: ReadonlySet<string> = new Set(
-  'a an and are as at be been but by can did do does for from get got had has have how i if in into is it its my of on or so that the their them then there they this to was what which while why will with you your'.split(
+  'a am an and are as at be been but by can did do does for from get got had has have how i if in into is it its my of on or so that the their them then there they this to was what which while why will with you your'.split(
     ' ',
   ),
 )
