@@ -360,7 +360,7 @@ describe('installing a bond', () => {
     await page.getByRole('button', { name: /^Receptacle/ }).click()
     await readThree(page, '120', '0.2', '119.9')
     await page
-      .getByText(/Never while this stands: at the receptacle ground holds on one of the two wires/)
+      .getByText(/Never while this stands. At the receptacle ground holds on one of the two wires/)
       .waitFor()
     await end()
   })
