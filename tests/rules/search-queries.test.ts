@@ -18,7 +18,9 @@ describe('the judged queries', () => {
       for (const slug of want) expect(slugs, `${query}: ${slug}`).toContain(slug)
   })
   test('hardly ever stand in an article word by word: that would answer them by heart', () => {
-    const said = new Set(articles.flatMap(({ title, words }) => [title, ...words]).map((s) => s.toLowerCase()))
+    const said = new Set(
+      articles.flatMap(({ title, words }) => [title, ...words]).map((s) => s.toLowerCase()),
+    )
     // Three came out alike by chance: the queries were written without sight of the articles’ words.
     const alike = queries.map(({ query }) => query).filter((query) => said.has(query.toLowerCase()))
     expect(alike.length, alike.join('\n')).toBeLessThanOrEqual(3)
