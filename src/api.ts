@@ -60,6 +60,15 @@ export async function get<Contract extends z.ZodMiniType>(
   throw new ApiProblem(answer.status, 'The server and this page don’t match. Load the page again.')
 }
 
+const Health = z.object({ status: z.literal('up') })
+
+/** Whether our server answers, now. */
+export const serverAnswers = (): Promise<boolean> =>
+  get('/health', Health).then(
+    () => true,
+    () => false,
+  )
+
 /**
  * Fetches a file as it is, to be checked against its hash by whoever asked.
  * @param path what follows `/api`, for example `/edition-files/<hash>`
