@@ -73,12 +73,11 @@ export const serverAnswers = (): Promise<boolean> =>
  * Fetches a file as it is, to be checked against its hash by whoever asked.
  * @param path what follows `/api`, for example `/edition-files/<hash>`
  */
-export async function getBytes(path: string, signal?: AbortSignal): Promise<Uint8Array> {
-  const answer = await ask(path, '*/*', signal)
+export async function getBytes(path: string): Promise<Uint8Array> {
+  const answer = await ask(path, '*/*', undefined)
   try {
     return new Uint8Array(await answer.arrayBuffer())
   } catch (problem) {
-    if (signal?.aborted === true) throw problem
     throw new NoNetwork(problem)
   }
 }

@@ -39,11 +39,10 @@ export function onSheetsChanged(listener: () => void): () => void {
  */
 export async function saveSheet(doc: SheetDoc): Promise<void> {
   const tx = (await database()).transaction('sheets', 'readwrite', strict)
-  const known = tx.store.getKey(doc.id)
-  await Promise.all([tx.store.put(doc), tx.done])
+  const [known] = await Promise.all([tx.store.getKey(doc.id), tx.store.put(doc), tx.done])
   changed()
   // A check is never interrupted by a browser that asks the person back.
-  if (doc.kind === 'diagnosis' && (await known) === undefined) void askToLast().catch(() => undefined)
+  if (doc.kind === 'diagnosis' && known === undefined) void askToLast().catch(() => undefined)
 }
 
 /** One sheet, or undefined when this device has none of that id. */
