@@ -5,6 +5,7 @@ import { whenNoSheetIsOpen } from './sheet-lock.ts'
 import { takeOver, workerLeft } from './worker-words.ts'
 
 const lookEveryMs = 60 * 60_000
+const tryEveryMs = 60_000
 
 let waiting: ServiceWorker | undefined
 /** This tab loads itself anew once the newer worker has taken over. */
@@ -45,6 +46,8 @@ function follow(registration: ServiceWorkerRegistration): void {
   look()
   const ask = () => void registration.update().catch(() => undefined)
   setInterval(ask, lookEveryMs)
+  // The last sheet may be closed in another tab, of which this one hears nothing.
+  setInterval(takeOverUnnoticed, tryEveryMs)
   document.addEventListener('visibilitychange', () => {
     if (document.visibilityState === 'visible') ask()
     else takeOverUnnoticed()

@@ -12,8 +12,10 @@ import { choose } from './check-steps.ts'
 import { untilServed, workersTraces } from './devices.ts'
 
 const dist = fileURLToPath(new URL('../../dist', import.meta.url))
-const { buildWorker } = (await import(new URL('../../server/setup/worker.mjs', import.meta.url).href)) as {
-  buildWorker: (folder: string) => Promise<void>
+const setup = (name: string) => import(new URL(`../../server/setup/${name}`, import.meta.url).href)
+const { buildWorker } = (await setup('worker.mjs')) as { buildWorker: (folder: string) => Promise<void> }
+const { takeOverBuilds } = (await setup('former-builds.mjs')) as {
+  takeOverBuilds: (from: string, to: string) => Promise<void>
 }
 
 /** The next build: the same pages with a mark in them, and a worker of their own. */
@@ -99,7 +101,10 @@ test('out of sight they take over, but never while a sheet is open in any tab', 
   expect(await buildOf(sheet)).toBe('first')
   await setHidden(page, false)
   await sheet.getByRole('link', { name: 'Tracelamp' }).click()
-  await sheet.waitForURL(`${site.url}/`)
+  await sheet.getByRole('heading', { level: 1, name: /Something is wrong/ }).waitFor()
+  await expect
+    .poll(() => sheet.evaluate(async () => (await navigator.locks.query()).held), patience)
+    .toEqual([])
   await setHidden(page, true)
   await expect.poll(() => buildOf(page).catch(() => ''), patience).toBe('next')
   // The tab that is being looked at is not pulled away under anyone's eyes; what was answered is on the device.
