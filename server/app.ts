@@ -13,12 +13,13 @@ import { noSuchRoute, problems } from './problem.ts'
 import { requestLog } from './request-log.ts'
 import { security } from './security.ts'
 import { site } from './site.ts'
+import { workerOff } from './worker-off.ts'
 
 export type AppParts = {
   db: Db
   feed: EditionFeed
   log: Log
-  config: Pick<Config, 'trustProxy'>
+  config: Pick<Config, 'trustProxy' | 'worker'>
   /** Where the built pages lie; the checkout's `dist` unless said. */
   pages?: string
 }
@@ -46,6 +47,7 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     res.set('Cache-Control', 'no-store').json({ status: 'up' })
   })
   app.use('/api', editionRoutes(db, events.route), articleRoutes(db), noSuchRoute)
+  if (!config.worker) app.use(workerOff)
   app.use(site(pages))
   app.use(problems(log))
   return { app, close: events.close }

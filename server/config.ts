@@ -18,6 +18,7 @@ const Environment = z.object({
   }),
   LOG_LEVEL: z.enum(logLevels, { error: `must be one of ${logLevels.join(', ')}` }).default('info'),
   TRUST_PROXY: wholeNumber('how many proxies stand before the server', 9).default(0),
+  WORKER: z.enum(['on', 'off'], { error: 'must be on or off' }).default('on'),
   SESSION_SECRET: z.string().min(32, 'must have 32 characters or more').optional(),
   NODE_ENV: z
     .enum(['production', 'development', 'test'], { error: 'must be production, development or test' })
@@ -30,6 +31,8 @@ export type Config = Readonly<{
   databaseUrl: string
   logLevel: (typeof logLevels)[number]
   trustProxy: number
+  /** Whether devices may keep the pages, to start without a network. False takes them back from all of them. */
+  worker: boolean
   sessionSecret: string | undefined
   mode: 'production' | 'development' | 'test'
 }>
@@ -55,6 +58,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     databaseUrl: data.DATABASE_URL,
     logLevel: data.LOG_LEVEL,
     trustProxy: data.TRUST_PROXY,
+    worker: data.WORKER === 'on',
     sessionSecret: data.SESSION_SECRET,
     mode: data.NODE_ENV,
   })

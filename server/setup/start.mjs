@@ -53,7 +53,13 @@ async function main() {
   if (dev) {
     const apiPort = await freePort()
     const api = urlOf('127.0.0.1', apiPort)
-    const env = { DATABASE_URL, HOST: '127.0.0.1', PORT: String(apiPort), NODE_ENV: 'development' }
+    const env = {
+      DATABASE_URL,
+      HOST: '127.0.0.1',
+      PORT: String(apiPort),
+      NODE_ENV: 'development',
+      WORKER: 'off',
+    }
     await startServer({ env, address: api, watch: true })
     await startPages({ host, port, api })
   } else await startServer({ env: { DATABASE_URL }, address: urlOf(nearby, port) })

@@ -1,4 +1,6 @@
+import { useQueryClient } from '@tanstack/react-query'
 import { useCallback, useEffect, useState } from 'react'
+import { keepAgain } from '../editions/edition.api.ts'
 import { getSetting, setSetting } from '../offline/settings.ts'
 
 export type Stated = { statedAt: string }
@@ -18,11 +20,18 @@ export function useQualified(): { qualified: Qualified; state: () => void; withd
       wanted = false
     }
   }, [])
-  const set = useCallback((stated: Stated | null) => {
-    // Where the device keeps nothing the statement holds for this visit alone.
-    void setSetting('qualified', stated ?? undefined).catch(() => undefined)
-    setQualified(stated)
-  }, [])
+  const client = useQueryClient()
+  const set = useCallback(
+    (stated: Stated | null) => {
+      // Where the device keeps nothing the statement holds for this visit alone. Else it now keeps what is for
+      // qualified people too, before the network goes.
+      void setSetting('qualified', stated ?? undefined)
+        .then(() => keepAgain(client))
+        .catch(() => undefined)
+      setQualified(stated)
+    },
+    [client],
+  )
   return {
     qualified,
     state: () => set({ statedAt: new Date().toISOString() }),

@@ -11,19 +11,32 @@ export function hashOf(info: EditionInForce, name: FileName): string {
   return file.hash
 }
 
-/**
- * Brings an edition's file: from this device, else from the server, and then keeps it.
- * @throws Error when what came is not the file of that hash; NoNetwork or ApiProblem when nothing came
- */
-export async function bringFile(hash: string, signal?: AbortSignal): Promise<Uint8Array> {
-  // A private window may have no database: the file is then fetched each time.
-  const kept = await getFile(hash).catch(() => undefined)
-  if (kept !== undefined) return kept
-  const bytes = await getBytes(`/edition-files/${hash}`, signal)
+/** Files on their way: a page that shows one and the keeping of it ask at the same time. */
+const coming = new Map<string, Promise<Uint8Array>>()
+
+async function fetchFile(hash: string): Promise<Uint8Array> {
+  const bytes = await getBytes(`/edition-files/${hash}`)
   if (bytesToHex(sha256(bytes)) !== hash) throw new Error('The file came damaged. Try again.')
   // A full device is no reason to show nothing.
   await putFile(hash, bytes).catch(() => undefined)
   return bytes
+}
+
+/**
+ * Brings an edition's file: from this device, else from the server, and then keeps it.
+ * @throws Error when what came is not the file of that hash; NoNetwork or ApiProblem when nothing came
+ */
+export async function bringFile(hash: string): Promise<Uint8Array> {
+  // A private window may have no database: the file is then fetched each time.
+  const kept = await getFile(hash).catch(() => undefined)
+  if (kept !== undefined) return kept
+  const file = coming.get(hash) ?? fetchFile(hash)
+  coming.set(hash, file)
+  try {
+    return await file
+  } finally {
+    coming.delete(hash)
+  }
 }
 
 /** A file's content, still to be checked by its schema. */

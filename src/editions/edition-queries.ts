@@ -68,10 +68,7 @@ function fileQuery<Content>(
   return queryOptions({
     ...forGood,
     queryKey: ['edition-file', name, info?.files.find((file) => file.name === name)?.hash] as const,
-    queryFn:
-      info === undefined
-        ? skipToken
-        : async ({ signal }) => read(readJson(await bringFile(hashOf(info, name), signal))),
+    queryFn: info === undefined ? skipToken : async () => read(readJson(await bringFile(hashOf(info, name)))),
   })
 }
 

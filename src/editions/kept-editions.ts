@@ -1,6 +1,7 @@
 import * as z from 'zod/mini'
 import { EditionInForce } from '../../server/editions/editions.contract.ts'
 import type { FileName } from '../../server/editions/editions.contract.ts'
+import { savesData } from '../offline/network.ts'
 import { getSetting, setSetting } from '../offline/settings.ts'
 import { bringFile, hashOf } from './edition-file.ts'
 
@@ -17,14 +18,19 @@ export async function readKept(): Promise<Kept | undefined> {
 const forEveryone: readonly FileName[] = ['diagnosis', 'procedures-everyone', 'articles-everyone']
 const forQualified: readonly FileName[] = ['procedures-qualified', 'articles-qualified']
 
+/** Whoever saves data has what ranks, and of the rest what was opened. */
+function wanted(qualified: boolean): readonly FileName[] {
+  if (savesData()) return ['diagnosis']
+  return qualified ? [...forEveryone, ...forQualified] : forEveryone
+}
+
 /**
  * Brings all that this device needs of an edition, then names it as the one to open with no network. In this order:
  * a name without its files would open nothing.
  */
 export async function keepEdition(info: EditionInForce): Promise<void> {
   const qualified = (await getSetting('qualified')) !== undefined
-  for (const name of qualified ? [...forEveryone, ...forQualified] : forEveryone)
-    await bringFile(hashOf(info, name))
+  for (const name of wanted(qualified)) await bringFile(hashOf(info, name))
   const before = await readKept()
   const others = before === undefined ? [] : [before.inForce, ...before.earlier]
   const earlier = others.filter((one, index) => {

@@ -97,6 +97,8 @@ test.each(['/', '/api/edition', '/api/nothing-here', '/assets/main-1a2b3c.js'])(
       'img-src': "'self' data: blob:",
       'font-src': "'self'",
       'connect-src': "'self'",
+      'worker-src': "'self'",
+      'manifest-src': "'self'",
       'object-src': "'none'",
       'base-uri': "'none'",
       'form-action': "'self'",

@@ -14,6 +14,8 @@ export type RunningOptions = {
   log?: Log
   /** The built pages; the checkout's `dist` unless said. */
   pages?: string
+  /** Whether devices may keep the pages; they may unless said. */
+  worker?: boolean
   /** 0 unless said: any free one. */
   port?: number
 }
@@ -21,12 +23,18 @@ export type RunningOptions = {
 /** The whole server on a port of loopback, with a pool and a listener of its own, as one process of several would be. */
 export async function runApp(
   databaseUrl: string,
-  { log = openLog('silent'), pages, port = 0 }: RunningOptions = {},
+  { log = openLog('silent'), pages, worker = true, port = 0 }: RunningOptions = {},
 ): Promise<RunningApp> {
   const db = openDatabase(databaseUrl, log)
   const feed = new EditionFeed()
   const unfollow = followEditions(databaseUrl, db, feed, log)
-  const { app, close } = createApp({ db, feed, log, config: { trustProxy: 0 }, ...(pages && { pages }) })
+  const { app, close } = createApp({
+    db,
+    feed,
+    log,
+    config: { trustProxy: 0, worker },
+    ...(pages && { pages }),
+  })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)
