@@ -161,3 +161,13 @@ test('while the database is away: 503 with Retry-After, and the pages still open
     await cutOff.close()
   }
 })
+
+test('scripts go out compressed, as the weight of a page counts on', async () => {
+  const script = `export const text = '${'hot neutral ground '.repeat(400)}'`
+  await writeFile(join(pages, 'assets', 'long-4d5e6f.js'), script)
+  const answer = await fetch(`${app.url}/assets/long-4d5e6f.js`, { headers: { 'accept-encoding': 'gzip' } })
+  expect(answer.headers.get('content-encoding')).toBe('gzip')
+  expect(answer.headers.get('vary')).toMatch(/accept-encoding/i)
+  expect(answer.headers.get('cache-control')).toMatch(/immutable/)
+  expect(await answer.text()).toBe(script)
+})
