@@ -31,18 +31,7 @@ const patterns = [
 export type Pattern = (typeof patterns)[number]
 
 /** A voltage against the system's nominal one. */
-const levels = [
-  'nil',
-  'trace',
-  'part',
-  'half',
-  'sagging',
-  'low',
-  'within',
-  'high',
-  'over',
-  'double',
-] as const
+const levels = ['nil', 'trace', 'part', 'half', 'sagging', 'low', 'within', 'high', 'over', 'double'] as const
 export type Level = (typeof levels)[number]
 
 const weights = ['light', 'middle', 'heavy'] as const

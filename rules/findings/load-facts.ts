@@ -65,9 +65,9 @@ export function loadFacts(f: Findings, say: Say): void {
     say('receptacle.loaded-alone', left / f.nominalVolts < (f.edges['level-low'] ?? 0) ? 'low' : 'within', [
       'receptacle.hn.volts.loaded',
     ])
-  const loaded = f.amount('receptacle.ng.volts.loaded')
-  if (loaded !== undefined) {
-    const rise = (loaded - (f.amount('receptacle.ng.volts') ?? 0)) / f.nominalVolts
+  const [before, loaded] = [f.amount('receptacle.ng.volts'), f.amount('receptacle.ng.volts.loaded')]
+  if (before !== undefined && loaded !== undefined) {
+    const rise = (loaded - before) / f.nominalVolts
     const word =
       rise < 0.002 ? 'none' : rise < 0.012 ? 'small' : rise < 0.03 ? 'some' : rise < 0.5 ? 'much' : 'collapse'
     say('receptacle.ng.rise', word, ['receptacle.ng.volts', 'receptacle.ng.volts.loaded'])

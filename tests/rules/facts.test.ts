@@ -125,3 +125,10 @@ describe('tester lamps follow from the pairs', () => {
     expect(fires.map((r) => r.id)).toContain(rule)
   })
 })
+
+test('neutral–ground under load alone is no rise: what it was before nobody took', () => {
+  const alone = facts(generator, { 'receptacle.ng.volts.loaded': 70 })
+  expect(alone.get('receptacle.ng.rise')).toBeUndefined()
+  const both = facts(generator, { 'receptacle.ng.volts': 70, 'receptacle.ng.volts.loaded': 70.1 })
+  expect(both.get('receptacle.ng.rise')?.value).toBe('none')
+})
