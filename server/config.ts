@@ -18,11 +18,18 @@ const Environment = z.object({
   }),
   LOG_LEVEL: z.enum(logLevels, { error: `must be one of ${logLevels.join(', ')}` }).default('info'),
   TRUST_PROXY: wholeNumber('how many proxies stand before the server', 9).default(0),
-  SESSION_SECRET: z.string().min(32, 'must have 32 characters or more').optional(),
+  SESSION_SECRET: z.string().min(32, 'must have 32 characters or more'),
+  DEMO: z.enum(['yes', 'no'], { error: 'must be yes or no' }).default('no'),
   NODE_ENV: z
     .enum(['production', 'development', 'test'], { error: 'must be production, development or test' })
     .default('production'),
 })
+
+const loopback = /^(127(\.\d{1,3}){3}|localhost|::1|\[::1\])$/i
+
+/** Whether only this machine reaches the server: on loopback, and with no proxy before it that others reach. */
+const isPrivate = (env: { HOST: string; TRUST_PROXY: number; DATABASE_URL: string }) =>
+  loopback.test(env.HOST) && env.TRUST_PROXY === 0 && loopback.test(new URL(env.DATABASE_URL).hostname)
 
 export type Config = Readonly<{
   port: number
@@ -30,7 +37,10 @@ export type Config = Readonly<{
   databaseUrl: string
   logLevel: (typeof logLevels)[number]
   trustProxy: number
-  sessionSecret: string | undefined
+  /** Signs what lies in cookies. */
+  sessionSecret: string
+  /** Whether there are people with passwords that everyone knows: on the private database, for this machine alone. */
+  demo: boolean
   mode: 'production' | 'development' | 'test'
 }>
 
@@ -49,6 +59,10 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     throw new Error(`Cannot start. Mend these variables:\n${faults.join('\n')}`)
   }
   const { data } = read
+  if (data.DEMO === 'yes' && !isPrivate(data))
+    throw new Error(
+      'Cannot start. Mend these variables:\n  DEMO must be no where others reach the server or its database',
+    )
   return Object.freeze({
     port: data.PORT,
     host: data.HOST,
@@ -56,6 +70,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     logLevel: data.LOG_LEVEL,
     trustProxy: data.TRUST_PROXY,
     sessionSecret: data.SESSION_SECRET,
+    demo: data.DEMO === 'yes',
     mode: data.NODE_ENV,
   })
 }

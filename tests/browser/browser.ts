@@ -8,8 +8,10 @@ import { EditionFeed } from '../../server/editions/edition-feed.ts'
 import { followEditions } from '../../server/editions/follow-editions.ts'
 import { seedStarter } from '../../server/editions/seed-starter.ts'
 import { openLog } from '../../server/log.ts'
+import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import { testDatabase } from '../server/database.ts'
 import type { TestDatabase } from '../server/database.ts'
+import { testSecret } from '../server/running-app.ts'
 
 export type Site = {
   url: string
@@ -24,9 +26,11 @@ export async function openSite(): Promise<Site> {
   const log = openLog('silent')
   const database = await testDatabase()
   await seedStarter(database.db)
+  await seedDemoPeople(database.db)
   const feed = new EditionFeed()
   const unfollow = followEditions(database.url, database.db, feed, log)
-  const { app, close: closeStreams } = createApp({ db: database.db, feed, log, config: { trustProxy: 0 } })
+  const config = { trustProxy: 0, sessionSecret: testSecret }
+  const { app, close: closeStreams } = createApp({ db: database.db, feed, log, config })
   const server = createServer(app)
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))
   let stopped: Promise<void> | undefined
