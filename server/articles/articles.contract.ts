@@ -29,3 +29,5 @@ export const ArticlesFound = z.object({
   /** How the query was read, when a slip in it was mended. */
   readAs: z.optional(z.string()),
 })
+
+export type ArticlesFound = z.infer<typeof ArticlesFound>
