@@ -1,5 +1,5 @@
 import { useState } from 'react'
-import { Link, NavLink, useLocation } from 'react-router-dom'
+import { Link, useLocation } from 'react-router-dom'
 import { reaches } from '../../server/people/roles.contract.ts'
 import type { Role } from '../../server/people/roles.contract.ts'
 import { useFollowPerson, useMe } from '../people/people.api.ts'
@@ -42,6 +42,12 @@ function AccountLink() {
   )
 }
 
+const shared = /^\/(articles|causes|tests)\b/
+
+/** Causes and tests are read among the articles, so they stand under that word too. */
+const isUnder = (to: string, path: string) =>
+  to === '/articles' ? shared.test(path) : path === to || path.startsWith(`${to}/`)
+
 /** The head of every page: mark, ways to go, where what was typed lies, theme. On a phone they fold under "Menu". */
 export function Masthead() {
   const { pathname } = useLocation()
@@ -73,9 +79,9 @@ export function Masthead() {
         <div className="mast-panel" id="mast-panel" data-open={open}>
           <nav aria-label="Main">
             {links.map(([to, words]) => (
-              <NavLink key={to} to={to}>
+              <Link key={to} to={to} aria-current={isUnder(to, pathname) ? 'page' : undefined}>
                 {words}
-              </NavLink>
+              </Link>
             ))}
           </nav>
           <AccountLink />

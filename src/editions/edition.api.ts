@@ -16,7 +16,7 @@ import {
 } from './edition-queries.ts'
 import { mergeCauses } from './merge-causes.ts'
 
-export type Status = 'pending' | 'error' | 'success'
+type Status = 'pending' | 'error' | 'success'
 type Shown = { status: Status; error: Error | undefined; retry: () => void }
 type Asked = { status: Status; error: Error | null; refetch: () => unknown }
 

@@ -80,6 +80,7 @@ describe('links', () => {
     await page.locator('.used-in a[href="/articles/open-ground"]').click()
     await page.locator('.used-in a[href="/tests/receptacle-volts"]').click()
     await heading(page, 'Three readings at one receptacle')
+    await page.locator('.knowledge-side summary').click()
     await page.locator('.used-in a[href="/articles/open-ground"]').click()
     await page.waitForURL('**/articles/open-ground')
     await page.goto('/tests/receptacle-volts')
