@@ -10,6 +10,7 @@ import { tokenHash } from './one-time-link.ts'
 import { hashPassword } from './passwords.ts'
 import { ChangePassword, LinkOpened, Me, SetPassword, SignIn, SignUp } from './people.contract.ts'
 import { addPerson, endSessions, findLink, findPerson } from './people.queries.ts'
+import type { Known } from './people.queries.ts'
 import { setPasswordByLink } from './set-password.ts'
 import { whoSignsIn } from './sign-in.ts'
 import type { Throttle } from './throttle.ts'
@@ -23,8 +24,7 @@ const answer = (res: Response, person: Me['person'] | undefined) =>
 /** Signing in and out, and what a person does with their own account. */
 export function accountRoutes(db: Db, throttle: Throttle): Router {
   /** Begins a session, and marks the device as one that this person has used. */
-  const comeIn = async (req: Request, res: Response, id: string) => {
-    const person = await findPerson(db, id)
+  const comeIn = async (req: Request, res: Response, person: Known | undefined) => {
     if (person === undefined) throw new Problem('unauthorized')
     await beginSession(req, person)
     const options: CookieOptions = {
@@ -46,8 +46,8 @@ export function accountRoutes(db: Db, throttle: Throttle): Router {
     .post('/sign-in', async (req, res) => {
       const { email, password } = readBody(req, SignIn)
       const mark = cookieOf(req, deviceCookie)
-      const { id } = await whoSignsIn(db, throttle, { email, password, address: req.ip, mark })
-      await comeIn(req, res, id)
+      // As read together with the hash: a password changed meanwhile has ended what begins here.
+      await comeIn(req, res, await whoSignsIn(db, throttle, { email, password, address: req.ip, mark }))
     })
     .post('/sign-out', async (req, res) => {
       await endSession(req, res)
@@ -68,12 +68,12 @@ export function accountRoutes(db: Db, throttle: Throttle): Router {
         throw new Problem('conflict', 'There is an account already.', {
           email: 'This e-mail address has an account. Sign in, or ask the shop for a new link.',
         })
-      await comeIn(req, res, id)
+      await comeIn(req, res, await findPerson(db, id))
     })
     .post('/account/password', allow('person'), async (req, res) => {
       const { id } = signedIn(req)
       await changePassword(db, throttle, id, readBody(req, ChangePassword))
-      await comeIn(req, res, id)
+      await comeIn(req, res, await findPerson(db, id))
     })
     .get('/links/:token', async (req, res) => {
       const link = await findLink(db, tokenHash(req.params.token))
@@ -86,6 +86,6 @@ export function accountRoutes(db: Db, throttle: Throttle): Router {
       const { password } = readBody(req, SetPassword)
       const id = await setPasswordByLink(db, tokenHash(req.params.token), password)
       if (id === undefined) throw notFound('link any more')
-      await comeIn(req, res, id)
+      await comeIn(req, res, await findPerson(db, id))
     })
 }

@@ -11,10 +11,18 @@ const sessionMs = 28 * 24 * 60 * 60 * 1000
 
 const channel = 'BroadcastChannel' in globalThis ? new BroadcastChannel('tracelamp-person') : undefined
 
-/** Calls back when somebody signs in or out in another tab. Returns the way to stop it. */
+/**
+ * Calls back when somebody signs in or out in another tab, and when Back brings a page as it was left: then it may be
+ * that of whoever was here before. Returns the way to stop it.
+ */
 export function onPersonChanged(listener: () => void): () => void {
+  const back = (event: PageTransitionEvent) => event.persisted && listener()
   channel?.addEventListener('message', listener)
-  return () => channel?.removeEventListener('message', listener)
+  window.addEventListener('pageshow', back)
+  return () => {
+    channel?.removeEventListener('message', listener)
+    window.removeEventListener('pageshow', back)
+  }
 }
 
 /** Who was last signed in here. A device that keeps nothing knows nobody. */

@@ -53,13 +53,6 @@ const onDevice = (page: Page) =>
       }),
   )
 
-/** Whether some sentence of an article for qualified people lies in this browser's storage of any kind. */
-const inCaches = (page: Page) =>
-  page.evaluate(async () => {
-    const keys = 'caches' in window ? await caches.keys() : []
-    return { keys, local: JSON.stringify(localStorage), session: JSON.stringify(sessionStorage) }
-  })
-
 describe('signing in', () => {
   test('leads back to where one came from, and out again; the masthead follows', async () => {
     const { page, complaints, end } = await visit(browser, site)
@@ -163,8 +156,11 @@ describe('what is for qualified people', () => {
     await button(page, 'Sign out on this device').click()
     await page.getByRole('banner').getByRole('link', { name: 'Sign in' }).waitFor()
     expect(await onDevice(page)).toMatchObject({ person: undefined, qualified: 0, everyone: 3 })
-    const caches = await inCaches(page)
-    expect(caches.keys).toEqual([])
+    expect(await page.evaluate(() => caches.keys())).toEqual([])
+    // Back leads to where the article stood; it must not stand there any more.
+    await page.goBack()
+    await heading(page, 'Account')
+    await page.getByText('Nobody is signed in on this device.').waitFor()
     await page.route('**/api/**', (route) => route.abort())
     await page.goto('/articles/double-bond')
     await heading(page, 'No article of that name')
