@@ -77,7 +77,7 @@ const onlyDatabase = ['indexedDB', 'Keep things through src/offline/.']
 const browserPackages = '^(kysely|pg|express|pino|zod|node:.*)$'
 
 export default tseslint.config(
-  { ignores: ['dist', 'coverage', '.data'] },
+  { ignores: ['dist', 'dist.next', 'dist.former', 'coverage', '.data'] },
   tseslint.configs.recommended,
   {
     plugins: { 'import-x': importX },

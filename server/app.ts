@@ -18,12 +18,13 @@ import { onlyJson, sameOrigin } from './same-origin.ts'
 import { security } from './security.ts'
 import { sessions } from './session.ts'
 import { site } from './site.ts'
+import { workerOff } from './worker-off.ts'
 
 export type AppParts = {
   db: Db
   feed: EditionFeed
   log: Log
-  config: Pick<Config, 'trustProxy' | 'sessionSecret'>
+  config: Pick<Config, 'trustProxy' | 'worker' | 'sessionSecret'>
   /** Where the built pages lie; the checkout's `dist` unless said. */
   pages?: string
 }
@@ -61,6 +62,7 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     peopleRoutes(db),
     noSuchRoute,
   )
+  if (!config.worker) app.use(workerOff)
   app.use(site(pages))
   app.use(problems(log))
   const close = () => {

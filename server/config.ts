@@ -20,6 +20,7 @@ const Environment = z.object({
   TRUST_PROXY: wholeNumber('how many proxies stand before the server', 9).default(0),
   SESSION_SECRET: z.string().min(32, 'must have 32 characters or more'),
   DEMO: z.enum(['yes', 'no'], { error: 'must be yes or no' }).default('no'),
+  WORKER: z.enum(['on', 'off'], { error: 'must be on or off' }).default('on'),
   NODE_ENV: z
     .enum(['production', 'development', 'test'], { error: 'must be production, development or test' })
     .default('production'),
@@ -41,6 +42,8 @@ export type Config = Readonly<{
   sessionSecret: string
   /** Whether there are people with passwords that everyone knows: on the private database, for this machine alone. */
   demo: boolean
+  /** Whether devices may keep the pages, to start without a network. False takes them back from all of them. */
+  worker: boolean
   mode: 'production' | 'development' | 'test'
 }>
 
@@ -69,6 +72,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     databaseUrl: data.DATABASE_URL,
     logLevel: data.LOG_LEVEL,
     trustProxy: data.TRUST_PROXY,
+    worker: data.WORKER === 'on',
     sessionSecret: data.SESSION_SECRET,
     demo: data.DEMO === 'yes',
     mode: data.NODE_ENV,

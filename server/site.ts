@@ -1,5 +1,6 @@
 import { existsSync } from 'node:fs'
 import { join } from 'node:path'
+import compression from 'compression'
 import express, { Router } from 'express'
 import type { RequestHandler } from 'express'
 import { Problem } from './problem.ts'
@@ -20,6 +21,7 @@ const noSuchFile: RequestHandler = () => {
 export function site(folder: string): Router {
   const page = join(folder, 'index.html')
   return Router()
+    .use(compression())
     .use(
       '/assets',
       express.static(join(folder, 'assets'), { index: false, immutable: true, maxAge: '1y' }),

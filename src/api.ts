@@ -88,16 +88,24 @@ async function read<Contract extends z.ZodMiniType>(
   throw new ApiProblem(answer.status, 'The server and this page don’t match. Load the page again.')
 }
 
+const Health = z.object({ status: z.literal('up') })
+
+/** Whether our server answers, now. */
+export const serverAnswers = (): Promise<boolean> =>
+  get('/health', Health).then(
+    () => true,
+    () => false,
+  )
+
 /**
  * Fetches a file as it is, to be checked against its hash by whoever asked.
  * @param path what follows `/api`, for example `/edition-files/<hash>`
  */
-export async function getBytes(path: string, signal?: AbortSignal): Promise<Uint8Array> {
-  const answer = await ask(path, { accept: '*/*' }, signal)
+export async function getBytes(path: string): Promise<Uint8Array> {
+  const answer = await ask(path, { accept: '*/*' })
   try {
     return new Uint8Array(await answer.arrayBuffer())
   } catch (problem) {
-    if (signal?.aborted === true) throw problem
     throw new NoNetwork(problem)
   }
 }

@@ -39,12 +39,15 @@ export async function startServer({ env, address, watch = false }) {
   if (!isServing && !isStopping()) throw new Fault('The server did not start; its reason stands above.')
 }
 
-/** Serves the pages with hot reload, and hands what is asked of /api to the server at `api`. */
+/**
+ * Serves the pages with hot reload, and hands what is asked of /api to the server at `api`. The worker's address too:
+ * one that a built Tracelamp left in the browser at this address would otherwise show its own pages for ever.
+ */
 export async function startPages({ host, port, api }) {
   const { createServer } = await import('vite')
   const pages = await createServer({
     root,
-    server: { host, port, strictPort: true, proxy: { '/api': { target: api } } },
+    server: { host, port, strictPort: true, proxy: { '/api': { target: api }, '/sw.js': { target: api } } },
   })
   await pages.listen()
   beforeEnd(() => pages.close())

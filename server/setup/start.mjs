@@ -60,6 +60,7 @@ async function main() {
       HOST: '127.0.0.1',
       PORT: String(apiPort),
       NODE_ENV: 'development',
+      WORKER: 'off',
     }
     await startServer({ env, address: api, watch: true })
     await startPages({ host, port, api })

@@ -1,5 +1,6 @@
 import { Navigate } from 'react-router-dom'
 import type { RouteObject } from 'react-router-dom'
+import { savesData } from '../offline/network.ts'
 import { PageError } from './page-error.tsx'
 import { Shell } from './shell.tsx'
 
@@ -10,6 +11,19 @@ const result = () => import('../triage/result.page.tsx')
 
 /** The check whole, fetched once the first page stands, so that it works when the network goes. */
 export const bringTriage = () => Promise.all([check(), steps(), volts(), result()])
+
+const diagnosis = () => import('../diagnosis/diagnosis.page.tsx')
+const articles = () => import('../articles/articles.page.tsx')
+const article = () => import('../articles/article.page.tsx')
+const cause = () => import('../articles/cause.page.tsx')
+const test = () => import('../articles/test.page.tsx')
+
+/**
+ * The tech's page and what the shop knows, for a tab that stays open where no worker can keep the pages. The edition's
+ * files come beside it, with the first look at what is in force. Not for whoever pays by the megabyte.
+ */
+export const bringLibrary = async () =>
+  savesData() ? [] : Promise.all([diagnosis(), articles(), article(), cause(), test()])
 
 /** Every page, fetched when it is first opened. Loaders never wait for data: pages own waiting, failing, no network. */
 export const routes: RouteObject[] = [
@@ -33,11 +47,11 @@ export const routes: RouteObject[] = [
               { path: ':step', lazy: steps },
             ],
           },
-          { path: 'diagnosis', lazy: () => import('../diagnosis/diagnosis.page.tsx') },
-          { path: 'articles', lazy: () => import('../articles/articles.page.tsx') },
-          { path: 'articles/:slug', lazy: () => import('../articles/article.page.tsx') },
-          { path: 'causes/:id', lazy: () => import('../articles/cause.page.tsx') },
-          { path: 'tests/:id', lazy: () => import('../articles/test.page.tsx') },
+          { path: 'diagnosis', lazy: diagnosis },
+          { path: 'articles', lazy: articles },
+          { path: 'articles/:slug', lazy: article },
+          { path: 'causes/:id', lazy: cause },
+          { path: 'tests/:id', lazy: test },
           { path: 'editions', lazy: () => import('../editions/editions.page.tsx') },
           { path: 'sign-in', lazy: () => import('../people/sign-in.page.tsx') },
           { path: 'sign-up', lazy: () => import('../people/sign-up.page.tsx') },

@@ -2,6 +2,7 @@ import { Outlet, ScrollRestoration, useLocation } from 'react-router-dom'
 import { Toasts } from '../ui/toast.tsx'
 import { DangerBar } from './danger-bar.tsx'
 import { EditionBar } from './edition-bar.tsx'
+import { LatePart } from './late-part.tsx'
 import { Masthead } from './masthead.tsx'
 import { usePageFocus } from './use-page-focus.ts'
 
@@ -17,6 +18,7 @@ export function Shell() {
       {front && <DangerBar />}
       <Masthead />
       <EditionBar />
+      <LatePart />
       <Outlet />
       <ScrollRestoration />
     </Toasts>

@@ -15,6 +15,8 @@ export type Desk = {
   stored: SheetContent
   dispatch: (action: Action) => void
   errors: FieldErrors
+  /** What was typed last does not lie on the device. */
+  unkept: boolean
   /** Of the system, volts. */
   nominal: number
   /** Of the sheet's meter, ohms; 10 MΩ while a low one is not typed in full. */

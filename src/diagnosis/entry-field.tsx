@@ -54,6 +54,8 @@ export function EntryField({ reading, seat = false, className = '' }: EntryField
   const entry = readingOf(typed, mode, id)
   const name = seat && isPair(pair) ? pairWords(pair) : reading.label
   const sentence = errorAt(desk.errors, typed, mode, id)
+  // Said here too: the plate that says why may lie out of sight.
+  const unkept = desk.unkept && chosen?.id === id ? 'Not kept on this device yet.' : undefined
   const meant = meantBy(entry?.text ?? '', reading, desk.nominal)
   const type = (text: string, which: 'lower' | 'upper' = 'lower') =>
     dispatch({ do: 'type', mode, id, text, which, of: name })
@@ -95,7 +97,7 @@ export function EntryField({ reading, seat = false, className = '' }: EntryField
         upper={entry?.upper}
         onUpper={(text) => type(text, 'upper')}
         with={conditionOf(reading, entry)}
-        error={sentence === undefined ? undefined : `${capital(name)} ${sentence}.`}
+        error={sentence === undefined ? unkept : `${capital(name)} ${sentence}.`}
         question={
           meant && {
             text: meant.says,

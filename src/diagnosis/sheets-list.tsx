@@ -9,6 +9,7 @@ import { Failed } from '../ui/failed.tsx'
 import { useToast } from '../ui/toast.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { GroundGlyph } from '../ui/where-ground-sits/ground-glyph.tsx'
+import { HowLongKept } from './how-long-kept.tsx'
 import { numberIn } from './raw-sheet.ts'
 import { isTaken, readingOf, SheetContent } from './sheet-content.ts'
 
@@ -104,10 +105,13 @@ export function SheetsList({ onNew }: { onNew: () => void }) {
       </Empty>
     )
   return (
-    <ul aria-label="Sheets on this device">
-      {listed.sheets.map((doc) => (
-        <Row key={doc.id} doc={doc} />
-      ))}
-    </ul>
+    <>
+      <ul aria-label="Sheets on this device">
+        {listed.sheets.map((doc) => (
+          <Row key={doc.id} doc={doc} />
+        ))}
+      </ul>
+      <HowLongKept />
+    </>
   )
 }

@@ -75,6 +75,7 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
     stored,
     dispatch,
     errors,
+    unkept: sheet.unkept !== undefined,
     nominal: edition.systems.get(system)?.nominalVolts ?? 120,
     meterOhms: Number.isFinite(meterOhmsOf(meter)) ? meterOhmsOf(meter) : 10_000_000,
     places,

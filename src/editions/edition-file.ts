@@ -10,19 +10,33 @@ export type FileOf = EditionInForce['files'][number]
 export const fileOf = (info: EditionInForce, name: FileName): FileOf | undefined =>
   info.files.find((one) => one.name === name)
 
-/**
- * Brings an edition's file: from this device, else from the server, and then keeps it.
- * @throws Error when what came is not the file of that hash; NoNetwork or ApiProblem when nothing came
- */
-export async function bringFile({ hash, audience }: FileOf, signal?: AbortSignal): Promise<Uint8Array> {
-  // A private window may have no database: the file is then fetched each time.
-  const kept = await getFile(hash).catch(() => undefined)
-  if (kept !== undefined) return kept
-  const bytes = await getBytes(`/edition-files/${hash}`, signal)
+/** Files on their way: a page that shows one and the keeping of it ask at the same time. */
+const coming = new Map<string, Promise<Uint8Array>>()
+
+async function fetchFile({ hash, audience }: FileOf): Promise<Uint8Array> {
+  const bytes = await getBytes(`/edition-files/${hash}`)
   if (bytesToHex(sha256(bytes)) !== hash) throw new Error('The file came damaged. Try again.')
   // A full device is no reason to show nothing.
   await putFile(hash, bytes, audience).catch(() => undefined)
   return bytes
+}
+
+/**
+ * Brings an edition's file: from this device, else from the server, and then keeps it.
+ * @throws Error when what came is not the file of that hash; NoNetwork or ApiProblem when nothing came
+ */
+export async function bringFile(wanted: FileOf): Promise<Uint8Array> {
+  const { hash } = wanted
+  // A private window may have no database: the file is then fetched each time.
+  const kept = await getFile(hash).catch(() => undefined)
+  if (kept !== undefined) return kept
+  const file = coming.get(hash) ?? fetchFile(wanted)
+  coming.set(hash, file)
+  try {
+    return await file
+  } finally {
+    coming.delete(hash)
+  }
 }
 
 /** A file's content, still to be checked by its schema. */

@@ -79,8 +79,7 @@ function fileQuery<Content>(
   return queryOptions({
     ...forGood,
     queryKey: ['edition-file', name, file?.hash] as const,
-    queryFn:
-      file === undefined ? skipToken : async ({ signal }) => read(readJson(await bringFile(file, signal))),
+    queryFn: file === undefined ? skipToken : async () => read(readJson(await bringFile(file))),
   })
 }
 

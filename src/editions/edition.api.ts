@@ -111,6 +111,10 @@ export function useArticles(qualified: boolean): Shown & { articles: ReadonlyMap
   }, [state.status, state.error, first, second])
 }
 
+/** Asks what is in force once more, and keeps what this device's person may read of it. */
+export const keepAgain = (client: QueryClient): Promise<void> =>
+  client.invalidateQueries({ queryKey: inForceQuery.queryKey })
+
 /** Moves this tab to the edition in force, once that has been brought whole. */
 async function takeNewEdition(client: QueryClient): Promise<void> {
   const info = await client.fetchQuery({ ...inForceQuery, staleTime: 0 })

@@ -1,5 +1,6 @@
 import * as z from 'zod/mini'
 import { EditionInForce } from '../../server/editions/editions.contract.ts'
+import { savesData } from '../offline/network.ts'
 import { getSetting, setSetting } from '../offline/settings.ts'
 import { bringFile } from './edition-file.ts'
 
@@ -13,12 +14,16 @@ export async function readKept(): Promise<Kept | undefined> {
   return Kept.safeParse(kept).data
 }
 
+/** Whoever saves data has what ranks, and of the rest what was opened. */
+const wanted = ({ files }: EditionInForce) =>
+  savesData() ? files.filter((file) => file.name === 'diagnosis') : files
+
 /**
  * Brings all that the server lets this person have of an edition, then names it as the one to open with no network. In
  * this order: a name without its files would open nothing.
  */
 export async function keepEdition(info: EditionInForce): Promise<void> {
-  for (const file of info.files) await bringFile(file)
+  for (const file of wanted(info)) await bringFile(file)
   const before = await readKept()
   const others = before === undefined ? [] : [before.inForce, ...before.earlier]
   const earlier = others.filter((one, index) => {

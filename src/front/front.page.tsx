@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { Link, useNavigate } from 'react-router-dom'
+import { usePagesKept } from '../offline/pages-kept.ts'
 import { LinkButton } from '../ui/button.tsx'
 import { Page } from '../ui/page.tsx'
 import { Rail } from '../ui/rail.tsx'
@@ -71,6 +72,7 @@ function WhatThisIs() {
 
 /** The front page: danger first (the bar above), then one thing to do, then what to start with. */
 export function Component() {
+  const pagesKept = usePagesKept()
   return (
     <div className="front">
       <Page title="Something is wrong with the power" width="none">
@@ -98,7 +100,7 @@ export function Component() {
       <footer className="front-foot">
         <div>
           <EditionLine />
-          <span>Works with no network once opened</span>
+          {pagesKept && <span>Works with no network once opened</span>}
           <Link to="/diagnosis" className="link-alone">
             For qualified people: Diagnosis
           </Link>

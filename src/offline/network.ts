@@ -9,6 +9,10 @@ function listen(changed: () => void): () => void {
   }
 }
 
+/** Whether the person asked the browser to fetch no more than is needed. */
+export const savesData = (): boolean =>
+  (navigator as { connection?: { saveData?: boolean } }).connection?.saveData === true
+
 /** Whether the device says it has a network. Having one does not mean that the server answers. */
 export const useOnline = (): boolean =>
   useSyncExternalStore(

@@ -1,4 +1,5 @@
 import { database, strict } from './database.ts'
+import { askToLast } from './lasting.ts'
 
 /**
  * A findings sheet as it lies on this device. `content` belongs to the feature that wrote it, which checks it
@@ -38,8 +39,10 @@ export function onSheetsChanged(listener: () => void): () => void {
  */
 export async function saveSheet(doc: SheetDoc): Promise<void> {
   const tx = (await database()).transaction('sheets', 'readwrite', strict)
-  await Promise.all([tx.store.put(doc), tx.done])
+  const [known] = await Promise.all([tx.store.getKey(doc.id), tx.store.put(doc), tx.done])
   changed()
+  // A check is never interrupted by a browser that asks the person back.
+  if (doc.kind === 'diagnosis' && known === undefined) void askToLast().catch(() => undefined)
 }
 
 /** One sheet, or undefined when this device has none of that id. */

@@ -12,6 +12,7 @@ import type { NewPerson, Person } from '../../server/people/people.contract.ts'
 import { isQualified } from '../../server/people/roles.contract.ts'
 import type { Role } from '../../server/people/roles.contract.ts'
 import { get, send } from '../api.ts'
+import { keepAgain } from '../editions/edition.api.ts'
 import { onPersonChanged, forgetPerson, readPerson, rememberPerson, settlePerson } from './device-person.ts'
 
 const keptQuery = queryOptions({
@@ -22,7 +23,14 @@ const keptQuery = queryOptions({
 })
 const askedQuery = queryOptions({
   queryKey: ['me', 'asked'] as const,
-  queryFn: async ({ signal }) => settlePerson((await get('/me', Me, signal)).person),
+  queryFn: async ({ signal, client }) => {
+    const { person } = await get('/me', Me, signal)
+    const before = await readPerson()
+    const settled = await settlePerson(person)
+    // What came before this device knew who is here was not kept.
+    if (isQualified(settled.person?.role) && !isQualified(before?.role)) void keepAgain(client)
+    return settled
+  },
   staleTime: 60_000,
 })
 

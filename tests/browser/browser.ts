@@ -13,37 +13,49 @@ import { testDatabase } from '../server/database.ts'
 import type { TestDatabase } from '../server/database.ts'
 import { testSecret } from '../server/running-app.ts'
 
+/** What is served: the checkout's build and its worker unless said. */
+type Served = { pages?: string; worker?: boolean }
+
 export type Site = {
   url: string
   database: TestDatabase
   /** Stops answering, as when the network is gone. The database stays. */
   stop: () => Promise<void>
+  /** Answers again at the same address, with other pages or with workers switched off where that is said. */
+  start: (served?: Served) => Promise<void>
   close: () => Promise<void>
 }
 
 /** Serves the built pages with the starter edition in force. */
-export async function openSite(): Promise<Site> {
+export async function openSite(served: Served = {}): Promise<Site> {
   const log = openLog('silent')
   const database = await testDatabase()
   await seedStarter(database.db)
   await seedDemoPeople(database.db)
   const feed = new EditionFeed()
   const unfollow = followEditions(database.url, database.db, feed, log)
-  const config = { trustProxy: 0, sessionSecret: testSecret }
-  const { app, close: closeStreams } = createApp({ db: database.db, feed, log, config })
-  const server = createServer(app)
-  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))
-  let stopped: Promise<void> | undefined
-  const stop = () =>
-    (stopped ??= new Promise((resolve) => {
-      server.close(() => resolve())
-      closeStreams()
-      server.closeAllConnections()
-    }))
+  let port = 0
+  let stop = () => Promise.resolve()
+  const start = async ({ pages, worker = true }: Served = {}) => {
+    const config = { trustProxy: 0, worker, sessionSecret: testSecret }
+    const { app, close } = createApp({ db: database.db, feed, log, config, ...(pages && { pages }) })
+    const server = createServer(app)
+    await new Promise<void>((resolve) => server.listen(port, '127.0.0.1', resolve))
+    port = (server.address() as AddressInfo).port
+    let stopped: Promise<void> | undefined
+    stop = () =>
+      (stopped ??= new Promise((resolve) => {
+        server.close(() => resolve())
+        close()
+        server.closeAllConnections()
+      }))
+  }
+  await start(served)
   return {
-    url: `http://127.0.0.1:${(server.address() as AddressInfo).port}`,
+    url: `http://127.0.0.1:${port}`,
     database,
-    stop,
+    start,
+    stop: () => stop(),
     close: async () => {
       await stop()
       await unfollow()
@@ -63,9 +75,12 @@ const flags = [
   '--disable-sync',
 ]
 
-/** Debian's Chromium. Close it after the file. */
-export const openBrowser = (): Promise<Browser> =>
-  chromium.launch({ executablePath: '/usr/bin/chromium', args: flags })
+/**
+ * Debian's Chromium. Close it after the file.
+ * @param more flags beside the usual ones
+ */
+export const openBrowser = (more: readonly string[] = []): Promise<Browser> =>
+  chromium.launch({ executablePath: '/usr/bin/chromium', args: [...flags, ...more] })
 
 export const phone = { width: 390, height: 844 }
 export const desk = { width: 1280, height: 900 }
@@ -80,11 +95,17 @@ export type Visit = {
   strays: string[]
   end: () => Promise<void>
 }
-type VisitOptions = { theme?: Theme; size?: { width: number; height: number }; touch?: boolean }
+type VisitOptions = {
+  theme?: Theme
+  size?: { width: number; height: number }
+  touch?: boolean
+  /** Lets the page have its service worker. Without it a test can answer and refuse the page's requests itself. */
+  worker?: boolean
+}
 
 /** A person with an empty device. */
 export async function visit(browser: Browser, site: Site, options: VisitOptions = {}): Promise<Visit> {
-  const { theme = 'light', size = desk, touch = false } = options
+  const { theme = 'light', size = desk, touch = false, worker = false } = options
   const context = await browser.newContext({
     baseURL: site.url,
     viewport: size,
@@ -92,12 +113,15 @@ export async function visit(browser: Browser, site: Site, options: VisitOptions 
     hasTouch: touch,
     isMobile: touch,
     reducedMotion: 'reduce',
+    serviceWorkers: worker ? 'allow' : 'block',
   })
   const page = await context.newPage()
   const complaints: string[] = []
   const strays: string[] = []
   page.on('console', (message) => {
-    if (message.type() === 'error' || message.type() === 'warning') complaints.push(message.text())
+    if (message.type() !== 'error' && message.type() !== 'warning') return
+    // Not the page's words: the browser's driver says so where this file keeps the worker away.
+    if (!message.text().startsWith('Service Worker registration blocked')) complaints.push(message.text())
   })
   page.on('pageerror', (problem) => complaints.push(problem.message))
   page.on('request', (request) => {

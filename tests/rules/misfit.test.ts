@@ -9,7 +9,7 @@ const lines = async (name: string) =>
   (await readFile(new URL(`../cases/${name}`, import.meta.url), 'utf8')).trim().split('\n').map(parseLine)
 
 type Nonsense = { id: string; want: 'misfit' | 'error' }
-const nonsense = (await lines('nonsense.jsonl')) as Nonsense[]
+const nonsense = [...(await lines('nonsense.jsonl')), ...(await lines('nonsense-blind.jsonl'))] as Nonsense[]
 
 describe('nonsense is called error or misfit, never shown with a verdict', () => {
   test('there are forty kinds and more', () => expect(nonsense.length).toBeGreaterThanOrEqual(40))
@@ -23,6 +23,18 @@ describe('nonsense is called error or misfit, never shown with a verdict', () =>
     expect(found.ranking).toHaveLength(starter.causeIds.length)
   })
 })
+
+type Odd = { id: string; truth: string }
+const odd = (await lines('odd-but-true.jsonl')) as Odd[]
+test.each(odd.map((o) => [o.id, o] as const))(
+  '%s looks odd and is true of one cause: no misfit',
+  async (_, raw) => {
+    const answer = await answerCase(starter, raw, 'field')
+    if (!('ranking' in answer)) throw new Error(JSON.stringify(answer.error))
+    expect(answer.misfit).toBe(false)
+    expect(answer.ranking.slice(0, 6).map((r) => r.cause)).toContain(raw.truth)
+  },
+)
 
 test('the word is not spent: at most 3 in 100 of the single-fault samples', async () => {
   const cases = [...(await lines('sample-a.jsonl')), ...(await lines('sample-b.jsonl'))]

@@ -97,6 +97,8 @@ test.each(['/', '/api/edition', '/api/nothing-here', '/assets/main-1a2b3c.js'])(
       'img-src': "'self' data: blob:",
       'font-src': "'self'",
       'connect-src': "'self'",
+      'worker-src': "'self'",
+      'manifest-src': "'self'",
       'object-src': "'none'",
       'base-uri': "'none'",
       'form-action': "'self'",
@@ -158,4 +160,14 @@ test('while the database is away: 503 with Retry-After, and the pages still open
   } finally {
     await cutOff.close()
   }
+})
+
+test('scripts go out compressed, as the weight of a page counts on', async () => {
+  const script = `export const text = '${'hot neutral ground '.repeat(400)}'`
+  await writeFile(join(pages, 'assets', 'long-4d5e6f.js'), script)
+  const answer = await fetch(`${app.url}/assets/long-4d5e6f.js`, { headers: { 'accept-encoding': 'gzip' } })
+  expect(answer.headers.get('content-encoding')).toBe('gzip')
+  expect(answer.headers.get('vary')).toMatch(/accept-encoding/i)
+  expect(answer.headers.get('cache-control')).toMatch(/immutable/)
+  expect(await answer.text()).toBe(script)
 })

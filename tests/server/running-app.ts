@@ -14,6 +14,8 @@ export type RunningOptions = {
   log?: Log
   /** The built pages; the checkout's `dist` unless said. */
   pages?: string
+  /** Whether devices may keep the pages; they may unless said. */
+  worker?: boolean
   /** 0 unless said: any free one. */
   port?: number
   trustProxy?: number
@@ -25,12 +27,12 @@ export const testSecret = 'a secret that only the tests use'
 /** The whole server on a port of loopback, with a pool and a listener of its own, as one process of several would be. */
 export async function runApp(
   databaseUrl: string,
-  { log = openLog('silent'), pages, port = 0, trustProxy = 0 }: RunningOptions = {},
+  { log = openLog('silent'), pages, worker = true, port = 0, trustProxy = 0 }: RunningOptions = {},
 ): Promise<RunningApp> {
   const db = openDatabase(databaseUrl, log)
   const feed = new EditionFeed()
   const unfollow = followEditions(databaseUrl, db, feed, log)
-  const config = { trustProxy, sessionSecret: testSecret }
+  const config = { trustProxy, worker, sessionSecret: testSecret }
   const { app, close } = createApp({ db, feed, log, config, ...(pages && { pages }) })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {

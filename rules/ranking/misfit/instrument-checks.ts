@@ -27,6 +27,11 @@ export const testerAgainstMeter: Check = ({ fact, observed, amount, nominal }) =
       }
     return undefined
   }
+  if (pattern === 'half' && observed('tester.hg-lamp') === 'lit' && observed('tester.ng-lamp') === 'dark')
+    return {
+      because: 'The meter puts ground halfway, and the tester lamps show it on neutral.',
+      again: 'receptacle.ng.volts',
+    }
   const [lit, dark] = lampsFor[pattern] ?? [[], []]
   const low = pattern !== 'dead' && (amount('receptacle.hn.volts') ?? 0) < 0.72 * nominal
   for (const id of low ? [] : lit)
@@ -43,39 +48,6 @@ export const testerAgainstMeter: Check = ({ fact, observed, amount, nominal }) =
       }
   return undefined
 }
-
-/** The bulb's look against the volts across it, and against the meter. */
-export const bulbAgainstMeter: Check = ({ observed, amount, nominal, fact }) => {
-  const [look, volts] = [observed('bulb.ng'), amount('bulb.ng.volts')]
-  if (look !== undefined && volts !== undefined) {
-    const part = volts / nominal
-    if (
-      (look === 'bright' && part < 0.4) ||
-      (look === 'dark' && part > 0.75) ||
-      (look === 'dim' && part < 0.03)
-    )
-      return {
-        because: 'The test bulb’s look and the volts across it tell different stories.',
-        again: 'bulb.ng.volts',
-      }
-  }
-  if (fact('receptacle.pattern') === 'on-neutral' && (look === 'bright' || (volts ?? 0) > 0.75 * nominal))
-    return {
-      because: 'The test bulb is bright between neutral and ground where the meter reads nothing.',
-      again: 'bulb.ng',
-    }
-  return undefined
-}
-
-/** A split phase is bonded in its middle: half on the bulb from one leg’s two wires can’t be. */
-export const bulbOnTwoLegs: Check = ({ fact, legs }) =>
-  legs === 2 && fact('source-bulb.holds') === 'half'
-    ? {
-        because:
-          'The bulb keeps half both ways: a balanced output, which no 120/240 V source is. Look at what the source is.',
-        again: 'source.bulb.ng.volts',
-      }
-    : undefined
 
 /** Ohms that say the opposite of firm volts at the same receptacle. */
 export const ohmsAgainstVolts: Check = ({ amount, fact }) => {

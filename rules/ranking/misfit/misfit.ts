@@ -5,8 +5,9 @@ import type { Facts } from '../../findings/facts.ts'
 import type { Sheet } from '../../findings/sheet.ts'
 import type { Misfit, RankedCause } from '../diagnosis-types.ts'
 import type { Check, Look } from './contradiction.ts'
-import { bulbAgainstMeter, bulbOnTwoLegs, ohmsAgainstVolts, testerAgainstMeter } from './instrument-checks.ts'
-import { alongTheRun, legs, panelAgainstLegs } from './place-checks.ts'
+import { bulbAboveMeter, bulbAgainstMeter, bulbBrightOnFewVolts, bulbOnTwoLegs } from './bulb-checks.ts'
+import { ohmsAgainstVolts, testerAgainstMeter } from './instrument-checks.ts'
+import { alongTheRun, betweenTwoAlike, legs, panelAgainstLegs } from './place-checks.ts'
 import { frequency, oneTriple, tooMany, underLoad } from './volts-checks.ts'
 
 const checks: readonly Check[] = [
@@ -14,10 +15,13 @@ const checks: readonly Check[] = [
   oneTriple,
   underLoad,
   alongTheRun,
+  betweenTwoAlike,
   legs,
   panelAgainstLegs,
   testerAgainstMeter,
   bulbAgainstMeter,
+  bulbAboveMeter,
+  bulbBrightOnFewVolts,
   bulbOnTwoLegs,
   ohmsAgainstVolts,
   frequency,

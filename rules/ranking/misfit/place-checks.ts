@@ -37,6 +37,20 @@ export const alongTheRun: Check = ({ amount, nominal, legs, wiring, fact }) => {
   return undefined
 }
 
+const elsewhere = ['on-hot', 'half', 'uneven', 'just-short', 'short', 'needle']
+
+/** Ground on neutral at the source and at the receptacle, and not at the panel between them. */
+export const betweenTwoAlike: Check = ({ fact }) =>
+  fact('source.pattern') === 'on-neutral' &&
+  fact('receptacle.pattern') === 'on-neutral' &&
+  elsewhere.includes(fact('panel.pattern') ?? '')
+    ? {
+        because:
+          'Ground sits on neutral at the source and at the receptacle, and not at the panel between them.',
+        again: 'panel.ng.volts',
+      }
+    : undefined
+
 /** Two legs and what lies between them. */
 export const legs: Check = ({ amount, nominal, fact }) => {
   const [l1, l2, both] = ['l1n', 'l2n', 'l1l2'].map((pair) => amount(`panel.${pair}.volts`))

@@ -7,7 +7,7 @@ const pairs: readonly Pair[] = ['hn', 'ng', 'hg']
 
 /** More volts than any source of this system can give between two points. */
 export const tooMany: Check = ({ facts, nominal, legs }) => {
-  const most = legs === 2 ? 2.45 : 1.45
+  const most = legs === 2 ? 2.45 : 1.6
   for (const [id, { value, from }] of facts) {
     if (!from.includes(id) || typeof value !== 'number' || !/\.volts(\.loaded)?$/.test(id)) continue
     if (id.startsWith('source.dc')) continue
