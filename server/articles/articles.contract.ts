@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { Audience } from '../../rules/edition/schema.ts'
+import { Audience } from '../../rules/edition/audience.ts'
 
 /** GET /api/articles?q=…: what is searched for. Empty lists nothing. */
 export const ArticleQuery = z.object({

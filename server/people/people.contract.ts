@@ -1,4 +1,5 @@
 import * as z from 'zod/mini'
+import { Person } from './me.contract.ts'
 import { Role } from './roles.contract.ts'
 
 const Moment = z.iso.datetime()
@@ -49,10 +50,6 @@ export const PersonChange = z
   .object({ role: z.optional(Role), left: z.optional(z.boolean()) })
   .check(z.refine((change) => change.role !== undefined || change.left !== undefined, 'Name what to change.'))
 
-export const Person = z.object({ id: z.uuid(), email: z.string(), name: z.string(), role: Role })
-/** GET /api/me, and the answer of whatever signs a person in or out. Null: nobody is signed in. */
-export const Me = z.object({ person: z.nullable(Person) })
-
 /** One row of GET /api/people. */
 export const PersonRow = z.extend(Person, {
   madeAt: Moment,
@@ -70,8 +67,6 @@ export const PersonMade = z.object({ person: PersonRow, link: LinkMade })
 /** GET /api/links/:token: whose it is. */
 export const LinkOpened = z.object({ name: z.string(), email: z.string(), expiresAt: Moment })
 
-export type Person = z.infer<typeof Person>
-export type Me = z.infer<typeof Me>
 export type PersonRow = z.infer<typeof PersonRow>
 export type LinkMade = z.infer<typeof LinkMade>
 export type NewPerson = z.infer<typeof NewPerson>

@@ -8,9 +8,10 @@ const check = () => import('../triage/check.page.tsx')
 const steps = () => import('../triage/steps.page.tsx')
 const volts = () => import('../triage/volts.page.tsx')
 const result = () => import('../triage/result.page.tsx')
+const readers = () => import('../editions/read-files.ts')
 
 /** The check whole, fetched once the first page stands, so that it works when the network goes. */
-export const bringTriage = () => Promise.all([check(), steps(), volts(), result()])
+export const bringTriage = () => Promise.all([check(), steps(), volts(), result(), readers()])
 
 const diagnosis = () => import('../diagnosis/diagnosis.page.tsx')
 const articles = () => import('../articles/articles.page.tsx')

@@ -1,4 +1,4 @@
-import type { Person } from '../../server/people/people.contract.ts'
+import type { Person } from '../../server/people/me.contract.ts'
 import { LinkButton } from '../ui/button.tsx'
 import { Page } from '../ui/page.tsx'
 import { Rail } from '../ui/rail.tsx'

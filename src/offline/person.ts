@@ -1,4 +1,4 @@
-import type { Person } from '../../server/people/people.contract.ts'
+import type { Person } from '../../server/people/me.contract.ts'
 import { database, strict } from './database.ts'
 
 /** Who was last signed in on this device, and when the server last said so; device time, ISO 8601. */

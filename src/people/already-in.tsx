@@ -1,4 +1,4 @@
-import type { Person } from '../../server/people/people.contract.ts'
+import type { Person } from '../../server/people/me.contract.ts'
 import { LinkButton } from '../ui/button.tsx'
 
 /** In place of a form to come in, for whoever is in. */

@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { Person } from '../../server/people/people.contract.ts'
+import { Person } from '../../server/people/me.contract.ts'
 import { isQualified } from '../../server/people/roles.contract.ts'
 import { keepPerson, keptPerson } from '../offline/person.ts'
 

@@ -8,7 +8,7 @@ import { Page } from '../ui/page.tsx'
 import { shop } from '../ui/shop.ts'
 import { Waiting } from '../ui/waiting.tsx'
 import { Form, NewPasswordField } from './form.tsx'
-import { linkQuery, setPassword } from './people.api.ts'
+import { linkQuery, setPassword } from './requests.ts'
 import { useSending } from './use-sending.ts'
 
 function Opened({ token }: { token: string }) {

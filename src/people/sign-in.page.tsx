@@ -6,7 +6,8 @@ import { shop } from '../ui/shop.ts'
 import { AlreadyIn } from './already-in.tsx'
 import { EmailField, Form, PasswordField } from './form.tsx'
 import { nextAddress } from './next-address.ts'
-import { signIn, useMe } from './people.api.ts'
+import { useMe } from './people.api.ts'
+import { signIn } from './requests.ts'
 import { useSending } from './use-sending.ts'
 
 /** Signing in, and back to where one was sent from. */

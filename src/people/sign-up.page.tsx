@@ -5,7 +5,8 @@ import { Page } from '../ui/page.tsx'
 import { AlreadyIn } from './already-in.tsx'
 import { EmailField, Form, NameField, NewPasswordField } from './form.tsx'
 import { nextAddress } from './next-address.ts'
-import { signUp, useMe } from './people.api.ts'
+import { useMe } from './people.api.ts'
+import { signUp } from './requests.ts'
 import { useSending } from './use-sending.ts'
 
 /** A homeowner makes an account. */
