@@ -50,7 +50,10 @@ export function openDatabase(url: string, log: Log): Db {
     keepAlive: true,
   })
   // An idle connection that breaks is replaced at the next query; unheard, the event would end the process.
-  pool.on('error', (error) => log.warn({ reason: error.message }, 'a database connection broke'))
+  const broke = (error: Error) => log.warn({ reason: error.message }, 'a database connection broke')
+  pool.on('error', broke)
+  // The pool hears idle clients only: one that is lent out when PostgreSQL dies must be heard too.
+  pool.on('connect', (client) => client.on('error', broke))
   return new Kysely<Database>({ dialect: new PostgresDialect({ pool }) })
 }
 
