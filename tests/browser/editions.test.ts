@@ -24,7 +24,7 @@ test('a file that came damaged is refused, and asked for again', async () => {
   await page.goto('/articles')
   const failed = page.getByRole('alert')
   await failed.getByText('The file came damaged.').waitFor({ timeout: 20_000 })
-  await page.unroute('**/api/edition-files/*')
+  await page.unrouteAll({ behavior: 'wait' })
   await failed.getByRole('button', { name: 'Try again' }).click()
   await page.getByRole('heading', { level: 2, name: 'Causes' }).waitFor()
   await end()
