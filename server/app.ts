@@ -9,9 +9,14 @@ import { editionEvents } from './editions/edition-events.ts'
 import type { EditionFeed } from './editions/edition-feed.ts'
 import { editionRoutes } from './editions/editions.routes.ts'
 import type { Log } from './log.ts'
+import { accountRoutes } from './people/account.routes.ts'
+import { peopleRoutes } from './people/people.routes.ts'
+import { openThrottle } from './people/throttle.ts'
 import { noSuchRoute, problems } from './problem.ts'
 import { requestLog } from './request-log.ts'
+import { onlyJson, sameOrigin } from './same-origin.ts'
 import { security } from './security.ts'
+import { sessions } from './session.ts'
 import { site } from './site.ts'
 import { workerOff } from './worker-off.ts'
 
@@ -19,7 +24,7 @@ export type AppParts = {
   db: Db
   feed: EditionFeed
   log: Log
-  config: Pick<Config, 'trustProxy' | 'worker'>
+  config: Pick<Config, 'trustProxy' | 'worker' | 'sessionSecret'>
   /** Where the built pages lie; the checkout's `dist` unless said. */
   pages?: string
 }
@@ -35,6 +40,8 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
   close: () => void
 } {
   const events = editionEvents(feed)
+  const session = sessions({ db, log, secret: config.sessionSecret })
+  const throttle = openThrottle(db, config.sessionSecret)
   const app = express()
   app.disable('x-powered-by')
   app.set('trust proxy', config.trustProxy)
@@ -46,9 +53,21 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     await sql`select 1`.execute(db)
     res.set('Cache-Control', 'no-store').json({ status: 'up' })
   })
-  app.use('/api', editionRoutes(db, events.route), articleRoutes(db), noSuchRoute)
+  app.use('/api', sameOrigin, onlyJson, express.json({ limit: '64kb' }), session.handlers)
+  app.use(
+    '/api',
+    editionRoutes(db, events.route),
+    articleRoutes(db),
+    accountRoutes(db, throttle),
+    peopleRoutes(db),
+    noSuchRoute,
+  )
   if (!config.worker) app.use(workerOff)
   app.use(site(pages))
   app.use(problems(log))
-  return { app, close: events.close }
+  const close = () => {
+    events.close()
+    session.close()
+  }
+  return { app, close }
 }

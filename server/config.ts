@@ -18,12 +18,19 @@ const Environment = z.object({
   }),
   LOG_LEVEL: z.enum(logLevels, { error: `must be one of ${logLevels.join(', ')}` }).default('info'),
   TRUST_PROXY: wholeNumber('how many proxies stand before the server', 9).default(0),
+  SESSION_SECRET: z.string().min(32, 'must have 32 characters or more'),
+  DEMO: z.enum(['yes', 'no'], { error: 'must be yes or no' }).default('no'),
   WORKER: z.enum(['on', 'off'], { error: 'must be on or off' }).default('on'),
-  SESSION_SECRET: z.string().min(32, 'must have 32 characters or more').optional(),
   NODE_ENV: z
     .enum(['production', 'development', 'test'], { error: 'must be production, development or test' })
     .default('production'),
 })
+
+const loopback = /^(127(\.\d{1,3}){3}|localhost|::1|\[::1\])$/i
+
+/** Whether only this machine reaches the server: on loopback, and with no proxy before it that others reach. */
+const isPrivate = (env: { HOST: string; TRUST_PROXY: number; DATABASE_URL: string }) =>
+  loopback.test(env.HOST) && env.TRUST_PROXY === 0 && loopback.test(new URL(env.DATABASE_URL).hostname)
 
 export type Config = Readonly<{
   port: number
@@ -31,9 +38,12 @@ export type Config = Readonly<{
   databaseUrl: string
   logLevel: (typeof logLevels)[number]
   trustProxy: number
+  /** Signs what lies in cookies. */
+  sessionSecret: string
+  /** Whether there are people with passwords that everyone knows: on the private database, for this machine alone. */
+  demo: boolean
   /** Whether devices may keep the pages, to start without a network. False takes them back from all of them. */
   worker: boolean
-  sessionSecret: string | undefined
   mode: 'production' | 'development' | 'test'
 }>
 
@@ -52,6 +62,10 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     throw new Error(`Cannot start. Mend these variables:\n${faults.join('\n')}`)
   }
   const { data } = read
+  if (data.DEMO === 'yes' && !isPrivate(data))
+    throw new Error(
+      'Cannot start. Mend these variables:\n  DEMO must be no where others reach the server or its database',
+    )
   return Object.freeze({
     port: data.PORT,
     host: data.HOST,
@@ -60,6 +74,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>> = p
     trustProxy: data.TRUST_PROXY,
     worker: data.WORKER === 'on',
     sessionSecret: data.SESSION_SECRET,
+    demo: data.DEMO === 'yes',
     mode: data.NODE_ENV,
   })
 }

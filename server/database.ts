@@ -1,9 +1,10 @@
-import { Kysely, PostgresDialect } from 'kysely'
+import { CompiledQuery, Kysely, PostgresDialect } from 'kysely'
 import type { ColumnType, Generated, Transaction } from 'kysely'
 import pg from 'pg'
 import type { Log } from './log.ts'
 
 type Audience = 'everyone' | 'qualified'
+type Role = 'helper' | 'tech' | 'senior' | 'admin'
 /** Written once, by the database's clock. */
 type Stamp = ColumnType<Date, never, never>
 
@@ -12,6 +13,29 @@ export type Database = {
   edition: { number: number; hash: string; note: string; made_at: Stamp }
   edition_file: { edition_number: number; name: string; audience: Audience; hash: string; bytes: Buffer }
   edition_in_force: { id: Generated<number>; edition_number: number; since: Stamp; reason: string }
+  person: {
+    id: Generated<string>
+    email: string
+    name: string
+    role: Role
+    password_hash: string | null
+    session_epoch: Generated<number>
+    demo: Generated<boolean>
+    made_at: Stamp
+    made_by: string | null
+    left_at: Date | null
+  }
+  session: { sid: string; sess: unknown; expire: Date }
+  one_time_link: {
+    token_hash: string
+    kind: 'set-password'
+    person_id: string
+    made_at: Stamp
+    made_by: string | null
+    expires_at: Date
+    used_at: Date | null
+  }
+  sign_in_try: { key: string; points: number; expire: number | null }
 }
 
 export type Db = Kysely<Database>
@@ -32,6 +56,20 @@ export function openDatabase(url: string, log: Log): Db {
   pool.on('connect', (client) => client.on('error', broke))
   return new Kysely<Database>({ dialect: new PostgresDialect({ pool }) })
 }
+
+type Query = { text: string; values?: readonly unknown[] }
+
+/**
+ * The same pool, as packages that write their own SQL ask for it (sessions and throttling, each with a table of its
+ * own). Everything else asks in *.queries.ts.
+ */
+export const poolOf = (db: Db) => ({
+  query: async (query: string | Query, values: readonly unknown[] = []) => {
+    const { text, values: own = values } = typeof query === 'string' ? { text: query } : query
+    const { rows } = await db.executeQuery<Record<string, unknown>>(CompiledQuery.raw(text, [...own]))
+    return { rows, rowCount: rows.length }
+  },
+})
 
 const downCodes = new Set([
   'ECONNREFUSED',

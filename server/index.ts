@@ -9,6 +9,7 @@ import { EditionFeed } from './editions/edition-feed.ts'
 import { followEditions } from './editions/follow-editions.ts'
 import { seedStarter } from './editions/seed-starter.ts'
 import { openLog } from './log.ts'
+import { seedDemoPeople, shutOutDemoPeople } from './people/demo-people.ts'
 
 const patienceMs = 30_000
 
@@ -24,6 +25,8 @@ async function main(): Promise<void> {
     { edition: inForce.number, hash: inForce.hash },
     changed ? 'an edition was put in force' : 'edition in force',
   )
+
+  await whenDatabaseIsUp(() => (config.demo ? seedDemoPeople(db) : shutOutDemoPeople(db)))
 
   const feed = new EditionFeed()
   const unfollow = followEditions(config.databaseUrl, db, feed, log)

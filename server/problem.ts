@@ -4,8 +4,13 @@ import type { Log } from './log.ts'
 
 const words = {
   'bad-request': [400, 'The request could not be read.'],
+  unauthorized: [401, 'Sign in first.'],
+  forbidden: [403, 'Your account may not do this.'],
   'not-found': [404, 'There is nothing at this address.'],
+  conflict: [409, 'Something else was changed meanwhile.'],
   'too-large': [413, 'The request is too large.'],
+  'not-json': [415, 'The request must be JSON.'],
+  'too-many': [429, 'Too many tries. Wait, then try again.'],
   unavailable: [503, 'The server is not ready. Try again in a moment.'],
   internal: [500, 'The server failed. It was not your doing.'],
 } as const
@@ -19,11 +24,19 @@ export class Problem extends Error {
   readonly status: number
   /** Field path → sentence. */
   readonly errors: Readonly<Record<string, string>> | undefined
-  constructor(type: ProblemType, title: string = words[type][1], errors?: Record<string, string>) {
+  /** Seconds after which it is worth trying again. */
+  readonly retryAfter: number | undefined
+  constructor(
+    type: ProblemType,
+    title: string = words[type][1],
+    errors?: Record<string, string>,
+    retryAfter: number | undefined = type === 'unavailable' ? 2 : undefined,
+  ) {
     super(title)
     this.type = type
     this.status = words[type][0]
     this.errors = errors
+    this.retryAfter = retryAfter
   }
 }
 
@@ -50,9 +63,9 @@ export const problems =
   (log: Log): ErrorRequestHandler =>
   (error: unknown, _req, res, next) => {
     if (res.headersSent) return next(error)
-    const { type, status, message: title, errors } = asProblem(error)
+    const { type, status, message: title, errors, retryAfter } = asProblem(error)
     if (type === 'internal') log.error({ err: error }, 'a request failed')
-    if (type === 'unavailable') res.set('Retry-After', '2')
+    if (retryAfter !== undefined) res.set('Retry-After', String(retryAfter))
     res
       .status(status)
       .set('Cache-Control', 'no-store')

@@ -3,6 +3,7 @@
  * procedures and articles. Parsed with zod/mini, because the browser parses editions too.
  */
 import * as z from 'zod/mini'
+import { Audience } from './audience.ts'
 import { Condition } from './condition.ts'
 
 const id = z
@@ -11,7 +12,6 @@ const id = z
 const text = z.string().check(z.minLength(1, 'must not be empty'))
 const label = z.string().check(z.minLength(1), z.maxLength(24, 'label must have 24 characters or fewer'))
 
-export const Audience = z.enum(['everyone', 'qualified'])
 export const Hazard = z.enum(['closed', 'closed-can-energize', 'open-dead', 'open-live'])
 /** Who may do a test: anyone with nothing opened, or a qualified person. */
 export const Who = z.enum(['anyone', 'qualified'])
@@ -213,7 +213,6 @@ export const ArticlesFile = z.strictObject({
   articles: z.array(Article),
 })
 
-export type Audience = z.infer<typeof Audience>
 export type Hazard = z.infer<typeof Hazard>
 export type Who = z.infer<typeof Who>
 export type Reading = z.infer<typeof Reading>

@@ -1,4 +1,5 @@
-import type { Article, Audience, Cause, ProceduresFile, Test } from '../edition/schema.ts'
+import type { Audience } from '../edition/audience.ts'
+import type { Article, Cause, ProceduresFile, Test } from '../edition/schema.ts'
 import { plainText } from './plain-text.ts'
 
 export type Kind = 'article' | 'cause' | 'test'

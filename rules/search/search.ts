@@ -3,7 +3,8 @@
  */
 import MiniSearch from 'minisearch'
 import type { QueryCombination } from 'minisearch'
-import type { Audience, Cause, ProceduresFile, Test } from '../edition/schema.ts'
+import type { Audience } from '../edition/audience.ts'
+import type { Cause, ProceduresFile, Test } from '../edition/schema.ts'
 import { documentsOf } from './documents.ts'
 import type { Kind, SearchableArticle, SearchDocument } from './documents.ts'
 import { excerpt, isIn, markAll } from './marks.ts'

@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { Audience } from '../../rules/edition/schema.ts'
+import { Audience } from '../../rules/edition/audience.ts'
 
 /** GET /api/articles?q=…: what is searched for. Empty lists nothing. */
 export const ArticleQuery = z.object({
@@ -29,3 +29,5 @@ export const ArticlesFound = z.object({
   /** How the query was read, when a slip in it was mended. */
   readAs: z.optional(z.string()),
 })
+
+export type ArticlesFound = z.infer<typeof ArticlesFound>

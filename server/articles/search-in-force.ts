@@ -4,27 +4,39 @@ import type { SearchIndex } from '../../rules/search/search.ts'
 import type { Db } from '../database.ts'
 import { editionInForce, openFile } from '../editions/editions.queries.ts'
 
-async function build(db: Db, number: number): Promise<SearchIndex> {
-  const [diagnosis, procedures, shelf] = await Promise.all([
+async function build(db: Db, number: number, qualified: boolean): Promise<SearchIndex> {
+  const audiences = qualified ? (['everyone', 'qualified'] as const) : (['everyone'] as const)
+  const [diagnosis, procedures, shelves] = await Promise.all([
     openFile(db, number, 'diagnosis').then((file) => DiagnosisFile.parse(file)),
-    openFile(db, number, 'procedures-everyone').then((file) => ProceduresFile.parse(file)),
-    openFile(db, number, 'articles-everyone').then((file) => ArticlesFile.parse(file)),
+    Promise.all(
+      audiences.map(async (who) => ProceduresFile.parse(await openFile(db, number, `procedures-${who}`))),
+    ),
+    Promise.all(
+      audiences.map(async (who) => ArticlesFile.parse(await openFile(db, number, `articles-${who}`))),
+    ),
   ])
-  return buildIndex(shelf.articles, diagnosis.causes, diagnosis.tests, [procedures])
+  const articles = shelves.flatMap((shelf) => shelf.articles)
+  return buildIndex(articles, diagnosis.causes, diagnosis.tests, procedures)
 }
 
-/** The index over what everyone may read of the edition in force, built once an edition. Undefined when there is none. */
-export function indexInForce(db: Db): () => Promise<{ edition: number; index: SearchIndex } | undefined> {
-  let last: { edition: number; index: Promise<SearchIndex> } | undefined
-  return async () => {
+type InForce = { edition: number; index: SearchIndex }
+
+/**
+ * The index over what the asker may read of the edition in force, built once an edition and audience. Undefined when
+ * there is none.
+ */
+export function indexInForce(db: Db): (qualified: boolean) => Promise<InForce | undefined> {
+  const last = new Map<boolean, { edition: number; index: Promise<SearchIndex> }>()
+  return async (qualified) => {
     const inForce = await editionInForce(db)
     if (inForce === undefined) return undefined
-    if (last?.edition !== inForce.number) last = { edition: inForce.number, index: build(db, inForce.number) }
-    const { edition, index } = last
+    if (last.get(qualified)?.edition !== inForce.number)
+      last.set(qualified, { edition: inForce.number, index: build(db, inForce.number, qualified) })
+    const { edition, index } = last.get(qualified)!
     try {
       return { edition, index: await index }
     } catch (error) {
-      last = undefined
+      last.delete(qualified)
       throw error
     }
   }

@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto'
-import type { Audience } from '../../rules/edition/schema.ts'
+import type { Audience } from '../../rules/edition/audience.ts'
 import type { FileName } from './editions.contract.ts'
 import type { Starter } from './read-starter.ts'
 

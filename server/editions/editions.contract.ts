@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { Audience } from '../../rules/edition/schema.ts'
+import { Audience } from '../../rules/edition/audience.ts'
 
 const Hash = z.string().check(z.regex(/^[0-9a-f]{64}$/))
 /** A moment, as ISO 8601 in UTC. */

@@ -39,12 +39,13 @@ export function listEditions(db: Db) {
     .execute()
 }
 
-/** An edition's files without their bytes, by name. */
-export function listFiles(db: Db, editionNumber: number) {
+/** An edition's files without their bytes, by name: those for everyone, and for the qualified where that is asked. */
+export function listFiles(db: Db, editionNumber: number, forQualified: boolean) {
   return db
     .selectFrom('edition_file')
     .select(['name', 'audience', 'hash', sql<number>`octet_length(bytes)`.as('bytes')])
     .where('edition_number', '=', editionNumber)
+    .where('audience', 'in', forQualified ? ['everyone', 'qualified'] : ['everyone'])
     .orderBy('name')
     .execute()
 }

@@ -2,6 +2,7 @@ import { Router } from 'express'
 import type { RequestHandler } from 'express'
 import type { Db } from '../database.ts'
 import { Problem, notFound } from '../problem.ts'
+import { mayReadQualified, personOf } from '../session.ts'
 import { compressedFiles } from './compressed-files.ts'
 import { editionCounts } from './count-edition.ts'
 import { EditionInForce, EditionList } from './editions.contract.ts'
@@ -11,16 +12,23 @@ const year = 31_536_000
 // The smallest first: browsers name gzip before br without meaning it.
 const preferred = ['br', 'gzip'] as const
 
-/** What is in force, what was, and the files. A file's address holds its hash, so that it may be kept for ever. */
+/**
+ * What is in force, what was, and the files. A file's address holds its hash, so that it may be kept for ever; the
+ * hash is no right to read what is for qualified people.
+ */
 export function editionRoutes(db: Db, events: RequestHandler): Router {
   const fileOf = compressedFiles(db)
   const countsOf = editionCounts(db)
   return Router()
-    .get('/edition', async (_req, res) => {
+    .get('/edition', async (req, res) => {
       const { since, ...inForce } = (await editionInForce(db)) ?? noneYet()
-      const [files, counts] = await Promise.all([listFiles(db, inForce.number), countsOf(inForce.number)])
+      const qualified = mayReadQualified(req)
+      const [files, { [qualified ? 'qualified' : 'everyone']: counts }] = await Promise.all([
+        listFiles(db, inForce.number, qualified),
+        countsOf(inForce.number),
+      ])
       const answer = EditionInForce.parse({ ...inForce, inForceSince: since.toISOString(), counts, files })
-      res.set('Cache-Control', 'no-cache').json(answer)
+      res.json(answer)
     })
     .get('/edition/events', events)
     .get('/editions', async (_req, res) => {
@@ -37,12 +45,15 @@ export function editionRoutes(db: Db, events: RequestHandler): Router {
       const { hash } = req.params
       const file = /^[0-9a-f]{64}$/.test(hash) ? await fileOf(hash) : undefined
       if (file === undefined) throw notFound('file')
+      if (!file.forEveryone && !mayReadQualified(req))
+        throw new Problem(personOf(req) === undefined ? 'unauthorized' : 'forbidden')
       const encoding = preferred.find((one) => req.acceptsEncodings(one) === one) ?? 'identity'
       res.set({
-        'Cache-Control': `${file.forEveryone ? 'public' : 'private'}, max-age=${year}, immutable`,
+        // What is for qualified people must be gone when they sign out: no cache but the page's own keeps it.
+        'Cache-Control': file.forEveryone ? `public, max-age=${year}, immutable` : 'private, no-store',
         'Content-Type': 'application/json; charset=utf-8',
         ETag: `"${hash}${encoding === 'identity' ? '' : `-${encoding}`}"`,
-        Vary: 'Accept-Encoding',
+        Vary: file.forEveryone ? 'Accept-Encoding' : 'Accept-Encoding, Cookie',
         ...(encoding === 'identity' ? {} : { 'Content-Encoding': encoding }),
       })
       res.send(file.bytes[encoding])

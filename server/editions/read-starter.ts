@@ -6,7 +6,8 @@ import { readFile, readdir } from 'node:fs/promises'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ArticlesFile, DiagnosisFile, ProceduresFile } from '../../rules/edition/schema.ts'
-import type { Article, Audience } from '../../rules/edition/schema.ts'
+import type { Audience } from '../../rules/edition/audience.ts'
+import type { Article } from '../../rules/edition/schema.ts'
 import { parseArticle } from './front-matter.ts'
 
 const folder = fileURLToPath(new URL('../../rules/starter/', import.meta.url))

@@ -1,6 +1,7 @@
 /** `npm start` and, with --dev, `npm run dev`: from a fresh clone to a running Tracelamp. Plain Node, since nothing is installed yet. */
 import { join } from 'node:path'
 import { needClient } from './client.mjs'
+import { host, isPrivate, port, sessionEnv, sessionEnvToCheck } from './environment.mjs'
 import { Fault, sayWhy } from './fault.mjs'
 import { takeLock } from './lock.mjs'
 import { needPackages } from './packages.mjs'
@@ -8,12 +9,11 @@ import { dataFolder } from './places.mjs'
 import { faultOfPort, freePort } from './port.mjs'
 import { startDatabase } from './postgres.mjs'
 import { tryToRun } from './run.mjs'
+import { sayDemoPeople } from './say-demo-people.mjs'
 import { startPages, startServer } from './serve.mjs'
 import { beforeEnd, isStopping, stopAll, stopOnSignals } from './stop.mjs'
 
 const dev = process.argv.includes('--dev')
-const host = process.env.HOST || '127.0.0.1'
-const port = Number(process.env.PORT || 3000)
 const urlOf = (name, number) => `http://${name.includes(':') ? `[${name}]` : name}:${number}`
 const address = urlOf(host, port)
 /** Where this machine reaches itself when the server listens everywhere. */
@@ -28,7 +28,8 @@ async function needPort() {
 }
 
 async function checkConfig() {
-  const env = { ...process.env, DATABASE_URL: process.env.DATABASE_URL || 'postgres://127.0.0.1/private' }
+  const DATABASE_URL = process.env.DATABASE_URL || 'postgres://127.0.0.1/private'
+  const env = { ...process.env, ...sessionEnvToCheck(), DATABASE_URL }
   const { code, output } = await tryToRun(
     process.execPath,
     ['--import', 'tsx', 'server/commands/check-config.ts'],
@@ -54,6 +55,7 @@ async function main() {
     const apiPort = await freePort()
     const api = urlOf('127.0.0.1', apiPort)
     const env = {
+      ...sessionEnv(),
       DATABASE_URL,
       HOST: '127.0.0.1',
       PORT: String(apiPort),
@@ -62,8 +64,10 @@ async function main() {
     }
     await startServer({ env, address: api, watch: true })
     await startPages({ host, port, api })
-  } else await startServer({ env: { DATABASE_URL }, address: urlOf(nearby, port) })
-  if (!isStopping()) console.log(`Tracelamp is at ${address} (Ctrl-C stops it)`)
+  } else await startServer({ env: { ...sessionEnv(), DATABASE_URL }, address: urlOf(nearby, port) })
+  if (isStopping()) return
+  console.log(`Tracelamp is at ${address} (Ctrl-C stops it)`)
+  if (isPrivate) sayDemoPeople()
 }
 
 main().catch((error) => {

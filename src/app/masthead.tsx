@@ -1,6 +1,8 @@
-import { useEffect, useState } from 'react'
+import { useState } from 'react'
 import { Link, useLocation } from 'react-router-dom'
-import { getSetting } from '../offline/settings.ts'
+import { reaches } from '../../server/people/roles.contract.ts'
+import type { Role } from '../../server/people/roles.contract.ts'
+import { useFollowPerson, useMe } from '../people/people.api.ts'
 import { Icon } from '../ui/icon.tsx'
 import { Mark } from './mark.tsx'
 import { SavingWord } from './saving-word.tsx'
@@ -15,25 +17,32 @@ const forStaff = [
   ['/articles', 'Articles'],
   ['/editions', 'Editions'],
 ] as const
+const forAdmins = [...forStaff, ['/shop/people', 'Our shop']] as const
 
-const staffOnly = /^\/(diagnosis|editions)\b/
-const shared = /^\/(articles|causes|tests)\b/
-
-/** Whose masthead a page carries. Pages both read follow what this device's person stated. */
-function useStaff(path: string): boolean {
-  const [qualified, setQualified] = useState(false)
-  useEffect(() => {
-    let wanted = true
-    getSetting('qualified').then(
-      (stated) => wanted && setQualified(stated !== undefined),
-      () => {},
-    )
-    return () => {
-      wanted = false
-    }
-  }, [path])
-  return staffOnly.test(path) || (shared.test(path) && qualified)
+function linksFor(role: Role | undefined) {
+  if (role === undefined || !reaches(role, 'tech')) return forHomeowners
+  return reaches(role, 'admin') ? forAdmins : forStaff
 }
+
+/** Sign in, or whose account this is. Where the session has ended with time, the way back in. */
+function AccountLink() {
+  const { known, person, expired } = useMe()
+  const { pathname, search } = useLocation()
+  if (!known) return null
+  if (person === undefined || expired)
+    return (
+      <Link className="word-btn mast-me" to={`/sign-in?next=${encodeURIComponent(pathname + search)}`}>
+        {expired ? 'Sign in again' : 'Sign in'}
+      </Link>
+    )
+  return (
+    <Link className="word-btn mast-me" to="/account" aria-label={`Account: ${person.name}`}>
+      <span>{person.name}</span>
+    </Link>
+  )
+}
+
+const shared = /^\/(articles|causes|tests)\b/
 
 /** Causes and tests are read among the articles, so they stand under that word too. */
 const isUnder = (to: string, path: string) =>
@@ -43,7 +52,8 @@ const isUnder = (to: string, path: string) =>
 export function Masthead() {
   const { pathname } = useLocation()
   const [openAt, setOpenAt] = useState<string>()
-  const links = useStaff(pathname) ? forStaff : forHomeowners
+  const links = linksFor(useMe().person?.role)
+  useFollowPerson()
   const open = openAt === pathname
   return (
     <header
@@ -74,6 +84,7 @@ export function Masthead() {
               </Link>
             ))}
           </nav>
+          <AccountLink />
           <ThemeButton />
         </div>
       </div>

@@ -8,9 +8,10 @@ const check = () => import('../triage/check.page.tsx')
 const steps = () => import('../triage/steps.page.tsx')
 const volts = () => import('../triage/volts.page.tsx')
 const result = () => import('../triage/result.page.tsx')
+const readers = () => import('../editions/read-files.ts')
 
 /** The check whole, fetched once the first page stands, so that it works when the network goes. */
-export const bringTriage = () => Promise.all([check(), steps(), volts(), result()])
+export const bringTriage = () => Promise.all([check(), steps(), volts(), result(), readers()])
 
 const diagnosis = () => import('../diagnosis/diagnosis.page.tsx')
 const articles = () => import('../articles/articles.page.tsx')
@@ -53,6 +54,11 @@ export const routes: RouteObject[] = [
           { path: 'causes/:id', lazy: cause },
           { path: 'tests/:id', lazy: test },
           { path: 'editions', lazy: () => import('../editions/editions.page.tsx') },
+          { path: 'sign-in', lazy: () => import('../people/sign-in.page.tsx') },
+          { path: 'sign-up', lazy: () => import('../people/sign-up.page.tsx') },
+          { path: 'set-password', lazy: () => import('../people/set-password.page.tsx') },
+          { path: 'account', lazy: () => import('../people/account.page.tsx') },
+          { path: 'shop/people', lazy: () => import('../people/people.page.tsx') },
           { path: '*', lazy: () => import('./not-found.page.tsx') },
         ],
       },

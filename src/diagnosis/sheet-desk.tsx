@@ -164,7 +164,7 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
           )}
         </div>
         <SignalPanel word="warning" slim className="desk-warning">
-          Readings with a cover off and power on are for qualified people. Prove the meter on a known source
+          Readings with a cover off and power on are for qualified people. Prove the meter on a known source,
           before and after. Local code and the authority having jurisdiction decide.
         </SignalPanel>
       </Page>

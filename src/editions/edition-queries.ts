@@ -2,17 +2,22 @@ import { queryOptions, skipToken } from '@tanstack/react-query'
 import type { QueryClient } from '@tanstack/react-query'
 import { EditionInForce } from '../../server/editions/editions.contract.ts'
 import type { FileName } from '../../server/editions/editions.contract.ts'
-import { ArticlesFile, ProceduresFile } from '../../rules/edition/schema.ts'
-import type { Audience } from '../../rules/edition/schema.ts'
-import { openEdition } from '../../rules/edition/open.ts'
+import type { Audience } from '../../rules/edition/audience.ts'
+import { Person } from '../../server/people/me.contract.ts'
+import { isQualified } from '../../server/people/roles.contract.ts'
 import { get } from '../api.ts'
-import { bringFile, hashOf, readJson } from './edition-file.ts'
+import { keptPerson } from '../offline/person.ts'
+import { bringFile, fileOf, readJson } from './edition-file.ts'
+import type { FileOf } from './edition-file.ts'
 import { keepEdition, readKept } from './kept-editions.ts'
 
 /** A file never changes under its hash, so it is read once and stays. Maps must not be compared piece by piece. */
 const forGood = { staleTime: Infinity, gcTime: Infinity, structuralSharing: false } as const
 /** How long a page waits for the server before it opens with what lies on the device. */
 const patienceMs = 1500
+
+const bringReaders = () => import('./read-files.ts')
+type Readers = Awaited<ReturnType<typeof bringReaders>>
 
 const whenIdle = (run: () => void) =>
   'requestIdleCallback' in window ? window.requestIdleCallback(run) : setTimeout(run, 1500)
@@ -29,10 +34,17 @@ export const inForceQuery = queryOptions({
   staleTime: 60_000,
 })
 
+/** Whether what lies on the device is all that its person may have: who has just signed in may have more. */
+async function isEnough(info: EditionInForce): Promise<boolean> {
+  const person = Person.safeParse(await keptPerson().catch(() => undefined)).data
+  return !isQualified(person?.role) || fileOf(info, 'articles-qualified') !== undefined
+}
+
 async function chooseEdition(client: QueryClient): Promise<EditionInForce> {
   const asked = client.fetchQuery(inForceQuery)
   const kept = await readKept()
   if (kept === undefined) return asked
+  if (!(await isEnough(kept.inForce))) return asked.catch(() => kept.inForce)
   const tired = new Promise<undefined>((resolve) => setTimeout(() => resolve(undefined), patienceMs))
   return (await Promise.race([asked.catch(() => undefined), tired])) ?? kept.inForce
 }
@@ -63,18 +75,25 @@ export const earlierQuery = (hash: string) =>
 function fileQuery<Content>(
   info: EditionInForce | undefined,
   name: FileName,
-  read: (file: unknown) => Content,
+  read: (readers: Readers, file: unknown) => Content,
 ) {
+  const file = info && fileOf(info, name)
   return queryOptions({
     ...forGood,
-    queryKey: ['edition-file', name, info?.files.find((file) => file.name === name)?.hash] as const,
-    queryFn: info === undefined ? skipToken : async () => read(readJson(await bringFile(hashOf(info, name)))),
+    queryKey: ['edition-file', name, file?.hash] as const,
+    queryFn: file === undefined ? skipToken : () => readFile(file, read),
   })
 }
 
+async function readFile<Content>(file: FileOf, read: (readers: Readers, file: unknown) => Content) {
+  const [readers, bytes] = await Promise.all([bringReaders(), bringFile(file)])
+  return read(readers, readJson(bytes))
+}
+
 /** What diagnosis needs, opened. Like the other files it waits where no edition is chosen yet. */
-export const openedQuery = (info: EditionInForce | undefined) => fileQuery(info, 'diagnosis', openEdition)
+export const openedQuery = (info: EditionInForce | undefined) =>
+  fileQuery(info, 'diagnosis', ({ openEdition }, file) => openEdition(file))
 export const proceduresQuery = (info: EditionInForce | undefined, audience: Audience) =>
-  fileQuery(info, `procedures-${audience}`, (file) => ProceduresFile.parse(file))
+  fileQuery(info, `procedures-${audience}`, ({ readProcedures }, file) => readProcedures(file))
 export const articlesQuery = (info: EditionInForce | undefined, audience: Audience) =>
-  fileQuery(info, `articles-${audience}`, (file) => ArticlesFile.parse(file))
+  fileQuery(info, `articles-${audience}`, ({ readArticles }, file) => readArticles(file))

@@ -8,8 +8,10 @@ import { EditionFeed } from '../../server/editions/edition-feed.ts'
 import { followEditions } from '../../server/editions/follow-editions.ts'
 import { seedStarter } from '../../server/editions/seed-starter.ts'
 import { openLog } from '../../server/log.ts'
+import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import { testDatabase } from '../server/database.ts'
 import type { TestDatabase } from '../server/database.ts'
+import { testSecret } from '../server/running-app.ts'
 
 /** What is served: the checkout's build and its worker unless said. */
 type Served = { pages?: string; worker?: boolean }
@@ -29,12 +31,13 @@ export async function openSite(served: Served = {}): Promise<Site> {
   const log = openLog('silent')
   const database = await testDatabase()
   await seedStarter(database.db)
+  await seedDemoPeople(database.db)
   const feed = new EditionFeed()
   const unfollow = followEditions(database.url, database.db, feed, log)
   let port = 0
   let stop = () => Promise.resolve()
   const start = async ({ pages, worker = true }: Served = {}) => {
-    const config = { trustProxy: 0, worker }
+    const config = { trustProxy: 0, worker, sessionSecret: testSecret }
     const { app, close } = createApp({ db: database.db, feed, log, config, ...(pages && { pages }) })
     const server = createServer(app)
     await new Promise<void>((resolve) => server.listen(port, '127.0.0.1', resolve))

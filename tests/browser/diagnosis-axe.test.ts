@@ -36,8 +36,8 @@ describe.each(['light', 'dark'] as const)('Diagnosis, %s', (theme) => {
       })
     }
     await page.goto('/diagnosis')
-    await page.getByRole('checkbox').waitFor()
-    await sound('the statement')
+    await page.getByRole('heading', { level: 1, name: 'Diagnosis is for qualified people' }).waitFor()
+    await sound('closed to who is not signed in')
     await openDiagnosis(page)
     await sound('no sheets yet')
     await page.getByRole('button', { name: 'New sheet' }).click()

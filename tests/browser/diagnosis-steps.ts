@@ -1,13 +1,14 @@
 import type { Page } from 'playwright-core'
+import { signInAs } from './sign-in-as.ts'
 
 type Begin = { title?: string; source?: RegExp; system?: RegExp; wiring?: RegExp }
 
-/** States to be qualified on this device, and opens Diagnosis. */
+/** Signs a tech in, and opens Diagnosis. */
 export async function openDiagnosis(page: Page): Promise<void> {
+  await signInAs(page, 'tech')
   await page.goto('/diagnosis')
-  await page.getByRole('checkbox', { name: 'I am qualified for this work.' }).click()
-  await page.getByRole('button', { name: 'Open Diagnosis' }).click()
-  await page.getByRole('heading', { level: 1, name: 'Diagnosis' }).waitFor()
+  await page.getByRole('heading', { level: 1, name: 'Diagnosis', exact: true }).waitFor()
+  await page.getByRole('button', { name: 'New sheet' }).waitFor()
 }
 
 /** Begins a sheet and waits until it is ranked: a hard-wired inverter, 120 V, through a panel, unless told. */

@@ -1,10 +1,12 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { putInForce } from '../../server/editions/put-in-force.ts'
+import { demoPerson } from '../server/asker.ts'
 import { changedEdition } from '../server/some-edition.ts'
 import { openBrowser, openSite, phone, visit } from './browser.ts'
 import type { Site } from './browser.ts'
 import { beginSheet, field, observe, openDiagnosis, ranking, read, readThree } from './diagnosis-steps.ts'
+import { signInAs } from './sign-in-as.ts'
 
 let site: Site
 let browser: Browser
@@ -23,19 +25,17 @@ const bondLines = (page: Page) =>
     .getByRole('listitem')
     .evaluateAll((lines) => lines.map((line) => / not met/.test(line.textContent ?? '')).map((not) => !not))
 
-test('nothing opens before the statement; withdrawn, it is asked again, and Undo brings it back', async () => {
+test('nothing opens before a tech is signed in; a homeowner is told who may', async () => {
   const { page, end } = await visit(browser, site)
   await page.goto('/diagnosis?sheet=anything')
   await page.getByRole('heading', { level: 1, name: 'Diagnosis is for qualified people' }).waitFor()
-  await page.getByRole('button', { name: 'Open Diagnosis' }).click({ force: true })
-  expect(await page.getByRole('heading', { level: 1 }).innerText()).toBe('Diagnosis is for qualified people')
-  await openDiagnosis(page)
+  const signIn = page.getByRole('main').getByRole('link', { name: 'Sign in' })
+  expect(await signIn.getAttribute('href')).toBe('/sign-in?next=%2Fdiagnosis%3Fsheet%3Danything')
+  await signInAs(page, 'helper')
   await page.reload()
-  await page.getByText(/You stated on/).waitFor()
-  await page.getByRole('button', { name: 'Withdraw the statement' }).click()
-  await page.getByRole('heading', { name: 'Diagnosis is for qualified people' }).waitFor()
-  await page.getByRole('button', { name: 'Undo' }).click()
-  await page.getByRole('heading', { level: 1, name: 'Diagnosis', exact: true }).waitFor()
+  await page.getByText('with a homeowner’s account.').waitFor()
+  expect(await signIn.count()).toBe(0)
+  await openDiagnosis(page)
   await end()
 })
 
@@ -54,10 +54,13 @@ test('a diagnosis by keyboard alone', async () => {
     throw new Error('never reached by Tab')
   }
   await page.goto('/diagnosis')
-  await page.getByRole('checkbox').waitFor()
-  await tabTo((html) => html.includes('I am qualified'))
-  await keyboard.press('Space')
-  await tabTo((html) => html.includes('Open Diagnosis'))
+  await page.getByRole('heading', { level: 1, name: 'Diagnosis is for qualified people' }).waitFor()
+  await tabTo((html) => html.includes('/sign-in?next') && html.includes('btn-main'))
+  await keyboard.press('Enter')
+  await tabTo((html) => html.includes('autocomplete="username"'))
+  await keyboard.type(demoPerson('tech').email)
+  await keyboard.press('Tab')
+  await keyboard.type(demoPerson('tech').password)
   await keyboard.press('Enter')
   await page.getByRole('button', { name: 'New sheet' }).waitFor()
   await tabTo((html) => html.includes('New sheet'))

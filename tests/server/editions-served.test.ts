@@ -4,6 +4,8 @@ import { brotliDecompressSync, gunzipSync } from 'node:zlib'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { EditionInForce, EditionList } from '../../server/editions/editions.contract.ts'
 import { putInForce } from '../../server/editions/put-in-force.ts'
+import { seedDemoPeople } from '../../server/people/demo-people.ts'
+import { signedIn } from './asker.ts'
 import { testDatabase } from './database.ts'
 import type { TestDatabase } from './database.ts'
 import { runApp } from './running-app.ts'
@@ -12,9 +14,12 @@ import { changedEdition, starterBytes } from './some-edition.ts'
 
 let database: TestDatabase
 let app: RunningApp
+let cookie: string
 beforeAll(async () => {
   database = await testDatabase()
   app = await runApp(database.url)
+  await seedDemoPeople(database.db)
+  cookie = (await signedIn(app, 'tech')).cookie()
 })
 afterAll(async () => {
   await app.close()
@@ -41,8 +46,9 @@ test('before any edition is in force, the answer is "not ready"', async () => {
 
 test('the edition in force is named with its counts and files', async () => {
   await putInForce(database.db, starterBytes, { note: 'starter edition', reason: 'test' })
-  const answer = await fetch(`${app.url}/api/edition`)
-  expect(answer.headers.get('cache-control')).toBe('no-cache')
+  const answer = await fetch(`${app.url}/api/edition`, { headers: { cookie } })
+  expect(answer.headers.get('cache-control')).toBe('private, no-cache')
+  expect(answer.headers.get('vary')).toMatch(/cookie/i)
   const edition = EditionInForce.parse(await answer.json())
   const diagnosis = JSON.parse(
     starterBytes.files.find((file) => file.name === 'diagnosis')!.bytes.toString('utf8'),
@@ -64,22 +70,26 @@ test('the edition in force is named with its counts and files', async () => {
   expect(edition.files).toEqual(expect.arrayContaining(listed))
 })
 
-test('every file is served by its hash, whole, in each encoding, and kept for ever', async () => {
+test('every file is served by its hash, whole, in each encoding; what is for everyone is kept for ever', async () => {
   for (const file of starterBytes.files) {
     const path = `/api/edition-files/${file.hash}`
-    const plain = await raw(path, {})
+    const plain = await raw(path, { cookie })
     expect(plain.body.equals(file.bytes)).toBe(true)
     expect(createHash('sha256').update(plain.body).digest('hex')).toBe(file.hash)
-    const br = await raw(path, { 'accept-encoding': 'gzip, deflate, br' })
+    const br = await raw(path, { cookie, 'accept-encoding': 'gzip, deflate, br' })
     expect(br.headers['content-encoding']).toBe('br')
     expect(brotliDecompressSync(br.body).equals(file.bytes)).toBe(true)
-    const gz = await raw(path, { 'accept-encoding': 'gzip' })
+    const gz = await raw(path, { cookie, 'accept-encoding': 'gzip' })
     expect(gz.headers['content-encoding']).toBe('gzip')
     expect(gunzipSync(gz.body).equals(file.bytes)).toBe(true)
     if (file.bytes.length > 10_000) expect(br.body.length).toBeLessThan(file.bytes.length / 3)
     for (const answer of [plain, br, gz]) {
-      const whose = file.audience === 'everyone' ? 'public' : 'private'
-      expect(answer.headers['cache-control']).toBe(`${whose}, max-age=31536000, immutable`)
+      const open = file.audience === 'everyone'
+      expect(answer.headers['cache-control']).toBe(
+        open ? 'public, max-age=31536000, immutable' : 'private, no-store',
+      )
+      // A cookie handed out from a shared cache would be somebody else's.
+      expect(answer.headers['set-cookie']).toBeUndefined()
       expect(String(answer.headers['vary'])).toMatch(/accept-encoding/i)
       expect(answer.headers['content-type']).toMatch(/^application\/json/)
     }

@@ -22,7 +22,15 @@ test('an empty database comes to the latest, once, even when several processes m
       select table_name as name from information_schema.tables
       where table_schema = 'public' and table_name not like 'kysely%' order by 1
     `.execute(db)
-    expect(rows.map((row) => row.name)).toEqual(['edition', 'edition_file', 'edition_in_force'])
+    expect(rows.map((row) => row.name)).toEqual([
+      'edition',
+      'edition_file',
+      'edition_in_force',
+      'one_time_link',
+      'person',
+      'session',
+      'sign_in_try',
+    ])
   } finally {
     await close()
   }

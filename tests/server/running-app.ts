@@ -18,23 +18,22 @@ export type RunningOptions = {
   worker?: boolean
   /** 0 unless said: any free one. */
   port?: number
+  trustProxy?: number
 }
+
+/** Signs the cookies of every server that a test runs. */
+export const testSecret = 'a secret that only the tests use'
 
 /** The whole server on a port of loopback, with a pool and a listener of its own, as one process of several would be. */
 export async function runApp(
   databaseUrl: string,
-  { log = openLog('silent'), pages, worker = true, port = 0 }: RunningOptions = {},
+  { log = openLog('silent'), pages, worker = true, port = 0, trustProxy = 0 }: RunningOptions = {},
 ): Promise<RunningApp> {
   const db = openDatabase(databaseUrl, log)
   const feed = new EditionFeed()
   const unfollow = followEditions(databaseUrl, db, feed, log)
-  const { app, close } = createApp({
-    db,
-    feed,
-    log,
-    config: { trustProxy: 0, worker },
-    ...(pages && { pages }),
-  })
+  const config = { trustProxy, worker, sessionSecret: testSecret }
+  const { app, close } = createApp({ db, feed, log, config, ...(pages && { pages }) })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)

@@ -1,0 +1,192 @@
+/** Every route, asked by everyone, for one's own and for another's: what it answers, over HTTP. */
+import { readFileSync, readdirSync } from 'node:fs'
+import { fileURLToPath } from 'node:url'
+import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { putInForce } from '../../server/editions/put-in-force.ts'
+import { seedDemoPeople } from '../../server/people/demo-people.ts'
+import type { Role } from '../../server/people/roles.contract.ts'
+import { Asker, signedIn } from './asker.ts'
+import { testDatabase } from './database.ts'
+import type { TestDatabase } from './database.ts'
+import { runApp } from './running-app.ts'
+import type { RunningApp } from './running-app.ts'
+import { starterBytes } from './some-edition.ts'
+
+const who = ['visitor', 'helper', 'tech', 'senior', 'admin'] as const
+type Who = (typeof who)[number]
+
+let database: TestDatabase
+let app: RunningApp
+const askers = {} as Record<Who, Asker>
+const ids = {} as Record<Role, string>
+/** Somebody whom no test signs in. */
+let another: string
+
+beforeAll(async () => {
+  database = await testDatabase()
+  await putInForce(database.db, starterBytes, { note: 'starter edition', reason: 'test' })
+  await seedDemoPeople(database.db)
+  app = await runApp(database.url)
+  askers.visitor = new Asker(app)
+  for (const role of ['helper', 'tech', 'senior', 'admin'] as const) askers[role] = await signedIn(app, role)
+  for (const { id, role } of await database.db.selectFrom('person').select(['id', 'role']).execute())
+    ids[role] = id
+  const row = {
+    email: 'another@example.test',
+    name: 'Another',
+    role: 'tech',
+    password_hash: null,
+    made_by: null,
+  } as const
+  another = (await database.db.insertInto('person').values(row).returning('id').executeTakeFirstOrThrow()).id
+})
+afterAll(async () => {
+  await app.close()
+  await database.close()
+})
+
+const file = (name: string) => starterBytes.files.find((one) => one.name === name)!.hash
+const all = (status: number): Record<Who, number> => ({
+  visitor: status,
+  helper: status,
+  tech: status,
+  senior: status,
+  admin: status,
+})
+const forQualified = { visitor: 401, helper: 403, tech: 200, senior: 200, admin: 200 }
+const forAdmin = (status: number) => ({ visitor: 401, helper: 403, tech: 403, senior: 403, admin: status })
+
+type Row = {
+  route: string
+  /** Which object is asked for, where it matters. */
+  of?: string
+  path: (asker: Who) => string
+  body?: unknown
+  status: Record<Who, number>
+}
+const own = (asker: Who) => (asker === 'visitor' ? ids.helper : ids[asker])
+
+/** Routes that end a session stand at the bottom, with one that is no session's. */
+const table: Row[] = [
+  { route: 'get /health', path: () => '/api/health', status: all(200) },
+  { route: 'get /edition', path: () => '/api/edition', status: all(200) },
+  { route: 'get /edition/events', path: () => '/api/edition/events', status: all(200) },
+  { route: 'get /editions', path: () => '/api/editions', status: all(200) },
+  {
+    route: 'get /edition-files/:hash',
+    of: 'for everyone',
+    path: () => `/api/edition-files/${file('articles-everyone')}`,
+    status: all(200),
+  },
+  {
+    route: 'get /edition-files/:hash',
+    of: 'for qualified people: articles',
+    path: () => `/api/edition-files/${file('articles-qualified')}`,
+    status: forQualified,
+  },
+  {
+    route: 'get /edition-files/:hash',
+    of: 'for qualified people: procedures',
+    path: () => `/api/edition-files/${file('procedures-qualified')}`,
+    status: forQualified,
+  },
+  { route: 'get /articles', path: () => '/api/articles?q=neutral', status: all(200) },
+  { route: 'get /me', path: () => '/api/me', status: all(200) },
+  { route: 'get /people', path: () => '/api/people', status: forAdmin(200) },
+  {
+    route: 'post /people',
+    path: () => '/api/people',
+    body: { email: 'made-in-the-table@example.test', name: 'Made', role: 'admin' },
+    status: forAdmin(201),
+  },
+  {
+    route: 'patch /people/:id',
+    of: 'own: a higher role',
+    path: (asker) => `/api/people/${own(asker)}`,
+    body: { role: 'admin' },
+    status: forAdmin(403),
+  },
+  {
+    route: 'patch /people/:id',
+    of: 'another’s',
+    path: () => `/api/people/${another}`,
+    body: { role: 'senior' },
+    status: forAdmin(200),
+  },
+  {
+    route: 'patch /people/:id',
+    of: 'nobody’s',
+    path: () => '/api/people/00000000-0000-4000-8000-000000000000',
+    body: { role: 'senior' },
+    status: forAdmin(404),
+  },
+  {
+    route: 'post /people/:id/link',
+    of: 'own',
+    path: (asker) => `/api/people/${own(asker)}/link`,
+    status: forAdmin(201),
+  },
+  {
+    route: 'post /people/:id/link',
+    of: 'another’s',
+    path: () => `/api/people/${another}/link`,
+    status: forAdmin(201),
+  },
+  { route: 'post /people/:id/link', of: 'no id', path: () => '/api/people/1/link', status: forAdmin(404) },
+  { route: 'get /links/:token', of: 'made up', path: () => '/api/links/nonsense', status: all(404) },
+  {
+    route: 'post /links/:token',
+    of: 'made up',
+    path: () => '/api/links/nonsense',
+    body: { password: 'a good long password' },
+    status: all(404),
+  },
+  { route: 'post /sign-in', of: 'nothing typed', path: () => '/api/sign-in', status: all(400) },
+  { route: 'post /sign-up', of: 'nothing typed', path: () => '/api/sign-up', status: all(400) },
+  {
+    route: 'post /account/password',
+    of: 'nothing typed',
+    path: () => '/api/account/password',
+    status: { ...all(400), visitor: 401 },
+  },
+  {
+    route: 'post /sign-out-everywhere',
+    path: () => '/api/sign-out-everywhere',
+    status: { ...all(200), visitor: 401 },
+  },
+  { route: 'post /sign-out', path: () => '/api/sign-out', status: all(200) },
+]
+
+test('the table holds every route there is', () => {
+  const server = fileURLToPath(new URL('../../server', import.meta.url))
+  const sources = readdirSync(server, { recursive: true, encoding: 'utf8' })
+    .filter((name) => name.endsWith('.routes.ts') || name === 'app.ts')
+    .map((name) => readFileSync(`${server}/${name}`, 'utf8'))
+  const routes = sources
+    .flatMap((source) => [...source.matchAll(/\.(get|post|put|patch|delete)\('(\/[^']*)'/g)])
+    .map(([, method, path]) => `${method} ${path!.replace(/^\/api/, '')}`)
+  expect(routes.length).toBeGreaterThan(15)
+  expect([...new Set(table.map((row) => row.route))].sort()).toEqual([...new Set(routes)].sort())
+})
+
+describe.each(table)('$route $of', ({ route, path, body, status }) => {
+  test.each(who)('asked by a %s', async (asker) => {
+    const method = route.split(' ')[0]!.toUpperCase()
+    const before = await askers[asker].whoAmI()
+    const answer = await askers[asker].ask(method, path(asker), { body })
+    expect(answer.status).toBe(status[asker])
+    if (status[asker] >= 400) {
+      expect(answer.headers.get('content-type')).toMatch(/^application\/problem\+json/)
+      expect(answer.headers.get('cache-control')).toBe('no-store')
+      expect(await askers[asker].whoAmI()).toBe(before)
+    }
+    if (route === 'get /edition/events') await answer.body?.cancel()
+  })
+})
+
+test('nobody’s role has changed but another’s', async () => {
+  const roles = await database.db.selectFrom('person').select(['id', 'role']).execute()
+  for (const role of ['helper', 'tech', 'senior', 'admin'] as const)
+    expect(roles.find((person) => person.id === ids[role])?.role).toBe(role)
+  expect(roles.find((person) => person.id === another)?.role).toBe('senior')
+})
