@@ -56,8 +56,8 @@ export function openThrottle(db: Db, secret: string) {
   const markOf = (account: string, nonce: string) => sign(`device ${account} ${nonce}`)
   /** Whether this device holds the mark of an earlier sign-in of this account. Returns what names the device. */
   const deviceOf = (account: string, mark: string | undefined): string | undefined => {
-    const [nonce, signature] = mark?.split('.') ?? []
-    if (nonce === undefined || signature?.length !== 64) return undefined
+    const [nonce, signature] = /^([0-9a-f]{32})\.([0-9a-f]{64})$/.exec(mark ?? '')?.slice(1) ?? []
+    if (nonce === undefined || signature === undefined) return undefined
     return timingSafeEqual(Buffer.from(signature), Buffer.from(markOf(account, nonce))) ? nonce : undefined
   }
 
