@@ -5,6 +5,7 @@ import { poolOf } from './database.ts'
 import type { Db } from './database.ts'
 import type { Log } from './log.ts'
 import { Problem } from './problem.ts'
+import { cookieOf } from './people/cookie-of.ts'
 import { findPerson } from './people/people.queries.ts'
 import type { Known } from './people/people.queries.ts'
 import { isQualified, reaches } from './people/roles.contract.ts'
@@ -100,8 +101,10 @@ const identify =
  * signed in: a cookie has no place in an answer that others may be handed from a cache.
  */
 export function lookAfterSession(req: Request, res: Response): void {
-  if (personOf(req) === undefined) res.clearCookie(cookieName)
-  else if (req.session.day !== today()) req.session.day = today()
+  if (personOf(req) === undefined) {
+    // Nobody's cookie is left alone: this answer may be overtaken by a sign-in, and would take the new one away.
+    if (cookieOf(req, cookieName) !== undefined) res.clearCookie(cookieName)
+  } else if (req.session.day !== today()) req.session.day = today()
 }
 
 const done = (run: (end: (problem?: unknown) => void) => void) =>

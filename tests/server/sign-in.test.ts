@@ -82,6 +82,14 @@ describe('a session', () => {
     }
   })
 
+  test('of nobody is told to forget nothing: a late answer would take away what a sign-in has set meanwhile', async () => {
+    expect((await new Asker(app).get('/api/me')).headers.getSetCookie()).toEqual([])
+    const ended = new Asker(app)
+    ended.setCookie('tracelamp', 's%3Aended.ended')
+    await ended.get('/api/me')
+    expect(ended.cookieNamed('tracelamp')).toBeUndefined()
+  })
+
   test('is written once a day, not with every request', async () => {
     const asker = await signedIn(app, 'senior')
     const written = async () => {
