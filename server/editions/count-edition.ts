@@ -13,7 +13,8 @@ async function count(db: Db, number: number): Promise<EditionInForce['counts']> 
     causes: diagnosis.causes.length,
     tests: diagnosis.tests.length,
     rules: diagnosis.groups.reduce((sum, group) => sum + group.rules.length, 0),
-    articles: forEveryone.articles.length + forQualified.articles.length,
+    articles: [...forEveryone.articles, ...forQualified.articles].filter((one) => one.withdrawn === undefined)
+      .length,
   }
 }
 
