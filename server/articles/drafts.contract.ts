@@ -50,6 +50,8 @@ const Reason = z
 /** PUT /api/article-drafts/:slug */
 export const SaveDraft = z.extend(DraftText, {
   version: Version,
+  /** What this replaces is to be kept as a revision, whatever sitting it is of. */
+  apart: z.optional(z.boolean()),
   /** Number of the revision that this brings back. */
   restores: z.optional(z.int()),
   /** `inForce.hash` as the writer has seen it: the draft now takes what is in force there into account. */

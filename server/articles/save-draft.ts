@@ -12,7 +12,7 @@ const sittingMs = 10 * 60 * 1000
  * @throws Problem 409 with the other text, when it is another by now
  */
 export function saveDraft(db: Db, slug: string, save: SaveDraft, personId: string): Promise<Draft> {
-  const { version, restores, onto, ...text } = save
+  const { version, apart, restores, onto, ...text } = save
   return db.transaction().execute(async (tx) => {
     await lockArticle(tx, slug)
     const state = await readState(tx, slug)
@@ -28,6 +28,7 @@ export function saveDraft(db: Db, slug: string, save: SaveDraft, personId: strin
     const sameSitting =
       begun !== undefined &&
       begun.editorId === personId &&
+      apart !== true &&
       restores === undefined &&
       onto === undefined &&
       now.getTime() - begun.sittingSince.getTime() < sittingMs

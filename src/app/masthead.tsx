@@ -1,6 +1,8 @@
-import { useEffect, useState } from 'react'
+import { useState } from 'react'
 import { Link, NavLink, useLocation } from 'react-router-dom'
-import { getSetting } from '../offline/settings.ts'
+import { reaches } from '../../server/people/roles.contract.ts'
+import type { Role } from '../../server/people/roles.contract.ts'
+import { useFollowPerson, useMe } from '../people/people.api.ts'
 import { Icon } from '../ui/icon.tsx'
 import { Mark } from './mark.tsx'
 import { SavingWord } from './saving-word.tsx'
@@ -15,31 +17,37 @@ const forStaff = [
   ['/articles', 'Articles'],
   ['/editions', 'Editions'],
 ] as const
+const forAdmins = [...forStaff, ['/shop/people', 'Our shop']] as const
 
-const staffOnly = /^\/(diagnosis|editions)\b/
-const shared = /^\/(articles|causes|tests)\b/
+function linksFor(role: Role | undefined) {
+  if (role === undefined || !reaches(role, 'tech')) return forHomeowners
+  return reaches(role, 'admin') ? forAdmins : forStaff
+}
 
-/** Whose masthead a page carries. Pages both read follow what this device's person stated. */
-function useStaff(path: string): boolean {
-  const [qualified, setQualified] = useState(false)
-  useEffect(() => {
-    let wanted = true
-    getSetting('qualified').then(
-      (stated) => wanted && setQualified(stated !== undefined),
-      () => {},
+/** Sign in, or whose account this is. Where the session has ended with time, the way back in. */
+function AccountLink() {
+  const { known, person, expired } = useMe()
+  const { pathname, search } = useLocation()
+  if (!known) return null
+  if (person === undefined || expired)
+    return (
+      <Link className="word-btn mast-me" to={`/sign-in?next=${encodeURIComponent(pathname + search)}`}>
+        {expired ? 'Sign in again' : 'Sign in'}
+      </Link>
     )
-    return () => {
-      wanted = false
-    }
-  }, [path])
-  return staffOnly.test(path) || (shared.test(path) && qualified)
+  return (
+    <Link className="word-btn mast-me" to="/account" aria-label={`Account: ${person.name}`}>
+      <span>{person.name}</span>
+    </Link>
+  )
 }
 
 /** The head of every page: mark, ways to go, where what was typed lies, theme. On a phone they fold under "Menu". */
 export function Masthead() {
   const { pathname } = useLocation()
   const [openAt, setOpenAt] = useState<string>()
-  const links = useStaff(pathname) ? forStaff : forHomeowners
+  const links = linksFor(useMe().person?.role)
+  useFollowPerson()
   const open = openAt === pathname
   return (
     <header
@@ -70,6 +78,7 @@ export function Masthead() {
               </NavLink>
             ))}
           </nav>
+          <AccountLink />
           <ThemeButton />
         </div>
       </div>
