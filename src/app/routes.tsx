@@ -35,6 +35,8 @@ export const routes: RouteObject[] = [
           },
           { path: 'diagnosis', lazy: () => import('../diagnosis/diagnosis.page.tsx') },
           { path: 'articles', lazy: () => import('../articles/articles.page.tsx') },
+          { path: 'articles/new', lazy: () => import('../articles/new.page.tsx') },
+          { path: 'articles/:slug/edit', lazy: () => import('../articles/edit.page.tsx') },
           { path: 'articles/:slug', lazy: () => import('../articles/article.page.tsx') },
           { path: 'causes/:id', lazy: () => import('../articles/cause.page.tsx') },
           { path: 'tests/:id', lazy: () => import('../articles/test.page.tsx') },
