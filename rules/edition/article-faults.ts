@@ -14,11 +14,18 @@ const link = /\]\(\s*<?\/(causes|tests|articles)\/([^)\s>?#]*)/g
 const warns = /^> \*\*(danger|warning|caution|notice):?\*\*/im
 const promises = /\b(?:is|are|it’s|it's) safe\b/i
 
+const lacking: Readonly<Record<string, string>> & { title: string; body: string } = {
+  title: 'Give it a title.',
+  sources: 'Name at least one source: where its facts come from.',
+  reviewed: 'Say when it was reviewed.',
+  body: 'Write the text.',
+}
+
 const unknownIn = (named: readonly string[], known: ReadonlySet<string>) =>
   named.filter((one) => !known.has(one)).join(', ')
 
 function bodyFault(body: string, known: Known): string | undefined {
-  if (body.trim() === '') return 'Write the text.'
+  if (body.trim() === '') return lacking.body
   const dead = [...body.matchAll(link)].filter(
     ([, kind, id]) => !known[kind as keyof Known].has(id!.replace(/\/$/, '')),
   )
@@ -34,24 +41,14 @@ function bodyFault(body: string, known: Known): string | undefined {
  * What keeps an article from being put in force: field → sentence; empty when nothing does. The page says it while one
  * writes, the server refuses with it.
  */
-export function articleFaults(article: unknown, known: Known): Record<string, string> {
-  const read = Article.safeParse(article)
+export function articleFaults(article: Article, known: Known): Record<string, string> {
   const faults: Record<string, string> = {}
-  const words: Record<string, string> = {
-    title: 'Give it a title.',
-    sources: 'Name at least one source: where its facts come from.',
-    reviewed: 'Say when it was reviewed.',
-    body: 'Write the text.',
+  for (const { path } of Article.safeParse(article).error?.issues ?? []) {
+    const field = String(path[0] ?? 'body')
+    faults[field] ??= lacking[field] ?? 'Mend this.'
   }
-  if (!read.success) {
-    for (const { path } of read.error.issues) {
-      const field = String(path[0] ?? 'body')
-      faults[field] ??= words[field] ?? 'Mend this.'
-    }
-    return faults
-  }
-  const { title, causes, tests, body, dueForReview, reviewed } = read.data
-  if (title.trim() === '') faults['title'] = words['title']!
+  const { title, causes, tests, body, dueForReview, reviewed } = article
+  if (title.trim() === '') faults['title'] = lacking.title
   const unknownCauses = unknownIn(causes, known.causes)
   if (unknownCauses !== '') faults['causes'] = `No such cause: ${unknownCauses}.`
   const unknownTests = unknownIn(tests, known.tests)

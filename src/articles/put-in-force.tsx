@@ -55,7 +55,7 @@ export function PutInForce({ slug, desk, faults }: Props) {
       const draft = await desk.flush()
       if (draft === undefined) return
       const done = await putArticleInForce(slug, draft.version, reason)
-      desk.adopt(done.draft, done.draft.text ?? undefined)
+      desk.adopt(done.draft)
       setReason('')
       say({ text: `Put in force with edition ${done.edition}.` })
     })

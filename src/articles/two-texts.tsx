@@ -18,7 +18,7 @@ export function TwoTexts({ desk }: { desk: DraftDesk }) {
       </p>
       {other !== null && (
         <>
-          <h3 className="mt-4">From theirs to yours</h3>
+          <h2 className="mt-4 text-body">From theirs to yours</h2>
           <Difference
             former={wholeOf(other)}
             now={wholeOf(textOf(form))}
@@ -52,7 +52,7 @@ export function Overtaken({ desk }: { desk: DraftDesk }) {
     <section className="plate-dashed my-5" aria-label="In force meanwhile">
       <p className="font-bold">Another text of this article came into force since this draft was begun.</p>
       <p className="mt-2 text-small">Look at what differs and carry over what must stay, then say so.</p>
-      <h3 className="mt-4">From what is in force to this draft</h3>
+      <h2 className="mt-4 text-body">From what is in force to this draft</h2>
       <Difference former={wholeOf(text)} now={wholeOf(mine)} label="Difference from what is in force" />
       <div className="mt-4">
         <Button onPress={() => void desk.replaceWith(mine, { onto: hash })}>

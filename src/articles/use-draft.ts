@@ -133,6 +133,7 @@ export function useDraft(slug: string, opened: Draft & { text: DraftText }): Dra
     const other = now.current.theirs
     if (other === undefined) return
     const mine = textOf(now.current.form)
+    now.current.dirty = false
     setSaving({ state: 'sending' })
     try {
       // Mine is saved either way, so that whichever is not gone on with is among the revisions.
@@ -141,8 +142,12 @@ export function useDraft(slug: string, opened: Draft & { text: DraftText }): Dra
       if (which === 'theirs') draft = await saveDraft(slug, { version: draft.version, apart: true, ...text })
       now.current.theirs = undefined
       setTheirs(undefined)
-      adopt(draft, text)
+      if (which === 'theirs') return adopt(draft, text)
+      adopt(draft)
+      // What was typed since goes on from there.
+      setSaving({ state: now.current.dirty ? 'typed' : 'saved' })
     } catch (problem) {
+      now.current.dirty = true
       if (!meet(problem)) setSaving({ state: 'refused', ...refusalOf(problem) })
     }
   }

@@ -249,6 +249,7 @@ describe('put in force', () => {
     expect(Object.keys((await refusedFor(head({ title: ' ', sources: [], reviewed: '' })))!).sort()).toEqual([
       'reviewed',
       'sources',
+      'title',
     ])
     expect(await refusedFor(head({ title: '' }))).toEqual({ title: 'Give it a title.' })
     expect(await refusedFor(head({ causes: ['no-such-cause'] }))).toEqual({
