@@ -50,6 +50,8 @@ export const routes: RouteObject[] = [
           },
           { path: 'diagnosis', lazy: diagnosis },
           { path: 'articles', lazy: articles },
+          { path: 'articles/new', lazy: () => import('../articles/new.page.tsx') },
+          { path: 'articles/:slug/edit', lazy: () => import('../articles/edit.page.tsx') },
           { path: 'articles/:slug', lazy: article },
           { path: 'causes/:id', lazy: cause },
           { path: 'tests/:id', lazy: test },
