@@ -1,3 +1,4 @@
+import { tooMuchMarkdown } from './markdown-limits.ts'
 import { Article } from './schema.ts'
 
 /** What an article may name and link to. */
@@ -6,9 +7,6 @@ export type Known = {
   tests: ReadonlySet<string>
   articles: ReadonlySet<string>
 }
-
-/** Bytes of a body in UTF-8, at most. */
-export const mostBodyBytes = 200_000
 
 const link = /\]\(\s*<?\/(causes|tests|articles)\/([^)\s>?#]*)/g
 const warns = /^> \*\*(danger|warning|caution|notice):?\*\*/im
@@ -26,6 +24,8 @@ const unknownIn = (named: readonly string[], known: ReadonlySet<string>) =>
 
 function bodyFault(body: string, known: Known): string | undefined {
   if (body.trim() === '') return lacking.body
+  const tooMuch = tooMuchMarkdown(body)
+  if (tooMuch !== undefined) return tooMuch
   const dead = [...body.matchAll(link)].filter(
     ([, kind, id]) => !known[kind as keyof Known].has(id!.replace(/\/$/, '')),
   )

@@ -1,9 +1,17 @@
 import * as z from 'zod/mini'
-import { mostBodyBytes } from '../../rules/edition/article-faults.ts'
+import { bytesOf, mostBodyBytes, tooLong } from '../../rules/edition/markdown-limits.ts'
 import { Audience } from '../../rules/edition/audience.ts'
 
 const Moment = z.iso.datetime()
-const NoneOrDay = z.union([z.literal(''), z.iso.date('Write a date: year-month-day.')])
+// zod's own would be the only use of it, and weigh on every page.
+const isDay = (day: string) =>
+  /^\d{4}-\d{2}-\d{2}$/.test(day) &&
+  !Number.isNaN(Date.parse(day)) &&
+  new Date(day).toISOString().startsWith(day)
+const Day = z.string().check(z.refine(isDay, 'Write a date: year-month-day.'))
+const NoneOrDay = z
+  .string()
+  .check(z.refine((day) => day === '' || isDay(day), 'Write a date: year-month-day.'))
 const Id = z.string().check(z.maxLength(80), z.regex(/^[a-z0-9]+([.-][a-z0-9]+)*$/))
 const Names = z.array(Id).check(z.maxLength(60, 'That is more than 60.'))
 const lines = (most: number) =>
@@ -32,10 +40,7 @@ export const DraftHead = z.object({
 export const DraftText = z.object({
   head: DraftHead,
   body: z.string().check(
-    z.refine(
-      (body) => new TextEncoder().encode(body).length <= mostBodyBytes,
-      'The text is longer than 200 kB. Make two articles of it.',
-    ),
+    z.refine((body) => bytesOf(body) <= mostBodyBytes, tooLong),
     // PostgreSQL keeps every character but this one.
     z.refine((body) => !body.includes('\u0000'), 'The text holds a character that can’t be kept.'),
   ),
@@ -80,7 +85,7 @@ export const Draft = z.object({
   /** Null where nobody has changed it here. */
   edited: z.nullable(z.object({ by: z.string(), at: Moment })),
   inForce: z.nullable(
-    z.object({ hash: z.string(), text: DraftText, withdrawn: z.nullable(z.iso.date()), edition: z.int() }),
+    z.object({ hash: z.string(), text: DraftText, withdrawn: z.nullable(Day), edition: z.int() }),
   ),
   /** What is in force was changed since this draft was begun from it. */
   overtaken: z.boolean(),
@@ -95,8 +100,8 @@ export const DraftList = z.object({
       audience: Audience,
       inForce: z.boolean(),
       pending: z.boolean(),
-      withdrawn: z.nullable(z.iso.date()),
-      dueForReview: z.nullable(z.iso.date()),
+      withdrawn: z.nullable(Day),
+      dueForReview: z.nullable(Day),
       edited: z.nullable(z.object({ by: z.string(), at: Moment })),
     }),
   ),

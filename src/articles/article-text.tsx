@@ -9,7 +9,9 @@ const audiences = { everyone: 'For everyone', qualified: 'For qualified people' 
 
 // Writers close with their sources and with who decides; where one is missing, the page adds it.
 const namesSources = (body: string) => /^#{2,3}\s+.*(?:sources|references)/im.test(body)
-const saysWhoDecides = (body: string) => /authority having jurisdiction[^.]*decides?\.\*?\s*$/i.test(body)
+// It stands at the very end; looking there alone keeps a long text from holding up the page.
+const saysWhoDecides = (body: string) =>
+  /authority having jurisdiction[^.]*decides?\.\*?\s*$/i.test(body.slice(-1000))
 
 /** For whom an article is written, and when it was looked at last. */
 export function ArticleKind({ article }: { article: Pick<Article, 'audience' | 'reviewed'> }) {

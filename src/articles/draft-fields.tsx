@@ -1,5 +1,6 @@
-import { useRef } from 'react'
+import { useCallback, useRef } from 'react'
 import { Field, TextField } from '../ui/field.tsx'
+import { BodyField } from './body-field.tsx'
 import { ChooseSome } from './choose-some.tsx'
 import type { Knowledge } from './knowledge.ts'
 import { LinkPicker } from './link-picker.tsx'
@@ -16,19 +17,11 @@ type DraftFieldsProps = {
 /** Everything an article consists of, to be typed. */
 export function DraftFields({ desk, knowledge, faults }: DraftFieldsProps) {
   const { form, change } = desk
-  const body = useRef<HTMLTextAreaElement>(null)
-  const cursor = useRef<number>(undefined)
-  const putIn = (link: string) => {
-    const at = body.current?.selectionStart ?? form.body.length
-    const before = form.body.slice(0, at)
-    const space = before === '' || /\s$/.test(before) ? '' : ' '
-    change({ body: `${before}${space}${link}${form.body.slice(at)}` })
-    cursor.current = at + space.length + link.length
-    requestAnimationFrame(() => {
-      body.current?.focus()
-      body.current?.setSelectionRange(cursor.current ?? 0, cursor.current ?? 0)
-    })
-  }
+  const putIn = useRef<(words: string) => void>(undefined)
+  const onReady = useCallback((put: (words: string) => void) => {
+    putIn.current = put
+  }, [])
+  const onText = useCallback((body: string) => change({ body }), [change])
   const { causes, tests } = knowledge.edition.file
   return (
     <div className="draft-fields">
@@ -60,16 +53,8 @@ export function DraftFields({ desk, knowledge, faults }: DraftFieldsProps) {
           </select>
         )}
       </Field>
-      <TextArea
-        label="Text, in Markdown"
-        help="A quote that begins with > **Danger:**, **Warning:**, **Caution:** or **Notice:** becomes a signal panel."
-        rows={22}
-        value={form.body}
-        onText={(text) => change({ body: text })}
-        error={faults['body']}
-        ref={body}
-      />
-      <LinkPicker knowledge={knowledge} onPick={putIn} />
+      <BodyField value={form.body} error={faults['body']} onText={onText} onReady={onReady} />
+      <LinkPicker knowledge={knowledge} onPick={(link) => putIn.current?.(link)} />
       <ChooseSome
         label="Causes it is about"
         one="cause"

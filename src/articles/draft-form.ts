@@ -26,6 +26,9 @@ export const textOf = ({ body, words, sources, ...head }: DraftForm): DraftText 
   body,
 })
 
+/** Whether two texts are the same to the letter, whatever way they came. */
+export const sameText = (one: DraftText, other: DraftText): boolean => wholeOf(one) === wholeOf(other)
+
 /** The article that it would be in force. */
 export function articleOf(slug: string, text: DraftText): Article {
   const { dueForReview, ...head } = text.head

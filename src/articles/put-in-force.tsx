@@ -8,10 +8,10 @@ import { dayInWords } from './day.ts'
 import { letGo, putArticleInForce, withdraw } from './drafts.api.ts'
 import type { Knowledge } from './knowledge.ts'
 import { refusalOf } from './refusal.ts'
+import type { Refusal } from './refusal.ts'
 import type { DraftDesk } from './use-draft.ts'
 
 type Props = { slug: string; desk: DraftDesk; knowledge: Knowledge; faults: Readonly<Record<string, string>> }
-type Refusal = ReturnType<typeof refusalOf>
 
 /** One thing at a time is sent; what another one did meanwhile goes to the desk. */
 function useSent(desk: DraftDesk) {
@@ -52,19 +52,23 @@ export function PutInForce({ slug, desk, faults }: Props) {
           : undefined
   const put = () =>
     run(async () => {
-      const draft = await desk.flush()
-      if (draft === undefined) return
-      const done = await putArticleInForce(slug, draft.version, reason)
-      desk.adopt(done.draft)
+      let edition = 0
+      const went = await desk.afterSaving(async ({ version }) => {
+        const done = await putArticleInForce(slug, version, reason)
+        edition = done.edition
+        return done
+      })
+      if (!went) return
       setReason('')
-      say({ text: `Put in force with edition ${done.edition}.` })
+      say({ text: `Put in force with edition ${edition}.` })
     })
   const letItGo = () =>
     run(async () => {
-      const draft = await desk.flush()
-      if (draft === undefined) return
-      const held = await letGo(slug, draft.version)
-      desk.adopt(held, held.text ?? draft.text ?? undefined)
+      const went = await desk.afterSaving(async ({ version }) => {
+        const draft = await letGo(slug, version)
+        return { draft, text: draft.text ?? undefined }
+      })
+      if (!went) return
       say({ text: 'The draft is among the revisions; what is in force holds on.' })
     })
   return (
@@ -119,12 +123,16 @@ export function Withdrawal({ slug, desk, knowledge }: Props) {
   const since = inForce.withdrawn
   const send = (withdrawn: boolean) =>
     run(async () => {
-      if ((await desk.flush()) === undefined) return
       const replacedBy = withdrawn && instead !== '' ? { replacedBy: instead } : {}
-      const done = await withdraw(slug, { withdrawn, reason, ...replacedBy })
-      desk.adopt(done.draft)
+      let edition = 0
+      const went = await desk.afterSaving(async () => {
+        const done = await withdraw(slug, { withdrawn, reason, ...replacedBy })
+        edition = done.edition
+        return done
+      })
+      if (!went) return
       setReason('')
-      say({ text: `${withdrawn ? 'Withdrawn' : 'In force again'} with edition ${done.edition}.` })
+      say({ text: `${withdrawn ? 'Withdrawn' : 'In force again'} with edition ${edition}.` })
     })
   return (
     <Rail title={since === null ? 'Withdraw' : `Withdrawn on ${dayInWords(since)}`} className="mt-7">

@@ -6,12 +6,11 @@ import { Empty } from '../ui/empty.tsx'
 import { Failed } from '../ui/failed.tsx'
 import { Rail } from '../ui/rail.tsx'
 import { Waiting } from '../ui/waiting.tsx'
+import { momentInWords } from './day.ts'
 import { Difference } from './difference.tsx'
 import { textOf, wholeOf } from './draft-form.ts'
 import { revisionQuery, revisionsQuery } from './drafts.api.ts'
 import type { DraftDesk } from './use-draft.ts'
-
-const moment = new Intl.DateTimeFormat('en-US', { dateStyle: 'medium', timeStyle: 'short' })
 
 function Opened({ slug, number, desk }: { slug: string; number: number; desk: DraftDesk }) {
   const revision = useQuery(revisionQuery(slug, number))
@@ -41,8 +40,7 @@ function Row({ slug, row, desk }: { slug: string; row: RevisionList['revisions']
     <li>
       <div className="flex flex-wrap items-center justify-between gap-3">
         <p className="text-small">
-          <b>Revision {row.number}</b>, {row.author ?? 'came with the program'},{' '}
-          {moment.format(new Date(row.at))}
+          <b>Revision {row.number}</b>, {row.author ?? 'came with the program'}, {momentInWords(row.at)}
           {row.edition !== null && <>, in force with edition {row.edition}</>}
           {row.reason !== '' && <span className="block">{row.reason}</span>}
         </p>

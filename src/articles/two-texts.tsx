@@ -1,3 +1,4 @@
+import { useMe } from '../people/people.api.ts'
 import { Button } from '../ui/button.tsx'
 import { Difference } from './difference.tsx'
 import { textOf, wholeOf } from './draft-form.ts'
@@ -6,12 +7,17 @@ import type { DraftDesk } from './use-draft.ts'
 /** Somebody else saved meanwhile: both texts, and the writer chooses. */
 export function TwoTexts({ desk }: { desk: DraftDesk }) {
   const { theirs, form } = desk
+  const { person } = useMe()
   if (theirs === undefined) return null
-  const who = theirs.edited?.by ?? 'Somebody'
   const other = theirs.text
+  const by = theirs.edited?.by ?? 'Somebody'
+  const said =
+    by === person?.name
+      ? 'Another text of yours came in while you were writing.'
+      : `${by} changed this article while you were writing.`
   return (
     <section className="plate-dashed my-5" role="alert" aria-label="Two texts">
-      <p className="font-bold">{who} changed this article while you were writing.</p>
+      <p className="font-bold">{said}</p>
       <p className="mt-2 text-small">
         Nothing is lost: yours is in the fields below, theirs stands here. You can carry words over before you
         choose; the text you don’t go on with stays among the revisions.

@@ -1,8 +1,9 @@
-import type { Browser, Page } from 'playwright-core'
+import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { axeFindings } from './axe.ts'
 import { desk, openBrowser, openSite, phone, settled, visit } from './browser.ts'
 import type { Site } from './browser.ts'
+import { add, button, heading, keptText, openEditor, preview, saved, text, typeIn } from './editor-steps.ts'
 import { signInAs } from './sign-in-as.ts'
 
 let site: Site
@@ -14,22 +15,6 @@ afterAll(async () => {
   await browser.close()
   await site.close()
 })
-
-const heading = (page: Page, name: string | RegExp) => page.getByRole('heading', { level: 1, name }).waitFor()
-const text = (page: Page) => page.getByLabel('Text, in Markdown')
-const button = (page: Page, name: string | RegExp) => page.getByRole('button', { name })
-const preview = (page: Page) => page.getByRole('region', { name: 'As readers will see it' })
-const saved = (page: Page) => page.getByText('Draft saved').waitFor()
-
-async function openEditor(page: Page, slug: string) {
-  await page.goto(`/articles/${slug}/edit`)
-  await heading(page, 'Change an article')
-  await text(page).waitFor()
-}
-async function add(page: Page, line: string) {
-  await text(page).fill(`${await text(page).inputValue()}\n\n${line}`)
-  await saved(page)
-}
 
 describe('a senior', () => {
   test('changes an article, sees it as readers will, puts it in force; an open page is offered it', async () => {
@@ -54,11 +39,12 @@ describe('a senior', () => {
       .getByRole('button', { name: /^Put in a link to test/ })
       .first()
       .click()
-    expect(await text(page).inputValue()).toMatch(/\]\(\/tests\/[a-z-]+\)/)
+    await expect
+      .poll(() => keptText(page, 'open-ground'), { timeout: 10_000 })
+      .toMatch(/A sentence for this test\. \[[^\]]+\]\(\/tests\/[a-z-]+\)$/)
     await saved(page)
     await page.reload()
-    await text(page).waitFor()
-    expect(await text(page).inputValue()).toContain('A sentence for this test.')
+    await preview(page).getByText('A sentence for this test.').waitFor()
 
     await button(page, 'Put in force').click()
     await page.getByText('Say why.').first().waitFor()
@@ -77,8 +63,9 @@ describe('a senior', () => {
     await first.getByRole('button', { name: /Show the difference/ }).click()
     await first.locator('ins', { hasText: 'A sentence for this test' }).waitFor()
     await button(page, 'Bring revision 1 back').click()
-    await expect.poll(() => text(page).inputValue()).not.toContain('A sentence for this test.')
+    await preview(page).getByText('A sentence for this test.').waitFor({ state: 'detached' })
     await saved(page)
+    expect(await keptText(page, 'open-ground')).not.toContain('A sentence for this test.')
     // The reason that was missing is an answer, which the browser writes to the console.
     expect(complaints.filter((words) => !/status of 400/.test(words))).toEqual([])
     expect(strays).toEqual([])
@@ -94,16 +81,17 @@ describe('a senior', () => {
     await openEditor(one.page, 'long-run')
     await openEditor(two.page, 'long-run')
     await add(one.page, 'Written by the senior.')
-    await text(two.page).fill(`${await text(two.page).inputValue()}\n\nWritten by the admin.`)
+    await typeIn(two.page, 'Written by the admin.')
     const both = two.page.getByRole('alert', { name: 'Two texts' })
     await both.getByText('Demo senior tech changed this article while you were writing.').waitFor()
     await both.locator('del', { hasText: 'senior' }).waitFor()
     await both.locator('ins', { hasText: 'admin' }).waitFor()
-    expect(await text(two.page).inputValue()).toContain('Written by the admin.')
+    await preview(two.page).getByText('Written by the admin.').waitFor()
     expect(await axeFindings(two.page)).toEqual([])
     await both.getByRole('button', { name: 'Go on with theirs' }).click()
     await saved(two.page)
-    expect(await text(two.page).inputValue()).toMatch(/Written by the senior\.$/)
+    await preview(two.page).getByText('Written by the senior.').waitFor()
+    expect(await keptText(two.page, 'long-run')).toMatch(/Written by the senior\.$/)
     const revisions = two.page.getByRole('region', { name: 'Revisions' })
     await revisions.getByRole('button', { name: 'Show the difference from revision 2' }).click()
     await revisions.locator('del', { hasText: 'admin' }).waitFor()
@@ -116,13 +104,13 @@ describe('a senior', () => {
     await signInAs(page, 'senior')
     await openEditor(page, 'backfeed')
     await page.route('**/api/**', (route) => route.abort())
-    await text(page).fill(`${await text(page).inputValue()}\n\nTyped in a crawl space.`)
+    await typeIn(page, 'Typed in a crawl space.')
     await page.getByText('No network: only on this page.').waitFor()
     await page.unroute('**/api/**')
     await saved(page)
     await page.reload()
-    await text(page).waitFor()
-    expect(await text(page).inputValue()).toContain('Typed in a crawl space.')
+    await preview(page).getByText('Typed in a crawl space.').waitFor()
+    expect(await keptText(page, 'backfeed')).toMatch(/Typed in a crawl space\.$/)
     await end()
   })
 
@@ -142,7 +130,7 @@ describe('a senior', () => {
     await page.getByText('Name at least one source: where its facts come from.').waitFor()
     await page.getByText('Mend what is marked first.').waitFor()
     await text(page).fill('All is safe? It is safe to touch.\n\n> **Caution:** Hot.')
-    await page.getByText('Say what was measured, not “is safe”.').waitFor()
+    await page.getByText('Say what was measured, not “is safe”.', { exact: true }).waitFor()
     await saved(page)
     await page.goto('/articles')
     await page.getByText('draft by Demo senior tech, not in force yet').waitFor()

@@ -97,7 +97,7 @@ function Begin() {
 }
 
 /** Where a new article begins. */
-export function Component() {
+export function NewArticle() {
   return (
     <Page title="New article" width="text">
       <WritersOnly title="New article">
