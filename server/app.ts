@@ -3,8 +3,11 @@ import express from 'express'
 import type { Express } from 'express'
 import { sql } from 'kysely'
 import { articleRoutes } from './articles/articles.routes.ts'
+import { draftRoutes } from './articles/drafts.routes.ts'
+import { feedbackRoutes } from './articles/feedback.routes.ts'
 import type { Config } from './config.ts'
 import type { Db } from './database.ts'
+import { changeArticles } from './editions/change-articles.ts'
 import { editionEvents } from './editions/edition-events.ts'
 import type { EditionFeed } from './editions/edition-feed.ts'
 import { editionRoutes } from './editions/editions.routes.ts'
@@ -16,7 +19,7 @@ import { noSuchRoute, problems } from './problem.ts'
 import { requestLog } from './request-log.ts'
 import { onlyJson, sameOrigin } from './same-origin.ts'
 import { security } from './security.ts'
-import { sessions } from './session.ts'
+import { allow, sessions } from './session.ts'
 import { site } from './site.ts'
 import { workerOff } from './worker-off.ts'
 
@@ -53,11 +56,16 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     await sql`select 1`.execute(db)
     res.set('Cache-Control', 'no-store').json({ status: 'up' })
   })
-  app.use('/api', sameOrigin, onlyJson, express.json({ limit: '64kb' }), session.handlers)
+  app.use('/api', sameOrigin, onlyJson, session.handlers)
+  // An article may be long, and only who may write one may send it.
+  app.use('/api/article-drafts', allow('senior'), express.json({ limit: '600kb' }))
+  app.use('/api', express.json({ limit: '64kb' }))
   app.use(
     '/api',
     editionRoutes(db, events.route),
     articleRoutes(db),
+    draftRoutes(db, changeArticles),
+    feedbackRoutes(db, throttle.feedback),
     accountRoutes(db, throttle),
     peopleRoutes(db),
     noSuchRoute,

@@ -36,6 +36,36 @@ export type Database = {
     used_at: Date | null
   }
   sign_in_try: { key: string; points: number; expire: number | null }
+  article_draft: {
+    slug: string
+    version: number
+    pending: boolean
+    head: ColumnType<unknown, string, string>
+    body: string
+    base: string | null
+    edited_by: string
+    edited_at: ColumnType<Date, never, Date>
+    sitting_since: ColumnType<Date, never, Date>
+  }
+  article_revision: {
+    slug: string
+    number: number
+    head: ColumnType<unknown, string, never>
+    body: string
+    author: string | null
+    at: ColumnType<Date, Date | undefined, never>
+    reason: string
+    edition_number: number | null
+  }
+  article_feedback: {
+    id: Generated<number>
+    slug: string
+    edition_number: number
+    helped: boolean
+    why: string
+    at: Stamp
+    person_id: string | null
+  }
 }
 
 export type Db = Kysely<Database>

@@ -26,17 +26,21 @@ export class Problem extends Error {
   readonly errors: Readonly<Record<string, string>> | undefined
   /** Seconds after which it is worth trying again. */
   readonly retryAfter: number | undefined
+  /** What the page needs to go on, written beside the title. */
+  readonly also: Readonly<Record<string, unknown>> | undefined
   constructor(
     type: ProblemType,
     title: string = words[type][1],
     errors?: Record<string, string>,
     retryAfter: number | undefined = type === 'unavailable' ? 2 : undefined,
+    also?: Record<string, unknown>,
   ) {
     super(title)
     this.type = type
     this.status = words[type][0]
     this.errors = errors
     this.retryAfter = retryAfter
+    this.also = also
   }
 }
 
@@ -63,12 +67,12 @@ export const problems =
   (log: Log): ErrorRequestHandler =>
   (error: unknown, _req, res, next) => {
     if (res.headersSent) return next(error)
-    const { type, status, message: title, errors, retryAfter } = asProblem(error)
+    const { type, status, message: title, errors, retryAfter, also } = asProblem(error)
     if (type === 'internal') log.error({ err: error }, 'a request failed')
     if (retryAfter !== undefined) res.set('Retry-After', String(retryAfter))
     res
       .status(status)
       .set('Cache-Control', 'no-store')
       .type('application/problem+json')
-      .send(JSON.stringify({ type: `/problems/${type}`, title, status, ...(errors && { errors }) }))
+      .send(JSON.stringify({ ...also, type: `/problems/${type}`, title, status, ...(errors && { errors }) }))
   }

@@ -7,11 +7,14 @@ export class ApiProblem extends Error {
   readonly title: string
   /** Field path → sentence. */
   readonly errors: Readonly<Record<string, string>>
-  constructor(status: number, title: string, errors: Readonly<Record<string, string>> = {}) {
+  /** What else came with it; read it with its own contract. */
+  readonly also: unknown
+  constructor(status: number, title: string, errors: Readonly<Record<string, string>> = {}, also?: unknown) {
     super(title)
     this.status = status
     this.title = title
     this.errors = errors
+    this.also = also
   }
 }
 
@@ -45,9 +48,10 @@ async function ask(
     throw new NoNetwork(problem)
   }
   if (answer.ok) return answer
-  const said = Problem.safeParse(await answer.json().catch(() => undefined))
+  const also: unknown = await answer.json().catch(() => undefined)
+  const said = Problem.safeParse(also)
   throw said.success
-    ? new ApiProblem(answer.status, said.data.title, said.data.errors)
+    ? new ApiProblem(answer.status, said.data.title, said.data.errors, also)
     : new ApiProblem(answer.status, `The server answered with ${answer.status}.`)
 }
 
@@ -70,7 +74,7 @@ export async function get<Contract extends z.ZodMiniType>(
  * @throws ApiProblem when it refuses, with a sentence for each field at fault; NoNetwork when nobody answers
  */
 export async function send<Contract extends z.ZodMiniType>(
-  method: 'POST' | 'PATCH',
+  method: 'POST' | 'PUT' | 'PATCH',
   path: string,
   body: unknown,
   contract: Contract,

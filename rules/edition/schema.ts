@@ -194,6 +194,7 @@ export const ProceduresFile = z.strictObject({
   causes: z.array(CauseProcedure),
 })
 
+const day = z.string().check(z.regex(/^\d{4}-\d{2}-\d{2}$/, 'must be a date: year-month-day'))
 export const ArticleHead = z.strictObject({
   slug: id,
   title: text,
@@ -204,7 +205,13 @@ export const ArticleHead = z.strictObject({
   words: z.array(text),
   sources: z.array(text).check(z.minLength(1)),
   /** Date, year-month-day. */
-  reviewed: z.string().check(z.regex(/^\d{4}-\d{2}-\d{2}$/)),
+  reviewed: day,
+  /** When somebody is to look at it again. */
+  dueForReview: z.optional(day),
+  /** Since when it holds no more: still readable by its link, found and suggested nowhere. */
+  withdrawn: z.optional(day),
+  /** The article to read instead. */
+  replacedBy: z.optional(id),
 })
 export const Article = z.extend(ArticleHead, { body: text })
 export const ArticlesFile = z.strictObject({

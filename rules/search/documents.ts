@@ -29,15 +29,18 @@ const join = (parts: readonly (string | undefined)[]) =>
   parts.filter((part) => part !== undefined && part !== '').join(' ')
 
 /**
- * Everything that can be found, in a fixed order. A cause is also found by the symptoms of the article of its name.
+ * Everything that can be found, in a fixed order: withdrawn articles can't. A cause is also found by the symptoms of
+ * the article of its name.
+ * @param shelf those this device may name
  * @param procedures files this device may read; none is fine
  */
 export function documentsOf(
-  articles: readonly SearchableArticle[],
+  shelf: readonly SearchableArticle[],
   causes: readonly Cause[],
   tests: readonly Test[],
   procedures: readonly ProceduresFile[] = [],
 ): SearchDocument[] {
+  const articles = shelf.filter((article) => article.withdrawn === undefined)
   const bySlug = new Map(articles.map((article) => [article.slug, article]))
   const ofArticles = articles.map((article): SearchDocument => ({
     key: `article:${article.slug}`,

@@ -6,6 +6,9 @@ import { openFile } from './editions.queries.ts'
 /** The counts as whoever may read only what is for everyone gets them, and as the qualified do. */
 type Counts = Readonly<Record<'everyone' | 'qualified', EditionInForce['counts']>>
 
+/** Withdrawn articles are only still there by their links. */
+const readable = ({ articles }: ArticlesFile) => articles.filter((one) => one.withdrawn === undefined).length
+
 async function count(db: Db, number: number): Promise<Counts> {
   const [diagnosis, forEveryone, forQualified] = await Promise.all([
     openFile(db, number, 'diagnosis').then((file) => DiagnosisFile.parse(file)),
@@ -16,9 +19,9 @@ async function count(db: Db, number: number): Promise<Counts> {
     causes: diagnosis.causes.length,
     tests: diagnosis.tests.length,
     rules: diagnosis.groups.reduce((sum, group) => sum + group.rules.length, 0),
-    articles: forEveryone.articles.length,
+    articles: readable(forEveryone),
   }
-  return { everyone, qualified: { ...everyone, articles: everyone.articles + forQualified.articles.length } }
+  return { everyone, qualified: { ...everyone, articles: everyone.articles + readable(forQualified) } }
 }
 
 /** Counts what an edition holds, once: it never changes. */

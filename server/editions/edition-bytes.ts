@@ -9,7 +9,8 @@ export type EditionBytes = { hash: string; files: readonly EditionFile[] }
 
 const sha256 = (bytes: Buffer | string) => createHash('sha256').update(bytes).digest('hex')
 
-const fileOf = (name: FileName, audience: Audience, content: unknown): EditionFile => {
+/** One file of an edition from what it says. */
+export const fileOf = (name: FileName, audience: Audience, content: unknown): EditionFile => {
   const bytes = Buffer.from(JSON.stringify(content), 'utf8')
   return { name, audience, hash: sha256(bytes), bytes }
 }

@@ -1,7 +1,9 @@
 import { sql } from 'kysely'
+import { ArticlesFile } from '../../rules/edition/schema.ts'
+import type { Article, DiagnosisFile } from '../../rules/edition/schema.ts'
 import type { Db, Tx } from '../database.ts'
-import type { EditionBytes } from './edition-bytes.ts'
-import type { FileName } from './editions.contract.ts'
+import type { EditionBytes, EditionFile } from './edition-bytes.ts'
+import { FileName } from './editions.contract.ts'
 
 /** The edition in force. Undefined when none ever was. */
 export function editionInForce(db: Db | Tx) {
@@ -62,7 +64,7 @@ export function findFile(db: Db, hash: string) {
 }
 
 /** A file of an edition as JSON. Throws where the edition lacks it: every edition has all its files. */
-export async function openFile(db: Db, editionNumber: number, name: FileName): Promise<unknown> {
+export async function openFile(db: Db | Tx, editionNumber: number, name: FileName): Promise<unknown> {
   const { bytes } = await db
     .selectFrom('edition_file')
     .select('bytes')
@@ -70,6 +72,16 @@ export async function openFile(db: Db, editionNumber: number, name: FileName): P
     .where('name', '=', name)
     .executeTakeFirstOrThrow()
   return JSON.parse(bytes.toString('utf8')) as unknown
+}
+
+/** Every file of an edition, with its bytes. */
+export async function readFiles(db: Db | Tx, editionNumber: number): Promise<EditionFile[]> {
+  const rows = await db
+    .selectFrom('edition_file')
+    .select(['name', 'audience', 'hash', 'bytes'])
+    .where('edition_number', '=', editionNumber)
+    .execute()
+  return rows.map((row) => ({ ...row, name: FileName.parse(row.name) }))
 }
 
 /** Waits until nobody else is putting an edition in force; holds until the transaction ends. */
@@ -105,4 +117,32 @@ export async function keepEdition(tx: Tx, edition: EditionBytes, note: string): 
 export async function recordInForce(tx: Tx, editionNumber: number, reason: string): Promise<void> {
   await tx.insertInto('edition_in_force').values({ edition_number: editionNumber, reason }).execute()
   await sql`select pg_notify('edition_in_force', ${String(editionNumber)})`.execute(tx)
+}
+
+/** What is in force while a transaction changes the articles. */
+export type ArticlesInForce = { number: number; articles: readonly Article[]; diagnosis: DiagnosisFile }
+/** Articles to put in force instead, what the edition is called, and why. */
+export type ArticlesChange = { articles: readonly Article[]; note: string; reason: string }
+/** Puts other articles in force within a transaction; handed to the articles by whoever builds the application. */
+export type ChangeArticles = (
+  tx: Tx,
+  change: (inForce: ArticlesInForce) => ArticlesChange,
+) => Promise<{ number: number }>
+
+/** The articles of both audiences. */
+export async function openShelf(db: Db | Tx, editionNumber: number): Promise<Article[]> {
+  const files = await Promise.all([
+    openFile(db, editionNumber, 'articles-everyone'),
+    openFile(db, editionNumber, 'articles-qualified'),
+  ])
+  return files.flatMap((file) => ArticlesFile.parse(file).articles)
+}
+
+/** Whether there is an edition of this number. */
+export async function editionExists(db: Db, number: number): Promise<boolean> {
+  if (number < 1 || number > 2_147_483_647) return false
+  return (
+    (await db.selectFrom('edition').select('number').where('number', '=', number).executeTakeFirst()) !==
+    undefined
+  )
 }

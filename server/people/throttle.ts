@@ -19,6 +19,7 @@ const limits = {
   device: { points: 10, duration: hour },
   password: { points: 10, duration: hour },
   signUp: { points: 20, duration: hour },
+  feedback: { points: 20, duration: hour },
 } as const
 type Kind = keyof typeof limits
 
@@ -94,5 +95,6 @@ export function openThrottle(db: Db, secret: string) {
       return async () => void (await limiters.password.reward(sign(personId), 1))
     },
     signUp: (address: string | undefined) => take([['signUp', networkOf(address)]]),
+    feedback: (address: string | undefined) => take([['feedback', networkOf(address)]]),
   }
 }

@@ -6,6 +6,8 @@ import { root } from './places.mjs'
 
 /** What pages are made of. The pictures of the installed application are the system's to keep. */
 const kept = /\.(js|css|html|svg|woff2)$/
+/** Kept by no device: who writes articles needs the server anyhow, and for all others it is dead weight. */
+const forWriters = /^assets\/markdown-editor-/
 const name = 'sw.js'
 
 async function listBuilt(folder) {
@@ -13,7 +15,9 @@ async function listBuilt(folder) {
   const paths = entries
     .filter((entry) => entry.isFile())
     .map((entry) => join(entry.parentPath, entry.name).slice(folder.length + 1))
-  return paths.filter((path) => kept.test(path) && !path.startsWith('.') && path !== name).sort()
+  return paths
+    .filter((path) => kept.test(path) && !forWriters.test(path) && !path.startsWith('.') && path !== name)
+    .sort()
 }
 
 async function asEntry(folder, path) {

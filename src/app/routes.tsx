@@ -15,6 +15,7 @@ export const bringTriage = () => Promise.all([check(), steps(), volts(), result(
 
 const diagnosis = () => import('../diagnosis/diagnosis.page.tsx')
 const articles = () => import('../articles/articles.page.tsx')
+const edit = () => import('../articles/edit.page.tsx')
 const article = () => import('../articles/article.page.tsx')
 const cause = () => import('../articles/cause.page.tsx')
 const test = () => import('../articles/test.page.tsx')
@@ -50,6 +51,8 @@ export const routes: RouteObject[] = [
           },
           { path: 'diagnosis', lazy: diagnosis },
           { path: 'articles', lazy: articles },
+          { path: 'articles/new', lazy: async () => ({ Component: (await edit()).NewArticle }) },
+          { path: 'articles/:slug/edit', lazy: edit },
           { path: 'articles/:slug', lazy: article },
           { path: 'causes/:id', lazy: cause },
           { path: 'tests/:id', lazy: test },

@@ -14,6 +14,7 @@ import { useKnowledge } from './knowledge.ts'
 import type { Knowledge } from './knowledge.ts'
 import { NotYet } from './knowledge-page.tsx'
 import { SearchColumn } from './search-column.tsx'
+import { ToLookAfter } from './to-look-after.tsx'
 import './articles.css'
 
 function Row({ to, glyph, children }: { to: string; glyph?: string; children: ReactNode }) {
@@ -119,6 +120,7 @@ export function Component() {
               <a href="#tests">Tests</a>
             </nav>
             <div className="shelves">
+              <ToLookAfter />
               <Articles knowledge={state.knowledge} />
               <Causes causes={state.knowledge.edition.file.causes} />
               <Tests knowledge={state.knowledge} />

@@ -10,6 +10,8 @@ export type Knowledge = {
   info: EditionInForce
   /** By slug; those for qualified people only where such a person is signed in. */
   articles: ReadonlyMap<string, Article>
+  /** By slug, those that hold no more: shown to whoever has their link, found and suggested nowhere. */
+  withdrawn: ReadonlyMap<string, Article>
   tests: ReadonlyMap<string, TestProcedure>
   causes: ReadonlyMap<string, CauseProcedure>
   procedures: readonly ProceduresFile[]
@@ -47,6 +49,7 @@ export function useKnowledge(): KnowledgeState {
       edition,
       info,
       articles: shelf.articles,
+      withdrawn: shelf.withdrawn,
       tests: procedures.tests,
       causes: procedures.causes,
       procedures: procedures.files,

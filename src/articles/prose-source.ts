@@ -1,5 +1,6 @@
 import DOMPurify from 'dompurify'
 import { Marked } from 'marked'
+import { tooMuchMarkdown } from '../../rules/edition/markdown-limits.ts'
 
 const inText = (text: string) =>
   text.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;').replaceAll('"', '&quot;')
@@ -40,11 +41,25 @@ function putDangerFirst(fragment: DocumentFragment): void {
   }
 }
 
+const mostShown = 20_000
+
+/** A text that can't be drawn in reasonable time, undrawn: what is the matter, and how it begins. */
+function asItIs(fault: string, markdown: string): DocumentFragment {
+  const fragment = document.createDocumentFragment()
+  const [said, begins] = [document.createElement('p'), document.createElement('pre')]
+  said.textContent = `This text can’t be drawn. ${fault}`
+  begins.textContent = markdown.slice(0, mostShown)
+  fragment.append(said, begins)
+  return fragment
+}
+
 /**
  * Markdown to a piece of a document that holds these tags, `href` and nothing else. What `prose.tsx` draws is made
  * anew from it, tag by tag: an article must get past the renderer, the purifier and that list to do harm.
  */
 export function proseOf(markdown: string): DocumentFragment {
+  const tooMuch = tooMuchMarkdown(markdown)
+  if (tooMuch !== undefined) return asItIs(tooMuch, markdown)
   const fragment = DOMPurify.sanitize(marked.parse(markdown, { async: false }), {
     ALLOWED_TAGS: tags.split(' '),
     ALLOWED_ATTR: ['href'],

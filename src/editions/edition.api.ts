@@ -97,7 +97,11 @@ export function useProcedures(qualified: boolean): Shown & {
  * Articles by slug.
  * @param qualified with those for qualified people
  */
-export function useArticles(qualified: boolean): Shown & { articles: ReadonlyMap<string, Article> } {
+export function useArticles(qualified: boolean): Shown & {
+  articles: ReadonlyMap<string, Article>
+  /** Those that hold no more: for whoever has their link, and for nothing else. */
+  withdrawn: ReadonlyMap<string, Article>
+} {
   const used = useUsed()
   const info = used.data
   const open = useQuery(articlesQuery(info, 'everyone'))
@@ -107,7 +111,12 @@ export function useArticles(qualified: boolean): Shown & { articles: ReadonlyMap
   const [first, second] = [open.data, wanted ? more.data : undefined]
   return useMemo(() => {
     const all = [first, second].flatMap((file) => file?.articles ?? [])
-    return { ...state, articles: new Map(all.map((article) => [article.slug, article])) }
+    const named = (some: Article[]) => new Map(some.map((article) => [article.slug, article]))
+    return {
+      ...state,
+      articles: named(all.filter((article) => article.withdrawn === undefined)),
+      withdrawn: named(all.filter((article) => article.withdrawn !== undefined)),
+    }
   }, [state.status, state.error, first, second])
 }
 

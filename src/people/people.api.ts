@@ -44,7 +44,9 @@ export function useMe(): SignedIn {
   const asked = useQuery(askedQuery)
   if (asked.data !== undefined) return { known: true, ...asked.data }
   const person = kept.data ?? undefined
-  const known = person !== undefined || (asked.isError && !kept.isPending)
+  // Once it couldn't be asked that stays so while it is asked again: a part of the page that asks anew when it is drawn
+  // would otherwise take away the very page that drew it.
+  const known = person !== undefined || (asked.isFetched && !kept.isPending)
   return { known, person, expired: false }
 }
 

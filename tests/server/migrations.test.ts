@@ -23,6 +23,9 @@ test('an empty database comes to the latest, once, even when several processes m
       where table_schema = 'public' and table_name not like 'kysely%' order by 1
     `.execute(db)
     expect(rows.map((row) => row.name)).toEqual([
+      'article_draft',
+      'article_feedback',
+      'article_revision',
       'edition',
       'edition_file',
       'edition_in_force',

@@ -56,6 +56,27 @@ const all = (status: number): Record<Who, number> => ({
 const forQualified = { visitor: 401, helper: 403, tech: 200, senior: 200, admin: 200 }
 const forAdmin = (status: number) => ({ visitor: 401, helper: 403, tech: 403, senior: 403, admin: status })
 
+const forSenior = (status: number) => ({
+  visitor: 401,
+  helper: 403,
+  tech: 403,
+  senior: status,
+  admin: status,
+})
+const unfinished = {
+  head: {
+    title: '',
+    audience: 'qualified',
+    causes: [],
+    tests: [],
+    words: [],
+    sources: [],
+    reviewed: '',
+    dueForReview: '',
+  },
+  body: '',
+}
+
 type Row = {
   route: string
   /** Which object is asked for, where it matters. */
@@ -91,6 +112,77 @@ const table: Row[] = [
     status: forQualified,
   },
   { route: 'get /articles', path: () => '/api/articles?q=neutral', status: all(200) },
+  {
+    route: 'post /articles/:slug/feedback',
+    of: 'for everyone',
+    path: () => '/api/articles/open-ground/feedback',
+    body: { edition: 1, helped: true },
+    status: all(201),
+  },
+  {
+    route: 'post /articles/:slug/feedback',
+    of: 'for qualified people',
+    path: () => '/api/articles/double-bond/feedback',
+    body: { edition: 1, helped: false, why: 'No figure.' },
+    status: { visitor: 404, helper: 404, tech: 201, senior: 201, admin: 201 },
+  },
+  { route: 'get /article-drafts', path: () => '/api/article-drafts', status: forSenior(200) },
+  {
+    route: 'get /article-drafts/:slug',
+    path: () => '/api/article-drafts/double-bond',
+    status: forSenior(200),
+  },
+  {
+    route: 'put /article-drafts/:slug',
+    of: 'a new one',
+    path: (asker) => `/api/article-drafts/by-${asker}`,
+    body: { version: '0-new', ...unfinished },
+    status: forSenior(200),
+  },
+  {
+    route: 'put /article-drafts/:slug',
+    of: 'another’s',
+    path: () => '/api/article-drafts/by-senior',
+    body: { version: '0-new', ...unfinished },
+    status: forSenior(409),
+  },
+  {
+    route: 'get /article-drafts/:slug/revisions',
+    path: () => '/api/article-drafts/double-bond/revisions',
+    status: forSenior(200),
+  },
+  {
+    route: 'get /article-drafts/:slug/revisions/:number',
+    of: 'none yet',
+    path: () => '/api/article-drafts/double-bond/revisions/1',
+    status: forSenior(404),
+  },
+  {
+    route: 'get /article-drafts/:slug/feedback',
+    path: () => '/api/article-drafts/double-bond/feedback',
+    status: forSenior(200),
+  },
+  {
+    route: 'post /article-drafts/:slug/let-go',
+    of: 'no draft',
+    path: () => '/api/article-drafts/nothing-there/let-go',
+    body: { version: '0-new' },
+    status: forSenior(409),
+  },
+  {
+    route: 'put /article-drafts/:slug/in-force',
+    of: 'an unfinished one',
+    path: (asker) => `/api/article-drafts/by-${asker}/in-force`,
+    body: { version: '1-new', reason: 'test' },
+    status: forSenior(400),
+  },
+  {
+    route: 'put /article-drafts/:slug/withdrawn',
+    of: 'nothing in force',
+    path: () => '/api/article-drafts/nothing-there/withdrawn',
+    body: { withdrawn: true, reason: 'test' },
+    status: forSenior(404),
+  },
   { route: 'get /me', path: () => '/api/me', status: all(200) },
   { route: 'get /people', path: () => '/api/people', status: forAdmin(200) },
   {
