@@ -17,11 +17,15 @@ import { requestLog } from './request-log.ts'
 import { onlyJson, sameOrigin } from './same-origin.ts'
 import { security } from './security.ts'
 import { sessions } from './session.ts'
+import { sheetEvents } from './sheets/sheet-events.ts'
+import type { SheetFeed } from './sheets/sheet-feed.ts'
+import { sheetRoutes } from './sheets/sheets.routes.ts'
 import { site } from './site.ts'
 
 export type AppParts = {
   db: Db
   feed: EditionFeed
+  sheetFeed: SheetFeed
   log: Log
   config: Pick<Config, 'trustProxy' | 'sessionSecret'>
   /** Where the built pages lie; the checkout's `dist` unless said. */
@@ -34,11 +38,12 @@ const dist = fileURLToPath(new URL('../dist', import.meta.url))
  * The application as a function of its parts: tests build it too. `close` ends the open event streams, which would
  * otherwise keep the server from stopping.
  */
-export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
+export function createApp({ db, feed, sheetFeed, log, config, pages = dist }: AppParts): {
   app: Express
   close: () => void
 } {
   const events = editionEvents(feed)
+  const sheetStreams = sheetEvents(sheetFeed)
   const session = sessions({ db, log, secret: config.sessionSecret })
   const throttle = openThrottle(db, config.sessionSecret)
   const app = express()
@@ -59,12 +64,14 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     articleRoutes(db),
     accountRoutes(db, throttle),
     peopleRoutes(db),
+    sheetRoutes({ db, events: sheetStreams, count: throttle.sheet }),
     noSuchRoute,
   )
   app.use(site(pages))
   app.use(problems(log))
   const close = () => {
     events.close()
+    sheetStreams.close()
     session.close()
   }
   return { app, close }

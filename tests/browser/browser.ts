@@ -1,52 +1,45 @@
 /** What browser tests share: the whole application on a database of its own, and Debian's Chromium. */
-import { createServer } from 'node:http'
-import type { AddressInfo } from 'node:net'
 import { chromium } from 'playwright-core'
 import type { Browser, BrowserContext, Page } from 'playwright-core'
-import { createApp } from '../../server/app.ts'
-import { EditionFeed } from '../../server/editions/edition-feed.ts'
-import { followEditions } from '../../server/editions/follow-editions.ts'
 import { seedStarter } from '../../server/editions/seed-starter.ts'
-import { openLog } from '../../server/log.ts'
 import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import { testDatabase } from '../server/database.ts'
 import type { TestDatabase } from '../server/database.ts'
-import { testSecret } from '../server/running-app.ts'
+import { runApp } from '../server/running-app.ts'
+import type { RunningApp } from '../server/running-app.ts'
 
 export type Site = {
   url: string
   database: TestDatabase
   /** Stops answering, as when the network is gone. The database stays. */
   stop: () => Promise<void>
+  /** Answers again at the same address. */
+  startAgain: () => Promise<void>
   close: () => Promise<void>
 }
 
 /** Serves the built pages with the starter edition in force. */
 export async function openSite(): Promise<Site> {
-  const log = openLog('silent')
   const database = await testDatabase()
   await seedStarter(database.db)
   await seedDemoPeople(database.db)
-  const feed = new EditionFeed()
-  const unfollow = followEditions(database.url, database.db, feed, log)
-  const config = { trustProxy: 0, sessionSecret: testSecret }
-  const { app, close: closeStreams } = createApp({ db: database.db, feed, log, config })
-  const server = createServer(app)
-  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))
-  let stopped: Promise<void> | undefined
-  const stop = () =>
-    (stopped ??= new Promise((resolve) => {
-      server.close(() => resolve())
-      closeStreams()
-      server.closeAllConnections()
-    }))
+  const first = await runApp(database.url)
+  const port = Number(new URL(first.url).port)
+  let running: RunningApp | undefined = first
+  const stop = async () => {
+    const app = running
+    running = undefined
+    await app?.close()
+  }
   return {
-    url: `http://127.0.0.1:${(server.address() as AddressInfo).port}`,
+    url: first.url,
     database,
     stop,
+    startAgain: async () => {
+      running ??= await runApp(database.url, { port })
+    },
     close: async () => {
       await stop()
-      await unfollow()
       await database.close()
     },
   }
