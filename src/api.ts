@@ -26,12 +26,20 @@ export class NoNetwork extends Error {
 const Problem = z.object({ title: z.string(), errors: z.optional(z.record(z.string(), z.string())) })
 const patienceMs = 20_000
 
-async function ask(path: string, accept: string, signal: AbortSignal | undefined): Promise<Response> {
+type Asked = { accept: string; method?: string; body?: unknown }
+
+async function ask(
+  path: string,
+  { accept, method = 'GET', body }: Asked,
+  signal?: AbortSignal,
+): Promise<Response> {
   const patience = AbortSignal.timeout(patienceMs)
   const either = signal === undefined ? patience : AbortSignal.any([signal, patience])
   let answer: Response
   try {
-    answer = await fetch(`/api${path}`, { headers: { accept }, signal: either })
+    const sent = method === 'GET' ? {} : { body: JSON.stringify(body ?? {}) }
+    const headers = { accept, ...(method !== 'GET' && { 'content-type': 'application/json' }) }
+    answer = await fetch(`/api${path}`, { method, headers, signal: either, ...sent })
   } catch (problem) {
     if (signal?.aborted === true) throw problem
     throw new NoNetwork(problem)
@@ -53,10 +61,30 @@ export async function get<Contract extends z.ZodMiniType>(
   contract: Contract,
   signal?: AbortSignal,
 ): Promise<z.output<Contract>> {
-  const answer = await ask(path, 'application/json', signal)
+  return read(await ask(path, { accept: 'application/json' }, signal), contract)
+}
+
+/**
+ * Sends something to the server and reads its answer with its own contract.
+ * @param path what follows `/api`, for example `/sign-in`
+ * @throws ApiProblem when it refuses, with a sentence for each field at fault; NoNetwork when nobody answers
+ */
+export async function send<Contract extends z.ZodMiniType>(
+  method: 'POST' | 'PATCH',
+  path: string,
+  body: unknown,
+  contract: Contract,
+): Promise<z.output<Contract>> {
+  return read(await ask(path, { accept: 'application/json', method, body }), contract)
+}
+
+async function read<Contract extends z.ZodMiniType>(
+  answer: Response,
+  contract: Contract,
+): Promise<z.output<Contract>> {
   if (answer.headers.get('content-type')?.includes('json') !== true) throw new NoNetwork()
-  const read = contract.safeParse(await answer.json().catch(() => undefined))
-  if (read.success) return read.data
+  const said = contract.safeParse(await answer.json().catch(() => undefined))
+  if (said.success) return said.data
   throw new ApiProblem(answer.status, 'The server and this page don’t match. Load the page again.')
 }
 
@@ -65,7 +93,7 @@ export async function get<Contract extends z.ZodMiniType>(
  * @param path what follows `/api`, for example `/edition-files/<hash>`
  */
 export async function getBytes(path: string, signal?: AbortSignal): Promise<Uint8Array> {
-  const answer = await ask(path, '*/*', signal)
+  const answer = await ask(path, { accept: '*/*' }, signal)
   try {
     return new Uint8Array(await answer.arrayBuffer())
   } catch (problem) {

@@ -36,9 +36,10 @@ const least = (r: TakenReading | undefined) => r && (r.between?.[0] ?? r.value)
 
 /** Something found in this mode that speaks of a tie already there, or of a balanced output. */
 function objection(h: Here): string | undefined {
-  for (const id of ['source.ng.ohms', 'panel.ng.ohms', 'receptacle.ng.ohms']) {
-    const ohms = least(h.reading(id))
-    if (ohms !== undefined && ohms < 5) return `${id} reads under 5 Ω: neutral and ground are tied already`
+  for (const place of places) {
+    const ohms = least(h.reading(`${place}.ng.ohms`))
+    if (ohms !== undefined && ohms < 5)
+      return `Neutral to ground at the ${place} reads under 5 Ω: they are tied already`
   }
   for (const place of places) {
     const [hn, hg, ng] = ['hn', 'hg', 'ng'].map((pair) => h.reading(`${place}.${pair}.volts`))
@@ -47,19 +48,19 @@ function objection(h: Here): string | undefined {
     const base = most(hn) ?? 0
     const tied = (a: TakenReading, b: TakenReading) =>
       (most(a) ?? 0) > 0.9 * (least(hn) ?? 0) && (least(b) ?? Infinity) < 0.05 * base
-    if (live && (tied(hg, ng) || tied(ng, hg))) return `at the ${place} ground holds on one of the two wires`
+    if (live && (tied(hg, ng) || tied(ng, hg))) return `At the ${place} ground holds on one of the two wires`
     const between = (r: TakenReading) =>
       (most(r) ?? 0) >= 0.25 * (least(hn) ?? 0) && (least(r) ?? Infinity) <= 0.75 * base
     const heavy = Math.min(hg.meterOhms, ng.meterOhms) <= 10_000
     if (live && heavy && between(hg) && between(ng))
-      return `at the ${place} ground stays between the wires against a low-resistance meter: a balanced output`
+      return `At the ${place} ground stays between the wires against a low-resistance meter: a balanced output`
   }
   for (const id of ['bulb.ng', 'bulb.hg']) {
     const look = h.observed(id)
-    if (look === 'dim' || look === 'bright') return 'a test bulb glowed to ground: something holds ground'
+    if (look === 'dim' || look === 'bright') return 'A test bulb glowed to ground: something holds ground'
   }
   const across = most(h.reading('bulb.ng.volts'))
-  if (across !== undefined && across > h.limit) return 'the test bulb kept volts between neutral and ground'
+  if (across !== undefined && across > h.limit) return 'The test bulb kept volts between neutral and ground'
   return undefined
 }
 

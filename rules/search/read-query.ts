@@ -28,6 +28,8 @@ export type ReadQuery = {
   readAs: string | undefined
 }
 
+const weak: ReadonlySet<string> = new Set(weakWords.map(fileUnder))
+
 const isBeginning = (word: string, vocabulary: Vocabulary) =>
   word.length > 1 && [...vocabulary.written.keys()].some((known) => known.startsWith(word))
 
@@ -62,7 +64,7 @@ export function readQuery(query: string, vocabulary: Vocabulary): ReadQuery {
       terms: [fileUnder(term)],
       near: [],
       beginning: begins ? token.word : undefined,
-      weak: weakWords.has(fileUnder(term)),
+      weak: weak.has(fileUnder(term)),
     })
     if (known || begins) return word(token.word)
     const as = readAs(token.word, vocabulary.written)

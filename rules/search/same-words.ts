@@ -34,6 +34,11 @@ export const sameWords: readonly { words: readonly string[]; because: string }[]
   { words: ['poor', 'loose', 'bad'], because: 'A poor joint is a loose one to whoever finds it.' },
   { words: ['bulb', 'lightbulb'], because: 'Written together or apart.' },
   { words: ['half', 'halfway', 'halved'], because: 'A reading of half, and ground sitting halfway.' },
+  { words: ['fridge', 'refrigerator'], because: 'Written short or in full.' },
+  {
+    words: ['ghost', 'phantom'],
+    because: 'Volts that a meter shows and no load can draw on; the trade has both words.',
+  },
   { words: ['tingle', 'zap', 'tickle'], because: 'A weak shock from metal, in people’s words.' },
   { words: ['trip', 'pop', 'kick'], because: 'What a breaker does, in people’s words.' },
   { words: ['flicker', 'blink', 'pulse'], because: 'Lights that are not steady.' },
@@ -73,12 +78,18 @@ export const sameWords: readonly { words: readonly string[]; because: string }[]
   },
 ]
 
-/** Words that help where they match and cost nothing where they don't. */
-export const weakWords: ReadonlySet<string> = new Set(['not', 'volt', 'amp', 'after'])
+/**
+ * Words that help where they match and cost nothing where they don't: units, and what happens to be plugged in. An
+ * article on metal that tingles need not name the fridge of whoever felt it.
+ */
+export const weakWords: readonly string[] =
+  'not volt amp after fridge freezer washer washing dryer dishwasher machine stove oven microwave kettle toaster heater computer laptop tv house home kitchen bathroom'.split(
+    ' ',
+  )
 
 /** Words too common to say anything. */
 export const emptyWords: ReadonlySet<string> = new Set(
-  'a an and are as at be been but by can did do does for from get got had has have how i if in into is it its my of on or so that the their them then there they this to was what which while why will with you your'.split(
+  'a am an and are as at be been but by can could did do does for from get got had has have he how i if in into is it its just me my of on or our really she should so someone something that the their them then there they this to us was we what when where which while who why will with would you your'.split(
     ' ',
   ),
 )

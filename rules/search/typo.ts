@@ -1,5 +1,5 @@
 /** How many slips a word of this length may hold and still be read: none in a short word, where one makes another. */
-export const slipsAllowed = (length: number): number => (length < 4 ? 0 : length < 8 ? 1 : 2)
+const slipsAllowed = (length: number): number => (length < 4 ? 0 : length < 8 ? 1 : 2)
 
 /**
  * Slips between two words: a letter too many, missing, wrong, or two neighbors in each other's place.

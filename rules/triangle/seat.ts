@@ -5,7 +5,7 @@
 import { cornerOpposite, inVolts, sideOrder, volts } from './sides.ts'
 import type { Corner, Readings, Side } from './sides.ts'
 
-export type ClosedAt = 'neutral' | 'hot' | 'middle' | 'between' | 'off-line'
+type ClosedAt = 'neutral' | 'hot' | 'middle' | 'between' | 'off-line'
 
 type Said = { say: string }
 export type Seat =

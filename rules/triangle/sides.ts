@@ -5,7 +5,7 @@ export type Side = 'hn' | 'ng' | 'hg'
 export type Corner = 'N' | 'H' | 'G'
 
 /** Volts between two points of one place; a side that was not taken is absent. */
-export type Sides = { hn?: number | undefined; ng?: number | undefined; hg?: number | undefined }
+type Sides = { hn?: number | undefined; ng?: number | undefined; hg?: number | undefined }
 export type Readings = Sides & { nominal: number }
 
 /** The order in which they are typed. */

@@ -2,7 +2,7 @@
 export type Weight = { size: 1 | 2 | 3; label: string; kind: 'meter' | 'bulb' }
 
 /** From here on a voltage to ground may be a ghost: the meter is too light to pull it away. */
-export const lightMeterOhms = 1_000_000
+const lightMeterOhms = 1_000_000
 
 /** "10 MΩ", "400 kΩ", "250 Ω". */
 export function ohmsInWords(ohms: number): string {

@@ -2,8 +2,7 @@
 import { openEdition } from '../../rules/edition/open.ts'
 import { readStarterDiagnosis } from '../editions/read-starter.ts'
 import { answerCase } from './answer.ts'
-import { callFolder } from './call-folder.ts'
-import { badUsage, parseLine, readArguments, readLines } from './read-cases.ts'
+import { badUsage, casesAsCalled, parseLine } from './read-cases.ts'
 
 // A reader that has seen enough closes the pipe: that is no fault of ours.
 process.stdout.on('error', (fault: NodeJS.ErrnoException) => {
@@ -12,21 +11,14 @@ process.stdout.on('error', (fault: NodeJS.ErrnoException) => {
 })
 
 async function main(): Promise<number> {
-  const args = readArguments(process.argv.slice(2), 1)
-  if (args === undefined) {
-    console.error(
-      'usage: npm run -s rank -- FILE [--priors flat|field]   (FILE: JSON Lines, - for standard input)',
-    )
-    return badUsage
-  }
-  const lines = await readLines(args.files[0] ?? '-', callFolder()).catch((cause: unknown) => {
-    console.error(`can't read ${args.files[0]}: ${cause instanceof Error ? cause.message : String(cause)}`)
-    return undefined
-  })
-  if (lines === undefined) return badUsage
+  const called = await casesAsCalled(
+    'npm run -s rank -- FILE [--priors flat|field]   (FILE: JSON Lines, - for standard input)',
+    1,
+  )
+  if (called === undefined) return badUsage
   const edition = openEdition(await readStarterDiagnosis())
-  for (const line of lines) {
-    const answer = await answerCase(edition, parseLine(line), args.priors)
+  for (const line of called.lines) {
+    const answer = await answerCase(edition, parseLine(line), called.priors)
     // Waits where the reader is slower than we are, so that nothing is lost at the end of a pipe.
     if (!process.stdout.write(`${JSON.stringify(answer)}\n`))
       await new Promise((resume) => process.stdout.once('drain', resume))

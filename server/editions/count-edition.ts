@@ -3,23 +3,27 @@ import type { Db } from '../database.ts'
 import type { EditionInForce } from './editions.contract.ts'
 import { openFile } from './editions.queries.ts'
 
-async function count(db: Db, number: number): Promise<EditionInForce['counts']> {
+/** The counts as whoever may read only what is for everyone gets them, and as the qualified do. */
+type Counts = Readonly<Record<'everyone' | 'qualified', EditionInForce['counts']>>
+
+async function count(db: Db, number: number): Promise<Counts> {
   const [diagnosis, forEveryone, forQualified] = await Promise.all([
     openFile(db, number, 'diagnosis').then((file) => DiagnosisFile.parse(file)),
     openFile(db, number, 'articles-everyone').then((file) => ArticlesFile.parse(file)),
     openFile(db, number, 'articles-qualified').then((file) => ArticlesFile.parse(file)),
   ])
-  return {
+  const everyone = {
     causes: diagnosis.causes.length,
     tests: diagnosis.tests.length,
     rules: diagnosis.groups.reduce((sum, group) => sum + group.rules.length, 0),
-    articles: forEveryone.articles.length + forQualified.articles.length,
+    articles: forEveryone.articles.length,
   }
+  return { everyone, qualified: { ...everyone, articles: everyone.articles + forQualified.articles.length } }
 }
 
 /** Counts what an edition holds, once: it never changes. */
-export function editionCounts(db: Db): (number: number) => Promise<EditionInForce['counts']> {
-  let last: { number: number; counts: EditionInForce['counts'] } | undefined
+export function editionCounts(db: Db): (number: number) => Promise<Counts> {
+  let last: { number: number; counts: Counts } | undefined
   return async (number) => {
     if (last?.number !== number) last = { number, counts: await count(db, number) }
     return last.counts

@@ -22,8 +22,9 @@ export function editionRoutes(db: Db, events: RequestHandler): Router {
   return Router()
     .get('/edition', async (req, res) => {
       const { since, ...inForce } = (await editionInForce(db)) ?? noneYet()
-      const [files, counts] = await Promise.all([
-        listFiles(db, inForce.number, mayReadQualified(req)),
+      const qualified = mayReadQualified(req)
+      const [files, { [qualified ? 'qualified' : 'everyone']: counts }] = await Promise.all([
+        listFiles(db, inForce.number, qualified),
         countsOf(inForce.number),
       ])
       const answer = EditionInForce.parse({ ...inForce, inForceSince: since.toISOString(), counts, files })

@@ -5,19 +5,16 @@ import { Fault, sayWhy } from './fault.mjs'
 import { takeLock } from './lock.mjs'
 import { needPackages } from './packages.mjs'
 import { dataFolder } from './places.mjs'
-import { runningDatabase, startDatabase } from './postgres.mjs'
+import { startDatabase } from './postgres.mjs'
+import { runningDatabase } from './running-database.mjs'
 import { tryToRun } from './run.mjs'
 import { beforeEnd, stopAll, stopOnSignals } from './stop.mjs'
 
-const database = 'tracelamp'
-const folder = join(dataFolder, 'postgres')
-
 async function databaseUrl() {
-  if (process.env.DATABASE_URL) return process.env.DATABASE_URL
-  const running = await runningDatabase(database, folder)
+  const running = runningDatabase()
   if (running !== undefined) return running
   beforeEnd(takeLock('another command'))
-  return startDatabase(database, { folder, beforeEnd })
+  return startDatabase('tracelamp', { folder: join(dataFolder, 'postgres'), beforeEnd })
 }
 
 async function main() {

@@ -6,7 +6,7 @@ import { dataFolder, root } from './places.mjs'
 const path = join(dataFolder, 'start.lock')
 
 /** The start that holds the lock. Undefined when there is none, or only one that crashed. */
-function holder() {
+export function holder() {
   try {
     const { pid, address } = JSON.parse(readFileSync(path, 'utf8'))
     // A number alone proves nothing: after a restart of the machine it belongs to somebody else.

@@ -1,6 +1,8 @@
-import { useEffect, useState } from 'react'
-import { Link, NavLink, useLocation } from 'react-router-dom'
-import { getSetting } from '../offline/settings.ts'
+import { useState } from 'react'
+import { Link, useLocation } from 'react-router-dom'
+import { reaches } from '../../server/people/roles.contract.ts'
+import type { Role } from '../../server/people/roles.contract.ts'
+import { useFollowPerson, useMe } from '../people/people.api.ts'
 import { Icon } from '../ui/icon.tsx'
 import { Mark } from './mark.tsx'
 import { SavingWord } from './saving-word.tsx'
@@ -15,31 +17,43 @@ const forStaff = [
   ['/articles', 'Articles'],
   ['/editions', 'Editions'],
 ] as const
+const forAdmins = [...forStaff, ['/shop/people', 'Our shop']] as const
 
-const staffOnly = /^\/(diagnosis|editions)\b/
+function linksFor(role: Role | undefined) {
+  if (role === undefined || !reaches(role, 'tech')) return forHomeowners
+  return reaches(role, 'admin') ? forAdmins : forStaff
+}
+
+/** Sign in, or whose account this is. Where the session has ended with time, the way back in. */
+function AccountLink() {
+  const { known, person, expired } = useMe()
+  const { pathname, search } = useLocation()
+  if (!known) return null
+  if (person === undefined || expired)
+    return (
+      <Link className="word-btn mast-me" to={`/sign-in?next=${encodeURIComponent(pathname + search)}`}>
+        {expired ? 'Sign in again' : 'Sign in'}
+      </Link>
+    )
+  return (
+    <Link className="word-btn mast-me" to="/account" aria-label={`Account: ${person.name}`}>
+      <span>{person.name}</span>
+    </Link>
+  )
+}
+
 const shared = /^\/(articles|causes|tests)\b/
 
-/** Whose masthead a page carries. Pages both read follow what this device's person stated. */
-function useStaff(path: string): boolean {
-  const [qualified, setQualified] = useState(false)
-  useEffect(() => {
-    let wanted = true
-    getSetting('qualified').then(
-      (stated) => wanted && setQualified(stated !== undefined),
-      () => {},
-    )
-    return () => {
-      wanted = false
-    }
-  }, [path])
-  return staffOnly.test(path) || (shared.test(path) && qualified)
-}
+/** Causes and tests are read among the articles, so they stand under that word too. */
+const isUnder = (to: string, path: string) =>
+  to === '/articles' ? shared.test(path) : path === to || path.startsWith(`${to}/`)
 
 /** The head of every page: mark, ways to go, where what was typed lies, theme. On a phone they fold under "Menu". */
 export function Masthead() {
   const { pathname } = useLocation()
   const [openAt, setOpenAt] = useState<string>()
-  const links = useStaff(pathname) ? forStaff : forHomeowners
+  const links = linksFor(useMe().person?.role)
+  useFollowPerson()
   const open = openAt === pathname
   return (
     <header
@@ -65,11 +79,12 @@ export function Masthead() {
         <div className="mast-panel" id="mast-panel" data-open={open}>
           <nav aria-label="Main">
             {links.map(([to, words]) => (
-              <NavLink key={to} to={to}>
+              <Link key={to} to={to} aria-current={isUnder(to, pathname) ? 'page' : undefined}>
                 {words}
-              </NavLink>
+              </Link>
             ))}
           </nav>
+          <AccountLink />
           <ThemeButton />
         </div>
       </div>

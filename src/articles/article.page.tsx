@@ -4,9 +4,7 @@ import { Button } from '../ui/button.tsx'
 import { typicalOf } from './cause-glyph.ts'
 import { dayInWords } from './day.ts'
 import { useFetchAhead } from './fetch-ahead.ts'
-import { ForQualified } from './for-qualified.tsx'
 import { GuideLine } from './guide-line.tsx'
-import { mayOpen } from './knowledge.ts'
 import type { Knowledge } from './knowledge.ts'
 import { KnowledgePage } from './knowledge-page.tsx'
 import type { Shown } from './knowledge-page.tsx'
@@ -63,14 +61,7 @@ function showArticle(knowledge: Knowledge, slug: string): Shown | undefined {
           </p>
           <h1>{article.title}</h1>
         </header>
-        {mayOpen(knowledge, article.audience) ? (
-          <Text article={article} />
-        ) : (
-          <ForQualified>
-            This article is about work with covers off or power on. It is named here so that you can ask a
-            professional for it.
-          </ForQualified>
-        )}
+        <Text article={article} />
       </>
     ),
     side: (

@@ -1,6 +1,17 @@
 import type { ReactNode } from 'react'
+import { useLocation } from 'react-router-dom'
 import { LinkButton } from '../ui/button.tsx'
 import { Icon } from '../ui/icon.tsx'
+
+/** To the sign-in page, and back to where one was. */
+export function SignInHere() {
+  const { pathname, search } = useLocation()
+  return (
+    <LinkButton to={`/sign-in?next=${encodeURIComponent(pathname + search)}`} size="small">
+      Sign in
+    </LinkButton>
+  )
+}
 
 /** What is named here but not opened on this device, and what opens it. */
 export function ForQualified({ children }: { children: ReactNode }) {
@@ -12,12 +23,10 @@ export function ForQualified({ children }: { children: ReactNode }) {
       </p>
       <p className="mt-2 text-small">{children}</p>
       <p className="screen-only mt-3 text-small">
-        It opens on a device whose user has stated to be qualified. Not qualified: leave it to a professional.
+        It opens for techs of the shop who are signed in. Not one of them: leave it to a professional.
       </p>
       <div className="screen-only mt-3">
-        <LinkButton to="/diagnosis" size="small">
-          State that you are qualified
-        </LinkButton>
+        <SignInHere />
       </div>
     </div>
   )

@@ -12,7 +12,7 @@ export const addressOf = (kind: Hit['kind'], id: string, query = ''): string =>
   `/${pages[kind]}/${id}${query === '' ? '' : `?q=${encodeURIComponent(query)}`}`
 
 /** A text with what was searched for marked. */
-export function Marked({ pieces }: { pieces: readonly Piece[] }) {
+function Marked({ pieces }: { pieces: readonly Piece[] }) {
   return pieces.map((piece, index) =>
     piece.marked ? <mark key={index}>{piece.text}</mark> : <span key={index}>{piece.text}</span>,
   )

@@ -5,6 +5,7 @@ import { Empty } from '../ui/empty.tsx'
 import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Waiting } from '../ui/waiting.tsx'
+import { SignInHere } from './for-qualified.tsx'
 import { useKnowledge } from './knowledge.ts'
 import type { Knowledge, KnowledgeState } from './knowledge.ts'
 import { SearchColumn } from './search-column.tsx'
@@ -63,6 +64,12 @@ export function KnowledgePage({ kind, id, show }: KnowledgePageProps) {
               <h1 className="mb-4">No {kind} of that name</h1>
               <Empty title={`Edition ${state.knowledge.info.number} has no ${kind} “${id}”.`}>
                 It may have another name now. <Link to="/articles">All articles</Link>
+                {kind === 'article' && !state.knowledge.qualified && (
+                  <div className="mt-3">
+                    <p className="mb-3">An article for qualified people opens once you have signed in.</p>
+                    <SignInHere />
+                  </div>
+                )}
               </Empty>
             </div>
           ) : (

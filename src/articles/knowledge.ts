@@ -2,13 +2,13 @@ import type { EditionInForce } from '../../server/editions/editions.contract.ts'
 import type { Edition } from '../../rules/edition/open.ts'
 import type { Article, CauseProcedure, ProceduresFile, TestProcedure } from '../../rules/edition/schema.ts'
 import { useArticles, useEdition, useProcedures } from '../editions/edition.api.ts'
-import { useQualified } from './use-qualified.ts'
+import { useQualified } from '../people/people.api.ts'
 
 /** All that the pages of this folder read, once it is there. */
 export type Knowledge = {
   edition: Edition
   info: EditionInForce
-  /** By slug, those for qualified people among them: named for everyone, opened by `mayOpen` alone. */
+  /** By slug; those for qualified people only where such a person is signed in. */
   articles: ReadonlyMap<string, Article>
   tests: ReadonlyMap<string, TestProcedure>
   causes: ReadonlyMap<string, CauseProcedure>
@@ -21,21 +21,13 @@ export type KnowledgeState =
   | { status: 'error'; error: Error | undefined; retry: () => void }
   | { status: 'success'; knowledge: Knowledge }
 
-/** Whether this device may show something for this audience. */
-export const mayOpen = (knowledge: Knowledge, audience: 'everyone' | 'qualified'): boolean =>
-  audience === 'everyone' || knowledge.qualified
-
-/**
- * The edition with its articles and procedures. What is for qualified people may be missing without harm: then it is
- * not even named.
- */
+/** The edition with its articles and procedures: all that whoever is signed in may read. */
 export function useKnowledge(): KnowledgeState {
   const qualified = useQualified()
   const opened = useEdition()
-  const shelf = useArticles(true)
-  const open = useArticles(false)
+  const shelf = useArticles(qualified === true)
   const procedures = useProcedures(qualified === true)
-  const parts = [opened, open, procedures]
+  const parts = [opened, shelf, procedures]
   const failed = parts.find((part) => part.status === 'error')
   if (failed !== undefined)
     return {
@@ -45,7 +37,7 @@ export function useKnowledge(): KnowledgeState {
         for (const part of parts) if (part.status === 'error') part.retry()
       },
     }
-  const waits = shelf.status === 'pending' || parts.some((part) => part.status === 'pending')
+  const waits = parts.some((part) => part.status === 'pending')
   const { edition, info } = opened
   if (qualified === undefined || waits || edition === undefined || info === undefined)
     return { status: 'pending' }

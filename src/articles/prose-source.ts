@@ -13,18 +13,47 @@ const marked = new Marked({
 const tags =
   'h1 h2 h3 h4 h5 h6 p br hr ul ol li strong em del code pre blockquote a table thead tbody tr th td'
 
+const signalWords = ['danger', 'warning', 'caution', 'notice'] as const
+export type SignalWord = (typeof signalWords)[number]
+
+/** The signal word that a quotation begins with, in bold; undefined for any other. */
+export function signalOf(quotation: Element): SignalWord | undefined {
+  const bold = quotation.firstElementChild?.firstChild
+  if (bold?.nodeName !== 'STRONG') return undefined
+  const said = (bold.textContent ?? '').replace(/[\s:.]+$/, '').toLowerCase()
+  return signalWords.find((word) => word === said)
+}
+
+const rankOf = (quotation: Element) => {
+  const word = signalOf(quotation)
+  return word === undefined ? signalWords.length : signalWords.indexOf(word)
+}
+
+/** Of signal panels that follow one another the worst goes first, whatever order they were written in. */
+function putDangerFirst(fragment: DocumentFragment): void {
+  for (const quotation of [...fragment.children].filter((one) => one.tagName === 'BLOCKQUOTE')) {
+    let before = quotation.previousElementSibling
+    while (before?.tagName === 'BLOCKQUOTE' && rankOf(before) > rankOf(quotation)) {
+      before.before(quotation)
+      before = quotation.previousElementSibling
+    }
+  }
+}
+
 /**
  * Markdown to a piece of a document that holds these tags, `href` and nothing else. What `prose.tsx` draws is made
  * anew from it, tag by tag: an article must get past the renderer, the purifier and that list to do harm.
  */
 export function proseOf(markdown: string): DocumentFragment {
-  return DOMPurify.sanitize(marked.parse(markdown, { async: false }), {
+  const fragment = DOMPurify.sanitize(marked.parse(markdown, { async: false }), {
     ALLOWED_TAGS: tags.split(' '),
     ALLOWED_ATTR: ['href'],
     ALLOW_DATA_ATTR: false,
     ALLOW_ARIA_ATTR: false,
     RETURN_DOM_FRAGMENT: true,
   })
+  putDangerFirst(fragment)
+  return fragment
 }
 
 export type Target = { kind: 'page'; to: string } | { kind: 'elsewhere'; href: string }

@@ -4,8 +4,7 @@ import { Link } from 'react-router-dom'
 import { HazardMark } from '../ui/hazard-mark.tsx'
 import type { HazardClass } from '../ui/hazard-mark.tsx'
 import { SignalPanel } from '../ui/signal-panel.tsx'
-import type { SignalWord } from '../ui/signal-panel.tsx'
-import { proseOf, targetOf } from './prose-source.ts'
+import { proseOf, signalOf, targetOf } from './prose-source.ts'
 
 const hazardHeadings: readonly { begins: string; hazard: HazardClass }[] = [
   { begins: 'nothing opened, can make metal live', hazard: 'closed-can-energize' },
@@ -49,17 +48,12 @@ function link(element: Element): ReactNode {
 
 /** A quotation that begins with a signal word in bold is a signal panel; any other stays a quotation. */
 function quotation(element: Element): ReactNode {
+  const signal = signalOf(element)
   const first = element.firstElementChild
-  const bold = first?.firstChild
-  const word = /^(danger|warning|caution|notice)\s*[:.]?\s*$/i.exec(
-    bold instanceof Element && bold.tagName === 'STRONG' ? (bold.textContent ?? '') : '',
-  )?.[1]
-  if (first === null || bold === null || bold === undefined || word === undefined)
-    return <blockquote>{inside(element)}</blockquote>
-  const rest = first.cloneNode(true) as Element
+  if (signal === undefined || first === null) return <blockquote>{inside(element)}</blockquote>
+  const rest = first.cloneNode(true)
   rest.firstChild?.remove()
   if (rest.firstChild instanceof Text) rest.firstChild.data = rest.firstChild.data.replace(/^\s*[:.]?\s*/, '')
-  const signal = word.toLowerCase() as SignalWord
   const others = [...element.children].slice(1)
   return (
     <SignalPanel word={signal} slim={signal === 'caution' || signal === 'notice'}>

@@ -2,20 +2,17 @@ import { useDeferredValue, useEffect, useMemo, useRef, useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import { buildIndex, search } from '../../rules/search/search.ts'
 import type { Found, SearchIndex } from '../../rules/search/search.ts'
-import { mayOpen } from './knowledge.ts'
 import type { Knowledge } from './knowledge.ts'
 
 let last: { key: string; index: SearchIndex } | undefined
 
-/** The index of what this device may search, built once for an edition. Bodies that may not be opened stay out. */
+/** The index of what this person may read, built once for an edition. */
 export function indexOf(knowledge: Knowledge): SearchIndex {
   const { edition, info, articles, procedures, qualified } = knowledge
   const key = [info.hash, qualified, articles.size, procedures.length].join()
   if (last?.key === key) return last.index
-  const searchable = [...articles.values()].map((article) =>
-    mayOpen(knowledge, article.audience) ? article : { ...article, body: '' },
-  )
-  last = { key, index: buildIndex(searchable, edition.file.causes, edition.file.tests, procedures) }
+  const { causes, tests } = edition.file
+  last = { key, index: buildIndex([...articles.values()], causes, tests, procedures) }
   return last.index
 }
 

@@ -76,7 +76,7 @@ export function BondPlate({ bond, trying, unread }: BondPlateProps) {
         </h2>
         {against && (
           <p className="text-small font-bold">
-            Never while this stands: {against.says}. A second tie, or a bond on a balanced output, can destroy
+            Never while this stands. {against.says}. A second tie, or a bond on a balanced output, can destroy
             the source or make its case live.
           </p>
         )}

@@ -21,10 +21,10 @@ export type Offer = {
 export const modeChangeMinutes = 5
 
 /** Names a test in a mode: what is put aside in one is still to do in another. */
-export const testKey = (next: NextTest, sheetMode: string): string => `${next.test} ${next.mode ?? sheetMode}`
+const testKey = (next: NextTest, sheetMode: string): string => `${next.test} ${next.mode ?? sheetMode}`
 
 /** How much of the enclosure is open. Plugged straight into the source it can be less. */
-export const hazardOf = (test: Test, wiring: string): Hazard =>
+const hazardOf = (test: Test, wiring: string): Hazard =>
   wiring === 'direct' ? (test.hazardDirect ?? test.hazard) : test.hazard
 
 const hazardOrder: readonly Hazard[] = ['closed', 'open-dead', 'closed-can-energize', 'open-live']

@@ -1,25 +1,25 @@
 import { useSearchParams } from 'react-router-dom'
+import { isQualified } from '../../server/people/roles.contract.ts'
+import { useMe } from '../people/people.api.ts'
 import { Page } from '../ui/page.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import './diagnosis.css'
-import { QualifiedStatement } from './qualified-statement.tsx'
+import { ForQualified } from './for-qualified.tsx'
 import { SheetPage } from './sheet-page.tsx'
 import { SheetsPage } from './sheets-page.tsx'
-import { useQualified } from './use-qualified.ts'
 
-/** Diagnosis: the statement first, then the sheets on this device, then one of them. */
+/** Diagnosis, for techs: the sheets on this device, then one of them. With no network whoever last signed in goes on. */
 export function Component() {
-  const { qualified, state, withdraw } = useQualified()
+  const { known, person } = useMe()
   const [search] = useSearchParams()
   const id = search.get('sheet')
-  if (qualified === 'pending')
+  if (!known)
     return (
       <Page title="Diagnosis">
         <h1>Diagnosis</h1>
         <Waiting what="Diagnosis" />
       </Page>
     )
-  if (qualified === null) return <QualifiedStatement onState={state} />
-  if (id !== null) return <SheetPage key={id} id={id} />
-  return <SheetsPage stated={qualified} onWithdraw={withdraw} onState={state} />
+  if (!isQualified(person?.role)) return <ForQualified person={person} />
+  return id === null ? <SheetsPage /> : <SheetPage key={id} id={id} />
 }

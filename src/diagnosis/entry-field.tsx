@@ -14,15 +14,25 @@ import { capital } from './words.ts'
 /** The line beneath the number: instrument and condition it was taken under. */
 function conditionOf(reading: Reading, entry: ReadingEntry | undefined): string {
   if (entry?.unreachable === true) return 'can’t be reached'
-  if (entry === undefined || entry.text === '') return reading.dead === true ? 'proved dead first' : ''
+  const taken = entry !== undefined && entry.text !== ''
   const unloaded = reading.unit === 'V' && reading.pair !== undefined && !reading.id.includes('bulb.')
   const condition =
-    reading.loaded === true ? 'load on' : reading.dead === true ? 'proved dead' : unloaded ? 'no load' : ''
+    reading.dead === true
+      ? taken
+        ? 'proved dead'
+        : 'proved dead first'
+      : !taken
+        ? ''
+        : reading.loaded === true
+          ? 'load on'
+          : unloaded
+            ? 'no load'
+            : ''
   const parts = [
-    entry.upper === undefined ? '' : 'wanders',
+    entry?.upper === undefined ? '' : 'wanders',
     condition,
-    entry.meterOhms === undefined ? '' : `${ohmsInWords(entry.meterOhms)} meter`,
-    entry.note ?? '',
+    entry?.meterOhms === undefined ? '' : `${ohmsInWords(entry.meterOhms)} meter`,
+    entry?.note ?? '',
   ].filter((part) => part !== '')
   return parts.join(' · ')
 }

@@ -10,6 +10,8 @@ import { MisfitPlate } from './misfit-plate.tsx'
 import { inSentence, percent, unexplained } from './words.ts'
 
 const shownAtFirst = 4
+/** Share from which it is worth saying whether one cause explains all. */
+const worthSaying = 0.5
 
 const idOf = (row: Row) => row.causes.map((one) => one.cause).join('-')
 /** Share of a row's causes in the ranking before. */
@@ -32,7 +34,7 @@ function moveInList(event: KeyboardEvent<HTMLOListElement>): void {
 
 function WholeStory({ leader }: { leader: Row | undefined }) {
   const against = leader?.causes[0] && unexplained(leader.causes[0])
-  if (leader === undefined) return null
+  if (leader === undefined || leader.share < worthSaying) return null
   return against === undefined ? (
     <>One cause explains all of this: yes.</>
   ) : (

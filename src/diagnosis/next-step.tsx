@@ -1,6 +1,5 @@
 import { useState } from 'react'
 import { Link } from 'react-router-dom'
-import type { Diagnosis } from '../../rules/ranking/diagnosis-types.ts'
 import type { TestProcedure } from '../../rules/edition/schema.ts'
 import { Button } from '../ui/button.tsx'
 import { HazardMark } from '../ui/hazard-mark.tsx'
@@ -35,7 +34,10 @@ function WhyThisOne({ offer }: { offer: Offer }) {
 
 type NextStepProps = {
   offers: Offers
-  diagnosis: Diagnosis
+  /** Something stops: nothing is entered before that is dealt with. */
+  stopped: boolean
+  /** No single cause fits: the reading to take again comes first. */
+  misfit: boolean
   procedure: (test: string) => TestProcedure | undefined
   /** A test taken from the list of others, by key. */
   picked: string | undefined
@@ -43,13 +45,12 @@ type NextStepProps = {
 }
 
 /** The one next thing: the test that tells most for its minutes, and the way to enter what it shows. */
-export function NextStep({ offers, diagnosis, procedure, picked, onPick }: NextStepProps) {
+export function NextStep({ offers, stopped, misfit, procedure, picked, onPick }: NextStepProps) {
   const desk = useDesk()
   const [why, setWhy] = useState(false)
   const [others, setOthers] = useState(false)
   const best = offers.open[0]
   const offer = offers.open.find((one) => one.key === picked) ?? best
-  const stopped = diagnosis.stops.length > 0
   if (offer === undefined || (offer.next.gainBits <= 0 && picked === undefined))
     return (
       <section className="plate-dashed next-step" aria-labelledby="next-title">
@@ -65,7 +66,6 @@ export function NextStep({ offers, diagnosis, procedure, picked, onPick }: NextS
   const { test, next, hazard, mode } = offer
   const elsewhere = mode !== desk.typed.mode
   const before = procedure(test.id)?.before ?? []
-  const misfit = diagnosis.misfit !== undefined
   return (
     <section className="plate-edged next-step" aria-labelledby="next-title">
       <p className="flex flex-wrap justify-between gap-x-4 gap-y-1 text-small font-bold">

@@ -10,17 +10,18 @@ const shownAtFirst = 6
 
 function Row({ offer, action, onPress }: { offer: Offer; action: string; onPress: () => void }) {
   const { edition, typed } = useDesk()
+  const where = offer.mode === typed.mode ? '' : `, ${modeLabel(edition, offer.mode).toLowerCase()}`
   return (
     <li className="other-test">
       <span className="min-w-0">
         <b>{offer.test.title}</b>
-        {offer.mode !== typed.mode && `, ${modeLabel(edition, offer.mode).toLowerCase()}`}
+        {where}
         <span className="mt-1 flex flex-wrap items-center gap-x-4 gap-y-1 text-note">
           <span>{offer.minutes} min</span>
           <HazardMark hazard={offer.hazard} />
         </span>
       </span>
-      <Button size="small" onPress={onPress} label={`${action}: ${offer.test.title}`}>
+      <Button size="small" onPress={onPress} label={`${action}: ${offer.test.title}${where}`}>
         {action}
       </Button>
     </li>

@@ -5,7 +5,7 @@ import type { Reading } from '../../rules/edition/schema.ts'
 import type { Side } from '../../rules/triangle/sides.ts'
 
 export type Seats = Readonly<Record<Side, Reading>>
-export type Group = { id: string; title: string; caution: string | undefined; readings: readonly Reading[] }
+type Group = { id: string; title: string; caution: string | undefined; readings: readonly Reading[] }
 export type Place = {
   id: string
   label: string

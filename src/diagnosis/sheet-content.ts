@@ -63,7 +63,6 @@ export type Entries = z.infer<typeof Entries>
 export type Meter = z.infer<typeof Meter>
 export type SheetContext = z.infer<typeof SheetContext>
 export type Kept = z.infer<typeof Kept>
-export type Step = z.infer<typeof Step>
 export type SheetContent = z.infer<typeof SheetContent>
 
 /** A new sheet: nothing taken. */

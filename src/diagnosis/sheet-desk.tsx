@@ -39,7 +39,7 @@ type SheetDeskProps = { sheet: OpenSheet; edition: Edition; info: EditionInForce
 /** The open sheet: readings at the left, what to do and what it may be at the right; on a phone one below the other. */
 export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   const { typed, stored, dispatch, unkept, keepAgain } = sheet
-  const { diagnosis, before, stops, errors, failed } = useDiagnosis(edition, stored)
+  const { diagnosis, before, stops, bond, errors, failed } = useDiagnosis(edition, stored)
   const desk = useDeskState(edition, sheet, errors)
   const { tests } = useProcedures(true)
   const { articles } = useArticles(true)
@@ -151,12 +151,13 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
             <>
               <NextStep
                 offers={offers}
-                diagnosis={diagnosis}
+                stopped={stops.length > 0}
+                misfit={diagnosis.misfit !== undefined}
                 procedure={(test) => tests.get(test)}
                 picked={picked}
                 onPick={setPicked}
               />
-              <BondPlate bond={diagnosis.bond} trying={trying} unread={unread} />
+              {bond && <BondPlate bond={bond} trying={trying} unread={unread} />}
               <LikelyCauses diagnosis={diagnosis} before={before} articleOf={byCause} />
               <Announcement diagnosis={diagnosis} />
             </>

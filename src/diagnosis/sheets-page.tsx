@@ -5,21 +5,15 @@ import { Button } from '../ui/button.tsx'
 import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Rail } from '../ui/rail.tsx'
-import { useToast } from '../ui/toast.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { NewSheet } from './new-sheet.tsx'
 import { SheetsList } from './sheets-list.tsx'
-import type { Stated } from './use-qualified.ts'
-
-type SheetsPageProps = { stated: Stated; onWithdraw: () => void; onState: () => void }
 
 /** Diagnosis without a sheet open: those on this device, and a new one. */
-export function SheetsPage({ stated, onWithdraw, onState }: SheetsPageProps) {
+export function SheetsPage() {
   const { status, edition, info, error, retry } = useEdition()
   const [making, setMaking] = useState(false)
   const navigate = useNavigate()
-  const say = useToast()
-  const day = new Intl.DateTimeFormat('en-US', { dateStyle: 'medium' }).format(new Date(stated.statedAt))
   return (
     <Page title="Diagnosis">
       <h1>Diagnosis</h1>
@@ -57,19 +51,6 @@ export function SheetsPage({ stated, onWithdraw, onState }: SheetsPageProps) {
           </div>
         </Rail>
       )}
-      <p className="mt-7 flex flex-wrap items-center gap-x-3 text-small text-ink-2">
-        You stated on {day} that you are qualified.
-        <Button
-          look="plain"
-          size="small"
-          onPress={() => {
-            onWithdraw()
-            say({ text: 'Statement withdrawn', action: { word: 'Undo', onPress: onState } })
-          }}
-        >
-          Withdraw the statement
-        </Button>
-      </p>
     </Page>
   )
 }

@@ -13,7 +13,7 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
   const { system, wiring, meter } = typed.context
   const places = useMemo(() => placesOf(edition, { system, wiring }), [edition, system, wiring])
   const [at, setAt] = useState('receptacle')
-  const place = places.find((one) => one.id === at) ?? places.at(-1)
+  const place = places.find((one) => one.id === at) ?? places.find((one) => one.id === 'receptacle')
   const [chosen, setChosen] = useState<Chosen>()
   const [typing, setTyping] = useState(false)
   const [asking, setAsking] = useState<readonly string[]>([])
@@ -38,8 +38,9 @@ export function useDeskState(edition: Edition, sheet: OpenSheet, errors: FieldEr
   /** At once where the field is in sight, so that no key typed meanwhile goes astray. */
   const focus = useCallback((next: Chosen) => {
     const input = inputs.current.get(`${next.id} ${next.which}`)
-    if (input === undefined || input.offsetParent === null) return setWanted(next)
-    input.focus()
+    input?.focus()
+    // In a group that is still shut it can't take the cursor.
+    if (input === undefined || document.activeElement !== input) return setWanted(next)
     input.scrollIntoView({ block: 'nearest' })
   }, [])
   // A field may only come into being with the place or the group it lies in, so the cursor follows after the draw.

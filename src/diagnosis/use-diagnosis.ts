@@ -2,8 +2,9 @@ import { useEffect, useMemo, useRef, useState } from 'react'
 import type { Edition } from '../../rules/edition/open.ts'
 import type { FieldErrors } from '../../rules/findings/parse.ts'
 import { readWhatCanBe } from '../../rules/findings/read-what-can-be.ts'
+import { bondGate } from '../../rules/ranking/bond-gate.ts'
 import { stopsOf } from '../../rules/ranking/stop.ts'
-import type { Diagnosis, Stop } from '../../rules/ranking/diagnosis-types.ts'
+import type { Bond, Diagnosis, Stop } from '../../rules/ranking/diagnosis-types.ts'
 import { diagnose } from '../../rules/ranking/diagnose.ts'
 import { rawSheetOf } from './raw-sheet.ts'
 import type { SheetContent } from './sheet-content.ts'
@@ -15,6 +16,8 @@ export type Live = {
   before: Diagnosis | undefined
   /** What stops, at once: it waits for no ranking, and stands even if that fails. */
   stops: readonly Stop[]
+  /** Installing a bond, at once too: what a new finding holds back must not stand released while it is ranked. */
+  bond: Bond | undefined
   errors: FieldErrors
   /** Ranking itself failed. */
   failed: boolean
@@ -30,11 +33,13 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
   // NaN, where the meter's ohms are not typed in full, would be null in JSON: either way the key differs.
   const key = JSON.stringify(raw)
   const readable = useMemo(() => readWhatCanBe(edition, raw), [edition, key])
-  const stops = useMemo(
-    () => (readable.sheet === undefined ? [] : stopsOf(edition, readable.sheet)),
-    [edition, readable],
-  )
-  const [live, setLive] = useState<Omit<Live, 'errors' | 'stops'>>({
+  const { stops, bond } = useMemo(() => {
+    const { sheet } = readable
+    return sheet === undefined
+      ? { stops: [], bond: undefined }
+      : { stops: stopsOf(edition, sheet), bond: bondGate(edition, sheet) }
+  }, [edition, readable])
+  const [live, setLive] = useState<Omit<Live, 'errors' | 'stops' | 'bond'>>({
     diagnosis: undefined,
     before: undefined,
     failed: false,
@@ -45,7 +50,7 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
   useEffect(() => {
     let newest = true
     const { sheet } = readable
-    if (sheet === undefined) return
+    if (sheet === undefined) return setLive({ diagnosis: undefined, before: undefined, failed: true })
     const rank = () =>
       void diagnose(edition, sheet).then(
         (diagnosis) => {
@@ -68,5 +73,5 @@ export function useDiagnosis(edition: Edition, content: SheetContent): Live {
       clearTimeout(timer)
     }
   }, [edition, readable])
-  return { ...live, stops, errors: readable.errors }
+  return { ...live, stops, bond, errors: readable.errors }
 }

@@ -4,25 +4,24 @@ import type { EditionInForce, FileName } from '../../server/editions/editions.co
 import { getBytes } from '../api.ts'
 import { getFile, putFile } from '../offline/files.ts'
 
-/** The hash under which a file of this edition is kept and fetched. */
-export function hashOf(info: EditionInForce, name: FileName): string {
-  const file = info.files.find((one) => one.name === name)
-  if (file === undefined) throw new Error(`Edition ${info.number} has no ${name} file.`)
-  return file.hash
-}
+export type FileOf = EditionInForce['files'][number]
+
+/** A file of this edition. Undefined where this person may not have it. */
+export const fileOf = (info: EditionInForce, name: FileName): FileOf | undefined =>
+  info.files.find((one) => one.name === name)
 
 /**
  * Brings an edition's file: from this device, else from the server, and then keeps it.
  * @throws Error when what came is not the file of that hash; NoNetwork or ApiProblem when nothing came
  */
-export async function bringFile(hash: string, signal?: AbortSignal): Promise<Uint8Array> {
+export async function bringFile({ hash, audience }: FileOf, signal?: AbortSignal): Promise<Uint8Array> {
   // A private window may have no database: the file is then fetched each time.
   const kept = await getFile(hash).catch(() => undefined)
   if (kept !== undefined) return kept
   const bytes = await getBytes(`/edition-files/${hash}`, signal)
   if (bytesToHex(sha256(bytes)) !== hash) throw new Error('The file came damaged. Try again.')
   // A full device is no reason to show nothing.
-  await putFile(hash, bytes).catch(() => undefined)
+  await putFile(hash, bytes, audience).catch(() => undefined)
   return bytes
 }
 

@@ -5,8 +5,11 @@ import type { FileName } from '../../server/editions/editions.contract.ts'
 import { ArticlesFile, ProceduresFile } from '../../rules/edition/schema.ts'
 import type { Audience } from '../../rules/edition/schema.ts'
 import { openEdition } from '../../rules/edition/open.ts'
+import { Person } from '../../server/people/people.contract.ts'
+import { isQualified } from '../../server/people/roles.contract.ts'
 import { get } from '../api.ts'
-import { bringFile, hashOf, readJson } from './edition-file.ts'
+import { keptPerson } from '../offline/person.ts'
+import { bringFile, fileOf, readJson } from './edition-file.ts'
 import { keepEdition, readKept } from './kept-editions.ts'
 
 /** A file never changes under its hash, so it is read once and stays. Maps must not be compared piece by piece. */
@@ -29,10 +32,17 @@ export const inForceQuery = queryOptions({
   staleTime: 60_000,
 })
 
+/** Whether what lies on the device is all that its person may have: who has just signed in may have more. */
+async function isEnough(info: EditionInForce): Promise<boolean> {
+  const person = Person.safeParse(await keptPerson().catch(() => undefined)).data
+  return !isQualified(person?.role) || fileOf(info, 'articles-qualified') !== undefined
+}
+
 async function chooseEdition(client: QueryClient): Promise<EditionInForce> {
   const asked = client.fetchQuery(inForceQuery)
   const kept = await readKept()
   if (kept === undefined) return asked
+  if (!(await isEnough(kept.inForce))) return asked.catch(() => kept.inForce)
   const tired = new Promise<undefined>((resolve) => setTimeout(() => resolve(undefined), patienceMs))
   return (await Promise.race([asked.catch(() => undefined), tired])) ?? kept.inForce
 }
@@ -65,13 +75,12 @@ function fileQuery<Content>(
   name: FileName,
   read: (file: unknown) => Content,
 ) {
+  const file = info && fileOf(info, name)
   return queryOptions({
     ...forGood,
-    queryKey: ['edition-file', name, info?.files.find((file) => file.name === name)?.hash] as const,
+    queryKey: ['edition-file', name, file?.hash] as const,
     queryFn:
-      info === undefined
-        ? skipToken
-        : async ({ signal }) => read(readJson(await bringFile(hashOf(info, name), signal))),
+      file === undefined ? skipToken : async ({ signal }) => read(readJson(await bringFile(file, signal))),
   })
 }
 

@@ -1,10 +1,11 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query'
 import type { QueryClient } from '@tanstack/react-query'
 import { useEffect, useMemo } from 'react'
-import type { EditionInForce } from '../../server/editions/editions.contract.ts'
+import type { EditionInForce, FileName } from '../../server/editions/editions.contract.ts'
 import type { Edition } from '../../rules/edition/open.ts'
 import type { Article, CauseProcedure, ProceduresFile, TestProcedure } from '../../rules/edition/schema.ts'
 import { listenForEditions } from './announcements.ts'
+import { fileOf } from './edition-file.ts'
 import {
   articlesQuery,
   earlierQuery,
@@ -15,7 +16,7 @@ import {
 } from './edition-queries.ts'
 import { mergeCauses } from './merge-causes.ts'
 
-export type Status = 'pending' | 'error' | 'success'
+type Status = 'pending' | 'error' | 'success'
 type Shown = { status: Status; error: Error | undefined; retry: () => void }
 type Asked = { status: Status; error: Error | null; refetch: () => unknown }
 
@@ -38,6 +39,10 @@ export class EditionNotHere extends Error {
   override name = 'EditionNotHere'
 }
 const notHere = new EditionNotHere('The edition this was begun with is not on this device.')
+
+/** Whether there is more for qualified people. What lies on the device may stem from before they signed in. */
+const hasMore = (info: EditionInForce | undefined, name: FileName): boolean =>
+  info === undefined || fileOf(info, name) !== undefined
 
 function useUsed() {
   const client = useQueryClient()
@@ -76,9 +81,10 @@ export function useProcedures(qualified: boolean): Shown & {
   const used = useUsed()
   const info = used.data
   const open = useQuery(proceduresQuery(info, 'everyone'))
-  const more = useQuery(proceduresQuery(qualified ? info : undefined, 'qualified'))
-  const state = together(used, open, qualified ? more : undefined)
-  const [first, second] = [open.data, qualified ? more.data : undefined]
+  const wanted = qualified && hasMore(info, 'procedures-qualified')
+  const more = useQuery(proceduresQuery(wanted ? info : undefined, 'qualified'))
+  const state = together(used, open, wanted ? more : undefined)
+  const [first, second] = [open.data, wanted ? more.data : undefined]
   return useMemo(() => {
     const files = [first, second].filter((file) => file !== undefined)
     const tests = new Map(files.flatMap((file) => file.tests).map((test) => [test.test, test]))
@@ -95,9 +101,10 @@ export function useArticles(qualified: boolean): Shown & { articles: ReadonlyMap
   const used = useUsed()
   const info = used.data
   const open = useQuery(articlesQuery(info, 'everyone'))
-  const more = useQuery(articlesQuery(qualified ? info : undefined, 'qualified'))
-  const state = together(used, open, qualified ? more : undefined)
-  const [first, second] = [open.data, qualified ? more.data : undefined]
+  const wanted = qualified && hasMore(info, 'articles-qualified')
+  const more = useQuery(articlesQuery(wanted ? info : undefined, 'qualified'))
+  const state = together(used, open, wanted ? more : undefined)
+  const [first, second] = [open.data, wanted ? more.data : undefined]
   return useMemo(() => {
     const all = [first, second].flatMap((file) => file?.articles ?? [])
     return { ...state, articles: new Map(all.map((article) => [article.slug, article])) }
@@ -128,6 +135,12 @@ export function useNewEdition(): {
     () => listenForEditions(() => void client.invalidateQueries({ queryKey: inForceQuery.queryKey })),
     [client],
   )
+  // The same edition with more or fewer files: somebody else is signed in now.
+  const other =
+    inForce.data?.hash === used.data?.hash && inForce.data?.files.length !== used.data?.files.length
+  useEffect(() => {
+    if (other) client.setQueryData(usedQuery(client).queryKey, inForce.data)
+  }, [client, other, inForce.data])
   const differs =
     used.data !== undefined && inForce.data !== undefined && used.data.hash !== inForce.data.hash
   return {

@@ -1,8 +1,7 @@
 import * as z from 'zod/mini'
 import { EditionInForce } from '../../server/editions/editions.contract.ts'
-import type { FileName } from '../../server/editions/editions.contract.ts'
 import { getSetting, setSetting } from '../offline/settings.ts'
-import { bringFile, hashOf } from './edition-file.ts'
+import { bringFile } from './edition-file.ts'
 
 /** The editions whose files lie on this device. Earlier ones stay, because sheets begun with them do. */
 const Kept = z.object({ inForce: EditionInForce, earlier: z.array(EditionInForce) })
@@ -14,17 +13,12 @@ export async function readKept(): Promise<Kept | undefined> {
   return Kept.safeParse(kept).data
 }
 
-const forEveryone: readonly FileName[] = ['diagnosis', 'procedures-everyone', 'articles-everyone']
-const forQualified: readonly FileName[] = ['procedures-qualified', 'articles-qualified']
-
 /**
- * Brings all that this device needs of an edition, then names it as the one to open with no network. In this order:
- * a name without its files would open nothing.
+ * Brings all that the server lets this person have of an edition, then names it as the one to open with no network. In
+ * this order: a name without its files would open nothing.
  */
 export async function keepEdition(info: EditionInForce): Promise<void> {
-  const qualified = (await getSetting('qualified')) !== undefined
-  for (const name of qualified ? [...forEveryone, ...forQualified] : forEveryone)
-    await bringFile(hashOf(info, name))
+  for (const file of info.files) await bringFile(file)
   const before = await readKept()
   const others = before === undefined ? [] : [before.inForce, ...before.earlier]
   const earlier = others.filter((one, index) => {

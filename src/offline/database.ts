@@ -4,7 +4,8 @@ import type { SheetDoc } from './sheets.ts'
 
 export type Stores = DBSchema & {
   sheets: { key: string; value: SheetDoc }
-  files: { key: string; value: { hash: string; bytes: Uint8Array } }
+  /** Without an audience: kept by an older build, and taken for what is for qualified people. */
+  files: { key: string; value: { hash: string; bytes: Uint8Array; audience?: 'everyone' | 'qualified' } }
   settings: { key: string; value: { key: string; value: unknown } }
 }
 

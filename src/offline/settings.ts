@@ -2,8 +2,6 @@ import { database, strict } from './database.ts'
 
 /** Small things this device remembers, by name. */
 export type Settings = {
-  /** The person stated to be qualified; device time, ISO 8601. */
-  qualified: { statedAt: string }
   /** Side of the number pad that holds Clear, Unsteady and Done. */
   padSide: 'left' | 'right'
   /** Whether single letters act as keys on the Diagnosis page. */

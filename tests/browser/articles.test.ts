@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { axeFindings } from './axe.ts'
 import { desk, openBrowser, openSite, phone, settled, visit } from './browser.ts'
 import type { Site } from './browser.ts'
+import { signInAs } from './sign-in-as.ts'
 
 let site: Site
 let browser: Browser
@@ -16,25 +17,6 @@ afterAll(async () => {
 
 const searchbox = (page: Page) => page.getByRole('searchbox')
 const heading = (page: Page, name: string | RegExp) => page.getByRole('heading', { level: 1, name }).waitFor()
-
-/** States on this device that the person is qualified, as the Diagnosis page does. */
-async function stateQualified(page: Page): Promise<void> {
-  await page.evaluate(
-    () =>
-      new Promise<void>((resolve, reject) => {
-        const asked = indexedDB.open('tracelamp')
-        asked.onerror = () => reject(asked.error)
-        asked.onsuccess = () => {
-          const tx = asked.result.transaction('settings', 'readwrite')
-          tx.objectStore('settings').put({ key: 'qualified', value: { statedAt: '2026-11-30T00:00:00Z' } })
-          tx.oncomplete = () => {
-            asked.result.close()
-            resolve()
-          }
-        }
-      }),
-  )
-}
 
 describe('search', () => {
   test('reads slips, says so, and marks what it found', async () => {
@@ -98,6 +80,7 @@ describe('links', () => {
     await page.locator('.used-in a[href="/articles/open-ground"]').click()
     await page.locator('.used-in a[href="/tests/receptacle-volts"]').click()
     await heading(page, 'Three readings at one receptacle')
+    await page.locator('.knowledge-side summary').click()
     await page.locator('.used-in a[href="/articles/open-ground"]').click()
     await page.waitForURL('**/articles/open-ground')
     await page.goto('/tests/receptacle-volts')
@@ -110,7 +93,7 @@ describe('links', () => {
     const { page, end } = await visit(browser, site)
     await page.goto('/articles')
     await page.getByRole('heading', { level: 2, name: 'Tests' }).waitFor()
-    await stateQualified(page)
+    await signInAs(page, 'tech')
     await page.reload()
     const hrefs = (selector: string) =>
       page.locator(selector).evaluateAll((all) => all.map((one) => one.getAttribute('href')!))
@@ -140,11 +123,15 @@ describe('links', () => {
 })
 
 describe('for qualified people only', () => {
-  test('is named, not opened, until this device’s person has stated to be qualified', async () => {
+  test('is not even named until a tech is signed in', async () => {
     const { page, end } = await visit(browser, site)
     await page.goto('/articles/double-bond')
-    await page.getByText('For qualified people').first().waitFor()
+    await heading(page, 'No article of that name')
+    await page.getByText('An article for qualified people opens once you have signed in.').waitFor()
     expect(await page.locator('.prose').count()).toBe(0)
+    await page.goto('/articles')
+    await page.getByRole('heading', { level: 2, name: 'Tests' }).waitFor()
+    expect(await page.locator('a[href^="/articles/double-bond"]').count()).toBe(0)
     await page.goto('/tests/panel-volts')
     await heading(page, 'Three readings at the panel’s buses')
     expect(await page.getByRole('heading', { name: 'Steps' }).count()).toBe(0)
@@ -152,7 +139,7 @@ describe('for qualified people only', () => {
     await heading(page, /^Neutral floating/)
     expect(await page.getByRole('heading', { name: 'Proving the repair' }).count()).toBe(0)
 
-    await stateQualified(page)
+    await signInAs(page, 'tech')
     await page.goto('/articles/double-bond')
     await page.locator('.prose h2').first().waitFor()
     await page.goto('/tests/panel-volts')
@@ -166,7 +153,7 @@ describe('for qualified people only', () => {
     const { page, end } = await visit(browser, site)
     await page.goto('/articles')
     await page.getByRole('heading', { level: 2, name: 'Tests' }).waitFor()
-    await stateQualified(page)
+    await signInAs(page, 'tech')
     await page.goto('/causes/floating-neutral')
     await page.getByText('Installing a bond: held back').first().waitFor()
     const shown = await page.getByRole('main').innerText()
@@ -243,8 +230,8 @@ describe('axe finds nothing and nothing stands over the edge', () => {
       '/tests/receptacle-volts',
       '/editions',
     ])
-    await stateQualified(page)
-    await look(['/articles/double-bond', '/causes/floating-neutral', '/tests/source-bulb'])
+    await signInAs(page, 'tech')
+    await look(['/articles', '/articles/double-bond', '/causes/floating-neutral', '/tests/source-bulb'])
     expect(complaints).toEqual([])
     expect(strays).toEqual([])
     await end()

@@ -1,6 +1,6 @@
 // @vitest-environment jsdom
 import { describe, expect, test } from 'vitest'
-import { proseOf, targetOf } from '../../src/articles/prose-source.ts'
+import { proseOf, signalOf, targetOf } from '../../src/articles/prose-source.ts'
 import { hostileMarkdown } from './hostile-markdown.ts'
 
 const allowed = new Set(
@@ -66,6 +66,24 @@ describe('where links lead', () => {
     '',
     'https://',
   ])('%j leads nowhere', (href) => expect(targetOf(href)).toBeUndefined())
+})
+
+describe('signal panels', () => {
+  const words = (markdown: string) =>
+    [...proseOf(markdown).querySelectorAll('blockquote')].map(
+      (one) => signalOf(one) ?? one.textContent?.trim(),
+    )
+  test('danger goes before what follows it closely', () => {
+    expect(
+      words('> **Notice:** d\n\n> **Warning:** b\n\n> **Danger:** a\n\n> said\n\n> **Caution:** c'),
+    ).toEqual(['danger', 'warning', 'caution', 'notice', 'said'])
+  })
+  test('and stays where words stand between', () =>
+    expect(words('> **Warning:** b\n\nWords.\n\n> **Danger:** a')).toEqual(['warning', 'danger']))
+  test('a word inside a sentence is no signal', () => {
+    expect(words('> The **Danger:** of it')).toEqual(['The Danger: of it'])
+    expect(words('> **Dangerous** it is')).toEqual(['Dangerous it is'])
+  })
 })
 
 describe('what an article may hold', () => {

@@ -1,6 +1,5 @@
 import { readFile } from 'node:fs/promises'
 import { fileURLToPath } from 'node:url'
-import { chromium } from 'playwright-core'
 import type { Browser } from 'playwright-core'
 import { createServer } from 'vite'
 import type { ViteDevServer } from 'vite'
@@ -8,6 +7,7 @@ import { afterAll, beforeAll, expect, test } from 'vitest'
 import { answerCase } from '../../server/commands/answer.ts'
 import { parseLine } from '../../server/commands/read-cases.ts'
 import { starter } from '../edition.ts'
+import { openBrowser } from './browser.ts'
 
 const root = fileURLToPath(new URL('../../', import.meta.url))
 /** Runs in the page; as text, because the test runner rewrites imports it can see. */
@@ -38,19 +38,7 @@ beforeAll(async () => {
   vite.middlewares.use('/blank', (_req, res) => {
     res.setHeader('content-type', 'text/html').end('<!doctype html><title>blank</title>')
   })
-  browser = await chromium.launch({
-    executablePath: '/usr/bin/chromium',
-    args: [
-      '--headless',
-      '--no-sandbox',
-      '--disable-gpu',
-      '--disable-quic',
-      '--no-first-run',
-      '--disable-background-networking',
-      '--disable-component-update',
-      '--disable-sync',
-    ],
-  })
+  browser = await openBrowser()
 })
 afterAll(async () => {
   await browser?.close()

@@ -1,3 +1,5 @@
+import { comparisons } from '../../edition/condition.ts'
+import type { Condition } from '../../edition/condition.ts'
 import type { Edition } from '../../edition/open.ts'
 import type { Facts } from '../../findings/facts.ts'
 import type { Sheet } from '../../findings/sheet.ts'
@@ -76,7 +78,9 @@ export function misfitOf(
   }
 }
 
-function findingBehind(when: unknown, facts: Facts): string | undefined {
-  const names = JSON.stringify(when).match(/"fact":"[^"]+"/g) ?? []
-  return names.map((n) => facts.get(n.slice(8, -1))?.from[0]).find((id) => id !== undefined)
+/** The first finding that a rule's condition rests on. */
+function findingBehind(when: Condition, facts: Facts): string | undefined {
+  return comparisons(when)
+    .map(({ fact }) => facts.get(fact)?.from[0])
+    .find((id) => id !== undefined)
 }

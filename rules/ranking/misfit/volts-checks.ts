@@ -1,7 +1,7 @@
 import { tenfold, triples } from './contradiction.ts'
 import type { Check, Look, Triple } from './contradiction.ts'
 
-const pairName = { hn: 'hot–neutral', ng: 'neutral–ground', hg: 'hot–ground' } as const
+const pairName = { hn: 'Hot–neutral', ng: 'Neutral–ground', hg: 'Hot–ground' } as const
 type Pair = keyof typeof pairName
 const pairs: readonly Pair[] = ['hn', 'ng', 'hg']
 

@@ -5,7 +5,7 @@ import type { Weight } from '../../../rules/triangle/weight.ts'
 
 const at = ([x, y]: Point) => `${x.toFixed(1)} ${y.toFixed(1)}`
 /** A path through points. */
-export const through = (points: readonly Point[]): string => `M${points.map(at).join('L')}`
+const through = (points: readonly Point[]): string => `M${points.map(at).join('L')}`
 
 /** A straight stroke from one point to another. */
 export function Stroke({ line: [a, b], look }: { line: Line; look: string }) {

@@ -1,0 +1,1 @@
+export function runningDatabase(): string | undefined
