@@ -6,7 +6,7 @@ import type { Log } from './log.ts'
 const pathOf = (request: { url?: string; originalUrl?: string }) =>
   (request.originalUrl ?? request.url ?? '')
     .replace(/[?#].*$/s, '')
-    .replace(/(\/(?:links|shared)\/)[^/]+/gi, '$1…')
+    .replace(/(\/(?:links|shared|sheets(?=\/[\w-]{40}))\/)[^/]+/gi, '$1…')
 
 /** One line a request: method, path, status, milliseconds. No header, cookie, query or body is ever written. */
 export const requestLog = (log: Log) =>

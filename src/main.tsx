@@ -19,4 +19,7 @@ createRoot(root).render(
 
 // The check must open in a cellar: its part is fetched while there still is a network.
 const whenIdle = window.requestIdleCallback ?? ((run: () => void) => setTimeout(run, 1500))
-whenIdle(() => void bringTriage().catch(() => undefined))
+whenIdle(() => {
+  void bringTriage().catch(() => undefined)
+  void import('./sheets/send-sheets.ts').then(({ keepSending }) => keepSending()).catch(() => undefined)
+})

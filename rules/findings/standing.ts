@@ -28,7 +28,9 @@ const inOrder = (_: string, value: unknown): unknown =>
   typeof value === 'object' && value !== null && !Array.isArray(value)
     ? Object.fromEntries(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)))
     : value
-const saysOf = (entry: Entered) => JSON.stringify(entry.value, inOrder)
+
+/** What a value says, as text: two that say the same give the same. */
+export const inWriting = (value: unknown): string => JSON.stringify(value, inOrder)
 
 const lastFirst = (a: Entered, b: Entered): number =>
   Date.parse(b.deviceAt) - Date.parse(a.deviceAt) || (a.id < b.id ? 1 : -1)
@@ -48,7 +50,7 @@ export function standing<Entry extends Entered>(entries: readonly Entry[]): Stan
     }
   return [...heads.values()].map((some) => {
     const [entry, ...rest] = [...some].sort(lastFirst) as [Entry, ...Entry[]]
-    const against = rest.filter((other) => saysOf(other) !== saysOf(entry))
+    const against = rest.filter((other) => inWriting(other.value) !== inWriting(entry.value))
     return { mode: entry.mode, finding: entry.finding, entry, against }
   })
 }

@@ -107,6 +107,7 @@ export const SheetOpened = z.object({
 /** GET /api/sheets */
 export const SheetsQuery = z.object({
   q: z._default(z.string().check(z.maxLength(200, 'must have 200 characters or fewer')), ''),
+  kind: z.optional(Kind),
   /** `next` of the page before. */
   after: z.optional(
     z

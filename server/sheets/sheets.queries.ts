@@ -191,10 +191,12 @@ export async function findResult(db: Db | Tx, sheetId: string): Promise<unknown>
   return row?.result
 }
 
+type Wanted = { words: string; kind: SheetHead['kind'] | undefined }
 type After = { changedAt: Date; id: string }
 
 /** A page of somebody's own sheets, the last changed first. */
-export function listSheets(db: Db, ownerId: string, words: string, after: After | undefined, most: number) {
+export function listSheets(db: Db, ownerId: string, wanted: Wanted, after: After | undefined, most: number) {
+  const { words, kind } = wanted
   const like = `%${words.replace(/[\\%_]/g, '\\$&')}%`
   return db
     .selectFrom('sheet as s')
@@ -215,6 +217,7 @@ export function listSheets(db: Db, ownerId: string, words: string, after: After 
     ])
     .where('s.owner_id', '=', ownerId)
     .where('s.title', 'ilike', like)
+    .$if(kind !== undefined, (query) => query.where('s.kind', '=', kind!))
     .$if(after !== undefined, (query) =>
       query.where(sql<boolean>`(s.changed_at, s.id) < (${after?.changedAt}, ${after?.id}::uuid)`),
     )

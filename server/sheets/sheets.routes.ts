@@ -51,11 +51,11 @@ export function sheetRoutes({ db, events, count }: Parts): Router {
 
   return Router()
     .get('/sheets', allow('person'), async (req, res) => {
-      const { q, after } = readQuery(req, SheetsQuery)
+      const { q, kind, after } = readQuery(req, SheetsQuery)
       const [changedAt, id] = after?.split('_') ?? []
       const from =
         changedAt === undefined || id === undefined ? undefined : { changedAt: new Date(changedAt), id }
-      const found = await listSheets(db, signedIn(req).id, q, from, perPage + 1)
+      const found = await listSheets(db, signedIn(req).id, { words: q, kind }, from, perPage + 1)
       const sheets = found
         .slice(0, perPage)
         .map((sheet) => ({ ...sheet, changedAt: sheet.changedAt.toISOString() }))

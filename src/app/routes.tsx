@@ -34,6 +34,8 @@ export const routes: RouteObject[] = [
             ],
           },
           { path: 'diagnosis', lazy: () => import('../diagnosis/diagnosis.page.tsx') },
+          { path: 'sheets/:token', lazy: () => import('../diagnosis/shared-sheet.page.tsx') },
+          { path: 'not-sent', lazy: () => import('../sheets/not-sent.page.tsx') },
           { path: 'articles', lazy: () => import('../articles/articles.page.tsx') },
           { path: 'articles/:slug', lazy: () => import('../articles/article.page.tsx') },
           { path: 'causes/:id', lazy: () => import('../articles/cause.page.tsx') },

@@ -10,6 +10,7 @@ import { useToast } from '../ui/toast.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { GroundGlyph } from '../ui/where-ground-sits/ground-glyph.tsx'
 import { numberIn } from './raw-sheet.ts'
+import { sentSheet } from './sent-sheet.ts'
 import { isTaken, readingOf, SheetContent } from './sheet-content.ts'
 
 type Listed = { sheets: readonly SheetDoc[] } | 'pending' | 'failed'
@@ -52,7 +53,9 @@ function Row({ doc }: { doc: SheetDoc }) {
     const changedAt = new Date().toISOString()
     const title = `${doc.title}, copy`
     const content = read.success ? { ...read.data, title, past: [] } : doc.content
-    await saveSheet({ ...doc, id: newId(), title, changedAt, content })
+    const { sends: _, ...rest } = doc
+    const sends = read.success && { sends: sentSheet({ ...read.data, title }) }
+    await saveSheet({ ...rest, id: newId(), title, changedAt, content, ...sends })
   }
   const remove = async () => {
     await removeSheet(doc.id)

@@ -1,4 +1,17 @@
+import type { RawFinding, RawSheet } from '../../rules/findings/sheet.ts'
 import { database, strict } from './database.ts'
+import { putInOutbox } from './outbox.ts'
+import type { Received } from './outbox.ts'
+
+/** One finding as it goes to the server. */
+export type SentFinding = {
+  mode: string
+  finding: string
+  /** Null while what is typed counts as nothing. */
+  value: RawFinding | null
+  /** The same as its page keeps it; null when the value says all. */
+  kept: unknown
+}
 
 /**
  * A findings sheet as it lies on this device. `content` belongs to the feature that wrote it, which checks it
@@ -13,6 +26,8 @@ export type SheetDoc<Content = unknown> = {
   /** Device time, ISO 8601. */
   changedAt: string
   content: Content
+  /** The same for the server, which knows no page's content. Missing in what an older build wrote. */
+  sends?: { context: RawSheet['context']; findings: readonly SentFinding[] }
 }
 
 const channel = 'BroadcastChannel' in globalThis ? new BroadcastChannel('tracelamp-sheets') : undefined
@@ -21,7 +36,8 @@ const announce = () => {
   for (const listener of listeners) listener()
 }
 channel?.addEventListener('message', announce)
-function changed(): void {
+/** Tells this tab and the others that sheets, or what is to be sent of them, are not what they were. */
+export function sayChanged(): void {
   announce()
   channel?.postMessage('changed')
 }
@@ -33,13 +49,15 @@ export function onSheetsChanged(listener: () => void): () => void {
 }
 
 /**
- * Keeps a sheet. Resolves once it lies on the disk: wait for it before drawing what was typed.
+ * Keeps a sheet, and in the same step notes what the server must be told of it. Resolves once it lies on the disk: wait
+ * for it before drawing what was typed.
+ * @param received what others wrote that this doc holds now, so that it isn't sent back as ours
  * @throws DOMException QuotaExceededError when the device is full, or another when it keeps nothing at all
  */
-export async function saveSheet(doc: SheetDoc): Promise<void> {
-  const tx = (await database()).transaction('sheets', 'readwrite', strict)
-  await Promise.all([tx.store.put(doc), tx.done])
-  changed()
+export async function saveSheet(doc: SheetDoc, received: readonly Received[] = []): Promise<void> {
+  const tx = (await database()).transaction(['sheets', 'outbox', 'sendings', 'settings'], 'readwrite', strict)
+  await Promise.all([tx.objectStore('sheets').put(doc), putInOutbox(tx, doc, received), tx.done])
+  sayChanged()
 }
 
 /** One sheet, or undefined when this device has none of that id. */
@@ -59,5 +77,5 @@ export async function listSheets(kind?: SheetDoc['kind']): Promise<SheetDoc[]> {
 export async function removeSheet(id: string): Promise<void> {
   const tx = (await database()).transaction('sheets', 'readwrite', strict)
   await Promise.all([tx.store.delete(id), tx.done])
-  changed()
+  sayChanged()
 }

@@ -41,7 +41,13 @@ const at = (minute: number) => new Date(Date.UTC(2026, 10, 30, 9, minute)).toISO
 const headOf = (more: Partial<SheetHead> = {}): SheetHead => ({
   kind: 'diagnosis',
   title: 'Cabin above the creek',
-  context: { source: 'power-station', system: '120', wiring: 'panel', mode: 'battery', meterOhms: 10_000_000 },
+  context: {
+    source: 'power-station',
+    system: '120',
+    wiring: 'panel',
+    mode: 'battery',
+    meterOhms: 10_000_000,
+  },
   edition: starterBytes.hash,
   madeAt: at(0),
   changedAt: at(0),
@@ -289,6 +295,8 @@ test('my sheets: one’s own alone, the last changed first, by words of their na
     (await list(`q=${encodeURIComponent(words)}`)).sheets.map((sheet) => sheet.title)
   expect(await titles('OFF_grid')).toEqual(['Site 7 100% off_grid'])
   expect(await titles('%')).toEqual(['Site 7 100% off_grid'])
+  expect((await list('kind=triage')).sheets).toEqual([])
+  expect((await list('kind=diagnosis')).sheets).toHaveLength(50)
   expect((await admin.get('/api/sheets?after=nonsense')).status).toBe(400)
 
   const id = first.sheets[0]!.id

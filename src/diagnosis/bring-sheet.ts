@@ -1,0 +1,27 @@
+import type { Edition } from '../../rules/edition/open.ts'
+import type { SheetOpened } from '../../server/sheets/sheets.contract.ts'
+import { newId } from '../offline/new-id.ts'
+import { alterSending } from '../offline/outbox.ts'
+import { loadSheet, saveSheet } from '../offline/sheets.ts'
+import { contentFrom, sentSheet, whatStands } from './sent-sheet.ts'
+
+/**
+ * Keeps a sheet of the server's on this device, as it is there.
+ * @param link by which it came; one's own needs none
+ * @returns its id here
+ */
+export async function bringSheet(
+  edition: Edition,
+  opened: SheetOpened,
+  link: string | undefined,
+): Promise<string> {
+  // A homeowner's own check may lie on this very device under the id it has there.
+  const id = (await loadSheet(opened.id)) === undefined ? opened.id : newId()
+  const came = whatStands(opened.entries)
+  const content = contentFrom(edition, opened, came)
+  await alterSending(id, { remote: opened.id, there: true, ...(link !== undefined && { link }) })
+  const { title, edition: hash, changedAt } = opened
+  const doc = { id, kind: 'diagnosis', title, edition: hash, changedAt } as const
+  await saveSheet({ ...doc, content, sends: sentSheet(content) }, came)
+  return id
+}
