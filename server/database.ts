@@ -65,7 +65,12 @@ export type Database = {
     device_at: Date
     server_at: Stamp
   }
-  sheet_result: { sheet_id: string; edition_hash: string; result: Json; made_at: ColumnType<Date, never, Date> }
+  sheet_result: {
+    sheet_id: string
+    edition_hash: string
+    result: Json
+    made_at: ColumnType<Date, never, Date>
+  }
   sheet_link: { token_hash: string; sheet_id: string; made_at: Stamp; taken_back_at: Date | null }
   sign_in_try: { key: string; points: number; expire: number | null }
 }

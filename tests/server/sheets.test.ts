@@ -41,7 +41,13 @@ const at = (minute: number) => new Date(Date.UTC(2026, 10, 30, 9, minute)).toISO
 const headOf = (more: Partial<SheetHead> = {}): SheetHead => ({
   kind: 'diagnosis',
   title: 'Cabin above the creek',
-  context: { source: 'power-station', system: '120', wiring: 'panel', mode: 'battery', meterOhms: 10_000_000 },
+  context: {
+    source: 'power-station',
+    system: '120',
+    wiring: 'panel',
+    mode: 'battery',
+    meterOhms: 10_000_000,
+  },
   edition: starterBytes.hash,
   madeAt: at(0),
   changedAt: at(0),
