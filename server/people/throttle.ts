@@ -19,6 +19,8 @@ const limits = {
   device: { points: 10, duration: hour },
   password: { points: 10, duration: hour },
   signUp: { points: 20, duration: hour },
+  // Findings sheets begun without an account: a household, or a campground behind one address.
+  sheet: { points: 60, duration: hour },
 } as const
 type Kind = keyof typeof limits
 
@@ -94,5 +96,6 @@ export function openThrottle(db: Db, secret: string) {
       return async () => void (await limiters.password.reward(sign(personId), 1))
     },
     signUp: (address: string | undefined) => take([['signUp', networkOf(address)]]),
+    sheet: (address: string | undefined) => take([['sheet', networkOf(address)]]),
   }
 }

@@ -49,6 +49,8 @@ export const routes: RouteObject[] = [
             ],
           },
           { path: 'diagnosis', lazy: diagnosis },
+          { path: 'sheets/:token', lazy: () => import('../diagnosis/shared-sheet.page.tsx') },
+          { path: 'not-sent', lazy: () => import('../sheets/not-sent.page.tsx') },
           { path: 'articles', lazy: articles },
           { path: 'articles/:slug', lazy: article },
           { path: 'causes/:id', lazy: cause },

@@ -3,6 +3,7 @@ import { EditionNotHere, useEdition } from '../editions/edition.api.ts'
 import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Waiting } from '../ui/waiting.tsx'
+import { Others } from './others.tsx'
 import { SheetDesk } from './sheet-desk.tsx'
 import { useSheet } from './use-sheet.ts'
 import type { OpenSheet } from './use-sheet.ts'
@@ -48,7 +49,12 @@ function OnItsEdition({ sheet }: { sheet: OpenSheet }) {
         <Waiting what="the edition" />
       </Bare>
     )
-  return <SheetDesk sheet={sheet} edition={edition} info={info} />
+  return (
+    <>
+      <Others sheet={sheet} edition={edition} />
+      <SheetDesk sheet={sheet} edition={edition} info={info} />
+    </>
+  )
 }
 
 /** One findings sheet, by its id on this device. */
