@@ -65,7 +65,7 @@ export function createApp({ db, feed, sheetFeed, log, config, pages = dist }: Ap
     articleRoutes(db),
     accountRoutes(db, throttle),
     peopleRoutes(db),
-    sheetRoutes({ db, events: sheetStreams, count: throttle.sheet }),
+    sheetRoutes({ db, events: sheetStreams, count: { sheet: throttle.sheet, link: throttle.sheetLink } }),
     noSuchRoute,
   )
   if (!config.worker) app.use(workerOff)

@@ -33,7 +33,7 @@ async function main(): Promise<void> {
   const feed = new EditionFeed()
   const unfollow = followEditions(config.databaseUrl, db, feed, log)
   const sheetFeed = new SheetFeed()
-  const deafen = listen(config.databaseUrl, 'sheet_changed', (id) => sheetFeed.announce(id), log)
+  const deafen = listen(config.databaseUrl, 'look_again', (id) => sheetFeed.announce(id), log)
   const { app, close } = createApp({ db, feed, sheetFeed, log, config })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {

@@ -21,6 +21,7 @@ const limits = {
   signUp: { points: 20, duration: hour },
   // Findings sheets begun without an account: a household, or a campground behind one address.
   sheet: { points: 60, duration: hour },
+  sheetLink: { points: 60, duration: hour },
 } as const
 type Kind = keyof typeof limits
 
@@ -97,5 +98,6 @@ export function openThrottle(db: Db, secret: string) {
     },
     signUp: (address: string | undefined) => take([['signUp', networkOf(address)]]),
     sheet: (address: string | undefined) => take([['sheet', networkOf(address)]]),
+    sheetLink: (address: string | undefined) => take([['sheetLink', networkOf(address)]]),
   }
 }

@@ -3,37 +3,57 @@ import type { SheetFeed } from './sheet-feed.ts'
 
 const heartbeatMs = 25_000
 
+type Followed = {
+  sheet: string
+  /** Who is signed in: when their session ends, so does the stream. */
+  person: string | undefined
+  /** Looks anew each time: a link may have been taken back, a session have ended. */
+  mayRead: () => Promise<boolean>
+}
+
 /**
  * Server-sent events of one sheet: `changed` once the page is connected and whenever something is new, upon which it
- * asks for the sheet; `ended` when it may not be read any more. `close` ends every open stream.
+ * asks for the sheet; `ended` when it may not be read any more. `close` ends every open stream, and each that is opened
+ * after that.
  */
 export function sheetEvents(feed: SheetFeed) {
   const open = new Set<Response>()
-  /** @param mayRead looks anew at each change: a link may have been taken back */
-  const follow = (res: Response, sheetId: string, mayRead: () => Promise<boolean>): void => {
+  let closed = false
+  const follow = (res: Response, { sheet, person, mayRead }: Followed): void => {
     res.writeHead(200, {
       'Content-Type': 'text/event-stream; charset=utf-8',
       'Cache-Control': 'no-store, no-transform',
       'X-Accel-Buffering': 'no',
     })
+    if (closed) return void res.end()
     res.write('retry: 3000\n\n')
-    const tell = async () => {
+    const say = (event: string) => res.write(`event: ${event}\ndata: {}\n\n`)
+    /** A database that is just away ends nothing. */
+    const look = async (then: () => void) => {
       const may = await mayRead().catch(() => true)
-      if (res.writableEnded) return
-      res.write(`event: ${may ? 'changed' : 'ended'}\ndata: {}\n\n`)
-      if (!may) res.end()
+      if (res.writableEnded || res.destroyed) return
+      if (may) return then()
+      say('ended')
+      res.end()
     }
-    void tell()
-    const unsubscribe = feed.subscribe(sheetId, () => void tell())
-    const heartbeat = setInterval(() => res.write(': still here\n\n'), heartbeatMs)
+    const tell = () => void look(() => say('changed'))
+    const stillHere = () => void look(() => res.write(': still here\n\n'))
+    const unsubscribe = [feed.subscribe(sheet, tell)]
+    if (person !== undefined) unsubscribe.push(feed.subscribe(person, stillHere))
+    const heartbeat = setInterval(stillHere, heartbeatMs)
     open.add(res)
+    tell()
     res.on('close', () => {
-      unsubscribe()
+      for (const end of unsubscribe) end()
       clearInterval(heartbeat)
       open.delete(res)
     })
   }
-  return { follow, close: () => open.forEach((res) => res.end()) }
+  const close = () => {
+    closed = true
+    for (const res of open) res.end()
+  }
+  return { follow, close }
 }
 
 export type SheetEvents = ReturnType<typeof sheetEvents>

@@ -82,6 +82,8 @@ export const SheetsPage = z.object({
       changedAt: Moment,
       findings: z.int(),
       stops: z.boolean(),
+      /** Somebody holds a link to it. */
+      link: z.boolean(),
     }),
   ),
   /** Names the next page; null on the last. */

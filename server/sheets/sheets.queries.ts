@@ -76,6 +76,16 @@ export async function changeSheet(tx: Tx, id: string, head: SheetHead): Promise<
     .execute()
 }
 
+/** Gives a sheet that was begun without an account to whoever holds its key and has one now. */
+export async function adoptSheet(tx: Tx, id: string, ownerId: string): Promise<void> {
+  await tx
+    .updateTable('sheet')
+    .set({ owner_id: ownerId })
+    .where('id', '=', id)
+    .where('owner_id', 'is', null)
+    .execute()
+}
+
 /** Whether an edition of that hash is kept here. */
 export async function isEdition(db: Db | Tx, hash: string): Promise<boolean> {
   return (
@@ -215,6 +225,9 @@ export function listSheets(db: Db, ownerId: string, wanted: Wanted, after: After
         'findings',
       ),
       sql<boolean>`coalesce(jsonb_array_length(r.result -> 'stops') > 0, false)`.as('stops'),
+      sql<boolean>`exists (select from sheet_link as l where l.sheet_id = s.id and l.taken_back_at is null)`.as(
+        'link',
+      ),
     ])
     .where('s.owner_id', '=', ownerId)
     .where('s.title', 'ilike', like)
@@ -256,5 +269,5 @@ export async function keepLink(tx: Tx, sheetId: string, tokenHash: string): Prom
 
 /** Tells every server process, once the transaction ends, that a sheet or its link is not what it was. */
 export async function sayChanged(tx: Tx, sheetId: string): Promise<void> {
-  await sql`select pg_notify('sheet_changed', ${sheetId})`.execute(tx)
+  await sql`select pg_notify('look_again', ${sheetId})`.execute(tx)
 }

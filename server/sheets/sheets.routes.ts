@@ -3,7 +3,7 @@ import type { Request } from 'express'
 import type { Db } from '../database.ts'
 import { Problem, notFound } from '../problem.ts'
 import { readBody, readId, readQuery } from '../read.ts'
-import { allow, mayReadQualified, personOf, signedIn } from '../session.ts'
+import { allow, mayReadQualified, personOf, signedIn, stillSignedIn } from '../session.ts'
 import { newToken, tokenHash } from '../token.ts'
 import { openSheet } from './open-sheet.ts'
 import type { SheetEvents } from './sheet-events.ts'
@@ -18,8 +18,8 @@ const perPage = 50
 type Parts = {
   db: Db
   events: SheetEvents
-  /** Counts a sheet begun without an account against the address it comes from. */
-  count: (address: string | undefined) => Promise<void>
+  /** Counts a sheet begun, or a link made, without an account against the address it comes from. */
+  count: Record<'sheet' | 'link', (address: string | undefined) => Promise<void>>
 }
 
 const writerOf = (req: Request) => {
@@ -67,7 +67,7 @@ export function sheetRoutes({ db, events, count }: Parts): Router {
       await writing.putHead(id, head, {
         isOwn: (sheet) => isOwn(req, sheet),
         owner: { ownerId: person?.id ?? null, keyHash: keyHash ?? null },
-        count: () => (person === undefined ? count(req.ip) : Promise.resolve()),
+        count: () => (person === undefined ? count.sheet(req.ip) : Promise.resolve()),
       })
       res.set('Cache-Control', 'no-store').json(SheetNamed.parse({ id }))
     })
@@ -82,10 +82,11 @@ export function sheetRoutes({ db, events, count }: Parts): Router {
     })
     .get('/sheets/:id/events', async (req, res) => {
       const { id } = await ownSheet(req)
-      events.follow(res, id, () => Promise.resolve(true))
+      events.follow(res, { sheet: id, person: personOf(req)?.id, mayRead: stillSignedIn(db, req) })
     })
     .post('/sheets/:id/link', async (req, res) => {
       const { id } = await ownSheet(req)
+      if (personOf(req) === undefined) await count.link(req.ip)
       const token = newToken()
       await db.transaction().execute(async (tx) => {
         await takeBackLink(tx, id)
@@ -115,6 +116,9 @@ export function sheetRoutes({ db, events, count }: Parts): Router {
     .get('/shared/:token/events', async (req, res) => {
       const { id } = await byLink(req)
       const hash = tokenHash(req.params.token)
-      events.follow(res, id, async () => (await findByLink(db, hash)) !== undefined)
+      const holds = async () => (await findByLink(db, hash)) !== undefined
+      const still = stillSignedIn(db, req)
+      const mayRead = async () => (await holds()) && (await still())
+      events.follow(res, { sheet: id, person: personOf(req)?.id, mayRead })
     })
 }

@@ -7,6 +7,7 @@ import { SheetOpened } from './sheets.contract.ts'
 import {
   addEntries,
   addSheet,
+  adoptSheet,
   changeSheet,
   dropResult,
   entriesElsewhere,
@@ -20,8 +21,8 @@ import {
 } from './sheets.queries.ts'
 import type { SheetRow } from './sheets.queries.ts'
 
-/** More than anybody enters by hand; whoever holds a device's key must not fill the disk. */
-const mostEntries = 5000
+/** More than anybody enters by hand. Who has no account must not fill the disk either. */
+const mostEntries = { account: 5000, none: 500 }
 
 const Kept = SheetOpened.shape
 
@@ -80,6 +81,7 @@ export function sheetWriting(db: Db) {
           if (before.kind !== head.kind) throw new Problem('conflict', 'A sheet stays of its kind.')
           if (before.kind === 'diagnosis' && before.edition !== head.edition)
             throw new Problem('conflict', 'A sheet stays on the edition it was begun with.')
+          if (before.ownerId === null && owner.ownerId !== null) await adoptSheet(tx, id, owner.ownerId)
           await changeSheet(tx, id, head)
         }
         await computeAnew(tx, id, opened)
@@ -88,7 +90,7 @@ export function sheetWriting(db: Db) {
 
     /** Adds entries. Those sent before change nothing. */
     async add(
-      { id: sheetId, edition: hash }: Pick<SheetRow, 'id' | 'edition'>,
+      { id: sheetId, edition: hash, ownerId }: Pick<SheetRow, 'id' | 'edition' | 'ownerId'>,
       entries: readonly NewEntry[],
       by: { id: string | null; name: string | null },
     ): Promise<void> {
@@ -99,7 +101,7 @@ export function sheetWriting(db: Db) {
         if ((await entriesElsewhere(tx, sheetId, ids)).length > 0)
           throw new Problem('conflict', 'An entry of that id stands on another sheet.')
         const there = await listEntries(tx, sheetId)
-        if (there.length + entries.length > mostEntries)
+        if (there.length + entries.length > mostEntries[ownerId === null ? 'none' : 'account'])
           throw new Problem('conflict', 'This sheet is full. Begin another.')
         if ((await addEntries(tx, sheetId, entries, by)) === 0) return
         const last = entries.map((entry) => entry.deviceAt).reduce((a, b) => (a > b ? a : b))

@@ -3,6 +3,8 @@ import type { SheetOpened } from '../../server/sheets/sheets.contract.ts'
 import { newId } from '../offline/new-id.ts'
 import { alterSending } from '../offline/unsent.ts'
 import { saveSheet } from '../offline/sheets.ts'
+import type { SheetDoc } from '../offline/sheets.ts'
+import { headSays } from '../offline/outbox.ts'
 import { isTakenHere } from '../offline/sheets-here.ts'
 import { contentFrom, sentSheet, whatStands } from './sent-sheet.ts'
 
@@ -20,9 +22,19 @@ export async function bringSheet(
   const id = (await isTakenHere(opened.id)) ? newId() : opened.id
   const came = whatStands(opened.entries)
   const content = contentFrom(edition, opened, came)
-  await alterSending(id, { remote: opened.id, there: true, ...(link !== undefined && { link }) })
   const { title, edition: hash, changedAt } = opened
-  const doc = { id, kind: 'diagnosis', title, edition: hash, changedAt } as const
-  await saveSheet({ ...doc, content, sends: sentSheet(content) }, came)
+  const doc: SheetDoc = {
+    id,
+    kind: 'diagnosis',
+    title,
+    edition: hash,
+    changedAt,
+    content,
+    sends: sentSheet(content),
+  }
+  // As it stands there: it need not be told.
+  const stands = { remote: opened.id, there: true, head: headSays(doc), last: {}, ended: false }
+  await alterSending(id, { ...stands, link })
+  await saveSheet(doc, came)
   return id
 }

@@ -69,16 +69,14 @@ export function Others({ sheet, edition }: { sheet: OpenSheet; edition: Edition 
       { mode, finding, ids, entry: entryFrom(entry), sent: { value: null, kept: 'not decided' } },
     ])
   }
-  if (!shared && against.length === 0) return null
+  if (!shared && !ended && against.length === 0) return null
   return (
     <aside className="mx-auto mt-4 max-w-[1240px] px-4" aria-label="Others on this sheet">
-      {shared && (
-        <p className="text-small text-ink-2" role="status">
-          {ended
-            ? 'The link was taken back. What is here stays on this device; nothing more is sent.'
-            : 'This sheet came by a link. What either of you enters shows for both within seconds.'}
-        </p>
-      )}
+      <p className="text-small text-ink-2" role="status">
+        {ended
+          ? 'The link was taken back. This sheet goes on as your own, with all that is on it; the homeowner sees nothing more of it.'
+          : shared && 'This sheet came by a link. What either of you enters shows for both within seconds.'}
+      </p>
       {against.length > 0 && (
         <SignalPanel word="caution" className="mt-3">
           <p>

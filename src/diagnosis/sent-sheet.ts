@@ -47,13 +47,15 @@ export function sentSheet(content: SheetContent): NonNullable<SheetDoc['sends']>
 }
 
 /** An entry of the server's as this page keeps one; undefined where nothing stands. */
-export function entryFrom({ value, kept, by }: Pick<SheetEntry, 'value' | 'kept' | 'by'>): Entry | undefined {
+export function entryFrom({ value, kept }: Pick<SheetEntry, 'value' | 'kept'>): Entry | undefined {
   const read = Entry.safeParse(kept)
   if (read.success) return read.data
   if (value === null) return undefined
-  if (typeof value === 'string') return { kind: 'observation', value, by: by === null ? 'owner' : 'tech' }
-  if (typeof value === 'number') return { kind: 'reading', text: String(value) }
-  const own = value.meterOhms === undefined ? {} : { meterOhms: value.meterOhms }
+  // Only a homeowner's check keeps nothing beside the value.
+  if (typeof value === 'string') return { kind: 'observation', value, by: 'owner' }
+  const note = 'Read by the homeowner'
+  if (typeof value === 'number') return { kind: 'reading', text: String(value), note }
+  const own = { note, ...(value.meterOhms !== undefined && { meterOhms: value.meterOhms }) }
   if ('overLimit' in value) return { kind: 'reading', text: 'OL', ...own }
   const [lower, upper] = value.between ?? []
   return lower === undefined || upper === undefined

@@ -1,16 +1,18 @@
 import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
 import { useNavigate } from 'react-router-dom'
-import type { Edition } from '../../rules/edition/open.ts'
+import type { SheetsPage } from '../../server/sheets/sheets.contract.ts'
 import { listSheets } from '../offline/sheets-here.ts'
 import { getSending } from '../offline/unsent.ts'
-import { mySheetsQuery, openOwn } from '../sheets/sheets.api.ts'
+import { mySheetsQuery } from '../sheets/sheets.api.ts'
 import { Button } from '../ui/button.tsx'
 import { Failed } from '../ui/failed.tsx'
 import { Rail } from '../ui/rail.tsx'
 import { SearchBox } from '../ui/search-box.tsx'
 import { Waiting } from '../ui/waiting.tsx'
-import { bringSheet } from './bring-sheet.ts'
+import { Bringing } from './bringing.tsx'
+
+type Listed = SheetsPage['sheets'][number]
 
 const day = (moment: string) =>
   new Intl.DateTimeFormat('en-US', { dateStyle: 'medium' }).format(new Date(moment))
@@ -24,24 +26,44 @@ async function idHere(remote: string): Promise<string | undefined> {
   return undefined
 }
 
+function Row({ sheet, onOpen }: { sheet: Listed; onOpen: () => void }) {
+  const { title, findings, changedAt, stops, link } = sheet
+  return (
+    <li className="sheet-row">
+      <div className="min-w-0 flex-1">
+        <b>{title}</b>
+        <p className="text-note text-ink-2">
+          {findings === 1 ? '1 finding' : `${findings} findings`}, changed {day(changedAt)}
+          {stops && ', stopped'}
+          {link && ', has a link'}
+        </p>
+      </div>
+      <Button size="small" label={`Open ${title}`} onPress={onOpen}>
+        Open
+      </Button>
+    </li>
+  )
+}
+
 /** One's own sheets on the server, from whichever device: searched by name, and opened here. */
-export function ServerSheets({ edition, hash }: { edition: Edition | undefined; hash: string | undefined }) {
+export function ServerSheets() {
   const [words, setWords] = useState('')
   const [pages, setPages] = useState(1)
   const [failed, setFailed] = useState<string>()
+  const [bringing, setBringing] = useState<Listed>()
   const navigate = useNavigate()
   const found = useQuery(mySheetsQuery('diagnosis', words.trim(), pages))
   const sheets = found.data?.sheets ?? []
-  const open = async (id: string, title: string, of: string) => {
+  const open = async (sheet: Listed) => {
     setFailed(undefined)
-    const here = await idHere(id)
-    if (here !== undefined) return navigate(`/diagnosis?sheet=${here}`)
-    if (edition === undefined || of !== hash)
-      return setFailed(`“${title}” was begun with an edition that is not open here.`)
-    await navigate(`/diagnosis?sheet=${await bringSheet(edition, await openOwn(id), undefined)}`)
+    const here = await idHere(sheet.id)
+    if (here === undefined) setBringing(sheet)
+    else await navigate(`/diagnosis?sheet=${here}`)
   }
-  const start = (id: string, title: string, of: string) =>
-    void Promise.resolve(open(id, title, of)).catch(() => setFailed(`“${title}” can’t be opened now.`))
+  const fail = (why: string) => {
+    setBringing(undefined)
+    setFailed(why)
+  }
   return (
     <Rail title="My sheets, from every device" className="mt-6">
       <div className="mt-3 max-w-[480px]">
@@ -54,39 +76,43 @@ export function ServerSheets({ edition, hash }: { edition: Edition | undefined; 
         />
       </div>
       {failed !== undefined && <Failed title="Couldn’t open the sheet.">{failed}</Failed>}
-      {found.isPending ? (
-        <Waiting what="my sheets" />
-      ) : found.isError ? (
-        <Failed title="Couldn’t fetch my sheets." onRetry={() => void found.refetch()}>
-          {found.error.message} Those on this device are above.
-        </Failed>
-      ) : sheets.length === 0 ? (
-        <p className="mt-3 text-small text-ink-2">
-          {words.trim() === '' ? 'None sent yet.' : 'None of that title.'}
-        </p>
-      ) : (
-        <ul id="my-sheets" aria-label="My sheets">
-          {sheets.map(({ id, title, changedAt, findings, edition: of, stops }) => (
-            <li key={id} className="sheet-row">
-              <div className="min-w-0 flex-1">
-                <b>{title}</b>
-                <p className="text-note text-ink-2">
-                  {findings === 1 ? '1 finding' : `${findings} findings`}, changed {day(changedAt)}
-                  {stops && ', stopped'}
-                </p>
-              </div>
-              <Button size="small" label={`Open ${title}`} onPress={() => start(id, title, of)}>
-                Open
-              </Button>
-            </li>
-          ))}
-        </ul>
+      {bringing !== undefined && (
+        <Bringing
+          key={bringing.id}
+          id={bringing.id}
+          title={bringing.title}
+          edition={bringing.edition}
+          onFailed={fail}
+        />
       )}
-      {typeof found.data?.next === 'string' && (
-        <Button size="small" className="mt-3" onPress={() => setPages(pages + 1)}>
-          More
-        </Button>
-      )}
+      <div id="my-sheets">
+        {found.isPending ? (
+          <Waiting what="my sheets" />
+        ) : found.isError ? (
+          <Failed title="Couldn’t fetch my sheets." onRetry={() => void found.refetch()}>
+            {found.error.message} Those on this device are above.
+          </Failed>
+        ) : sheets.length === 0 ? (
+          <p className="mt-3 text-small text-ink-2">
+            {words.trim() === '' ? 'None sent yet.' : 'None of that title.'}
+          </p>
+        ) : (
+          <ul aria-label="My sheets">
+            {sheets.map((sheet) => (
+              <Row
+                key={sheet.id}
+                sheet={sheet}
+                onOpen={() => void open(sheet).catch(() => fail('This device keeps nothing for this page.'))}
+              />
+            ))}
+          </ul>
+        )}
+        {typeof found.data?.next === 'string' && (
+          <Button size="small" className="mt-3" onPress={() => setPages(pages + 1)}>
+            More
+          </Button>
+        )}
+      </div>
     </Rail>
   )
 }

@@ -52,7 +52,7 @@ export function SheetsPage() {
           </div>
         </Rail>
       )}
-      {!making && <ServerSheets edition={edition} hash={info?.hash} />}
+      {!making && <ServerSheets />}
     </Page>
   )
 }

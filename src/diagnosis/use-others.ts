@@ -5,8 +5,10 @@ import type { SheetEntry } from '../../server/sheets/sheets.contract.ts'
 import { keyOf } from '../offline/outbox.ts'
 import { getSending, listUnsent } from '../offline/unsent.ts'
 import type { Sending } from '../offline/unsent.ts'
-import { onSheetsChanged } from '../offline/sheets.ts'
-import { followSheet, openOwn, openShared } from '../sheets/sheets.api.ts'
+import { goOnAlone } from '../offline/go-on-alone.ts'
+import { onSheetsChanged, sayChanged } from '../offline/sheets.ts'
+import { followSheet } from '../sheets/follow.api.ts'
+import { openOwn, openShared } from '../sheets/sheets.api.ts'
 import { whatStands } from './sent-sheet.ts'
 import type { Came } from './sent-sheet.ts'
 import type { OpenSheet } from './use-sheet.ts'
@@ -42,7 +44,7 @@ export type Others = {
   against: readonly Standing<SheetEntry>[]
   /** Somebody else gave the link it came by. */
   shared: boolean
-  /** That link was taken back. */
+  /** The link it came by was taken back; it goes on as a sheet of one's own. */
   ended: boolean
 }
 
@@ -59,7 +61,11 @@ export function useOthers({ id, receive }: Pick<OpenSheet, 'id' | 'receive'>): O
     let wanted = true
     const read = () =>
       void getSending(id).then(
-        (sending) => wanted && setPath(pathOf(sending)),
+        (sending) => {
+          if (!wanted) return
+          setPath(pathOf(sending))
+          setEnded(sending?.ended === true)
+        },
         () => undefined,
       )
     read()
@@ -83,7 +89,10 @@ export function useOthers({ id, receive }: Pick<OpenSheet, 'id' | 'receive'>): O
     }
     // Without a network there is no news; the line says when there is again.
     const ask = () => void news().catch(() => undefined)
-    const stop = followSheet(path, ask, () => setEnded(true))
+    const stop = followSheet(path, ask, () => {
+      if (!path.startsWith('/shared/')) return
+      void goOnAlone(id).then(sayChanged, () => undefined)
+    })
     return () => {
       wanted = false
       clearTimeout(timer)

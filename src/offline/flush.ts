@@ -1,3 +1,4 @@
+import { goOnAlone } from './go-on-alone.ts'
 import { alterSending, alterUnsent, getSending, listUnsent } from './unsent.ts'
 import type { Sending, Unsent } from './unsent.ts'
 
@@ -5,6 +6,8 @@ import type { Sending, Unsent } from './unsent.ts'
 export type Answer =
   | { kind: 'taken'; ids: readonly string[] }
   | { kind: 'refused'; reason: string }
+  /** The link by which the sheet came was taken back. */
+  | { kind: 'gone' }
   | { kind: 'failed' }
   | { kind: 'wait' }
   | { kind: 'silence' }
@@ -63,6 +66,9 @@ async function flushSheet(sheet: string, post: Post, who: string | null): Promis
         }
         await alterUnsent(ns.slice(0, 1), (letter) => ({ ...letter, refused: answer.reason }))
         return true
+      case 'gone':
+        await goOnAlone(sheet)
+        break
       case 'failed':
         await alterUnsent(ns, (letter) => ({ ...letter, failures: letter.failures + 1 }))
         return true

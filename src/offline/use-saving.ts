@@ -15,6 +15,8 @@ export type Saving = {
   refused: number
   /** Sheets of which something waits to be sent. */
   waiting: number
+  /** What waits to be sent, entry by entry. */
+  entries: number
   sending: boolean
 }
 
@@ -43,6 +45,7 @@ async function look(): Promise<Saving> {
     sent: sheets.filter(({ id }) => !here.has(id)).length,
     refused: new Set(refused.map((letter) => letter.sheet)).size,
     waiting: waiting.size,
+    entries: letters.length,
     sending: busy && waiting.size > 0,
   }
 }

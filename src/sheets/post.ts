@@ -14,8 +14,9 @@ export const along = ({ key }: Pick<Sending, 'key'>, by: string | null): Along =
 /** Worth sending again later, without anybody's doing. */
 const passes = new Set([401, 408, 425, 429])
 
-function answerOf(problem: unknown): Answer {
+function answerOf(problem: unknown, { link }: Sending): Answer {
   if (!(problem instanceof ApiProblem)) return { kind: 'silence' }
+  if (problem.status === 404 && link !== undefined) return { kind: 'gone' }
   if (problem.status >= 500) return { kind: 'failed' }
   if (problem.status < 400 || passes.has(problem.status)) return { kind: 'wait' }
   const [field] = Object.entries(problem.errors)
@@ -48,5 +49,6 @@ export const post: Post = {
       return undefined
     }
   },
-  send: (sending, letters) => sendLetters(sending, letters).catch(answerOf),
+  send: (sending, letters) =>
+    sendLetters(sending, letters).catch((problem: unknown) => answerOf(problem, sending)),
 }

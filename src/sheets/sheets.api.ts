@@ -7,6 +7,9 @@ import { loadSheet, saveSheet, sayChanged } from '../offline/sheets.ts'
 import { along } from './post.ts'
 import { sendNow } from './send-sheets.ts'
 
+/** Sends what waits, now. Resolves when that was tried. */
+export const sendWaiting = sendNow
+
 /** The server did not take the sheet, so that there is nothing to hand out a link to. */
 export class NotSentYet extends Error {
   override name = 'NotSentYet'
@@ -74,35 +77,4 @@ export async function takeBackSheetLink(sheet: string, by: string | null): Promi
   await send('DELETE', `/sheets/${sending.remote}/link`, {}, SheetNamed, along(sending, by))
   await alterSending(sheet, { given: undefined })
   sayChanged()
-}
-
-/**
- * Calls back whenever there is news of a sheet, and once the line stands; listens only while the page is visible.
- * @param path what follows `/api`, for example `/shared/<token>`
- * @returns the way to stop it
- */
-export function followSheet(path: string, news: () => void, ended: () => void): () => void {
-  let line: EventSource | undefined
-  const close = () => {
-    line?.close()
-    line = undefined
-  }
-  const open = () => {
-    close()
-    line = new EventSource(`/api${path}/events`)
-    line.addEventListener('changed', news)
-    line.addEventListener('ended', () => {
-      close()
-      ended()
-    })
-  }
-  const look = () => (document.visibilityState === 'visible' ? open() : close())
-  look()
-  document.addEventListener('visibilitychange', look)
-  window.addEventListener('online', look)
-  return () => {
-    document.removeEventListener('visibilitychange', look)
-    window.removeEventListener('online', look)
-    close()
-  }
 }

@@ -1,17 +1,14 @@
-import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { useEffect, useState } from 'react'
-import { standing } from '../../rules/findings/standing.ts'
 import type { Edition } from '../../rules/edition/open.ts'
-import type { SheetEntry } from '../../server/sheets/sheets.contract.ts'
 import { ApiProblem } from '../api.ts'
 import { getSending } from '../offline/unsent.ts'
 import { onSheetsChanged } from '../offline/sheets.ts'
 import { useMe } from '../people/people.api.ts'
-import { followSheet, makeSheetLink, openShared, takeBackSheetLink } from '../sheets/sheets.api.ts'
+import { makeSheetLink, takeBackSheetLink } from '../sheets/sheets.api.ts'
 import { Button } from '../ui/button.tsx'
 import { Failed } from '../ui/failed.tsx'
 import { Rail } from '../ui/rail.tsx'
-import { inHomeownerWords } from './homeowner-words.ts'
+import { TheirFindings } from './their-findings.tsx'
 import { useTriage } from './triage-store.tsx'
 
 /** The link made for this check, if one holds. */
@@ -33,53 +30,6 @@ function useGiven(sheet: string | undefined): string | undefined {
     }
   }, [sheet])
   return given
-}
-
-function saidIn(edition: Edition, entry: SheetEntry): string {
-  const reading = edition.readings.get(entry.finding)
-  const observation = edition.observations.get(entry.finding)
-  const { value } = entry
-  const label = inHomeownerWords(reading?.label ?? observation?.label ?? entry.finding)
-  if (value === null) return `${label}: nothing now`
-  if (typeof value === 'string')
-    return `${label}: ${inHomeownerWords(observation?.values.find((one) => one.id === value)?.label ?? value)}`
-  if (typeof value === 'object' && 'overLimit' in value) return `${label}: over the meter’s limit`
-  return `${label}: ${typeof value === 'number' ? value : value.value} ${reading?.unit ?? ''}`
-}
-
-/** What the professional has entered on the same sheet, as they enter it. */
-function Theirs({ given, edition, me }: { given: string; edition: Edition; me: string | undefined }) {
-  const client = useQueryClient()
-  const shared = useQuery({
-    queryKey: ['shared', given] as const,
-    queryFn: ({ signal }) => openShared(given, signal),
-    staleTime: 0,
-  })
-  useEffect(() => {
-    const news = () => void client.invalidateQueries({ queryKey: ['shared', given] })
-    return followSheet(`/shared/${given}`, news, news)
-  }, [client, given])
-  const theirs = standing(shared.data?.entries ?? [])
-    .flatMap(({ entry, against }) => [entry, ...against])
-    .filter(({ by }) => by !== null && by.id !== me)
-  return (
-    <div role="status" className="mt-4">
-      {theirs.length === 0 ? (
-        <p className="text-small text-ink-2">What your professional finds shows here.</p>
-      ) : (
-        <>
-          <b>Your professional found</b>
-          <ul>
-            {theirs.map((entry) => (
-              <li key={entry.id} className="border-b border-rule py-2">
-                {saidIn(edition, entry)} <span className="text-small text-ink-2">({entry.by?.name})</span>
-              </li>
-            ))}
-          </ul>
-        </>
-      )}
-    </div>
-  )
 }
 
 /** A private link with which a professional opens these answers, and the way to take it back. */
@@ -128,7 +78,8 @@ export function Share({ edition }: { edition: Edition | undefined }) {
       ) : (
         <>
           <p className="mb-2 mt-2">
-            Send this link to your professional and nobody else. Whoever has it can read your answers.
+            Send this link to your professional and nobody else. Whoever has it can read your answers. You can
+            take it back; what they saw or entered until then stays with them.
           </p>
           <code className="block break-all">{address}</code>
           <div className="mt-3 flex flex-wrap items-center gap-3">
@@ -142,7 +93,7 @@ export function Share({ edition }: { edition: Edition | undefined }) {
               </span>
             )}
           </div>
-          {edition !== undefined && <Theirs given={given} edition={edition} me={person?.id} />}
+          {edition !== undefined && <TheirFindings given={given} edition={edition} me={person?.id} />}
         </>
       )}
       {failed !== undefined && <Failed title="That did not work.">{failed}</Failed>}

@@ -35,7 +35,7 @@ export async function runApp(
   const feed = new EditionFeed()
   const unfollow = followEditions(databaseUrl, db, feed, log)
   const sheetFeed = new SheetFeed()
-  const deafen = listen(databaseUrl, 'sheet_changed', (id) => sheetFeed.announce(id), log)
+  const deafen = listen(databaseUrl, 'look_again', (id) => sheetFeed.announce(id), log)
   const config = { trustProxy, worker, sessionSecret: testSecret }
   const { app, close } = createApp({ db, feed, sheetFeed, log, config, ...(pages && { pages }) })
   const server = createServer(app)
