@@ -9,6 +9,7 @@ import { putInForce } from '../../server/editions/put-in-force.ts'
 import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import { SheetOpened, SheetsPage } from '../../server/sheets/sheets.contract.ts'
 import type { NewEntry, SheetHead } from '../../server/sheets/sheet-requests.contract.ts'
+import { tokenHash } from '../../server/token.ts'
 import { Asker, signedIn } from './asker.ts'
 import { testDatabase } from './database.ts'
 import type { TestDatabase } from './database.ts'
@@ -261,6 +262,25 @@ describe('without an account', () => {
     expect((await tech.get(`/api/sheets/${id}`)).status).toBe(404)
   })
 
+  test('whoever holds the key and has an account now names it as theirs; from then on the key opens nothing', async () => {
+    const own = key()
+    const id = await begin(visitor, { kind: 'triage' }, own)
+    expect((await add(visitor, `sheets/${id}`, [entryOf('tingle', 'no')], own)).status).toBe(200)
+    const claim = (asker: Asker, headers: Record<string, string>) =>
+      asker.ask('PUT', `/api/sheets/${id}`, { body: headOf({ kind: 'triage' }), headers })
+    expect((await claim(senior, key())).status).toBe(404)
+    expect((await claim(helper, own)).status).toBe(200)
+    expect((await open(helper, `sheets/${id}`)).entries).toHaveLength(1)
+    const listed = SheetsPage.parse(await (await helper.get('/api/sheets')).json()).sheets
+    expect(listed.map((sheet) => sheet.id)).toContain(id)
+    for (const answer of [
+      await visitor.ask('GET', `/api/sheets/${id}`, { headers: own }),
+      await add(visitor, `sheets/${id}`, [entryOf('tingle', 'yes')], own),
+      await claim(senior, own),
+    ])
+      expect(answer.status).toBe(404)
+  })
+
   test('so many sheets an hour from one address, and then no more', async () => {
     const own = key()
     const ask = async () =>
@@ -276,6 +296,22 @@ describe('without an account', () => {
     expect(answers.length).toBeGreaterThan(40)
     // Whoever is signed in is not held up by their neighbors.
     await begin(helper, { kind: 'triage' })
+  })
+
+  test('so many links too', async () => {
+    const [id] = await database.db.selectFrom('sheet').select('id').where('owner_id', 'is', null).execute()
+    const own = key()
+    await database.db
+      .updateTable('sheet')
+      .set({ key_hash: tokenHash(own['sheet-key']) })
+      .where('id', '=', id!.id)
+      .execute()
+    const answers: number[] = []
+    while (answers.length < 70 && answers.at(-1) !== 429)
+      answers.push((await visitor.ask('POST', `/api/sheets/${id!.id}/link`, { headers: own })).status)
+    expect(answers.at(-1)).toBe(429)
+    expect(answers.length).toBeGreaterThan(40)
+    await linkTo(helper, await begin(helper, { kind: 'triage' }))
   })
 })
 
@@ -365,6 +401,28 @@ describe('live', () => {
     expect([await near.next(), await near.next()]).toEqual(['ended', 'closed'])
     expect(await far.next()).toBe('ended')
     await second.close()
+  })
+
+  test('ends with the session of whoever opened it, and with no other', async () => {
+    const id = await begin(helper, { kind: 'triage' })
+    const token = await linkTo(helper, id)
+    const leaving = await signedIn(app, 'tech')
+    const pages = [await follow(leaving, `shared/${token}`), await follow(tech, `shared/${token}`)] as const
+    expect([await pages[0].next(), await pages[1].next()]).toEqual(['changed', 'changed'])
+    await leaving.post('/api/sign-out')
+    expect([await pages[0].next(), await pages[0].next()]).toEqual(['ended', 'closed'])
+    await add(helper, `sheets/${id}`, [entryOf('tingle', 'no')])
+    expect(await pages[1].next()).toBe('changed')
+    await pages[1].stop()
+
+    // Ended from elsewhere: a changed role ends every session.
+    const own = await begin(senior)
+    const page = await follow(senior, `sheets/${own}`)
+    expect(await page.next()).toBe('changed')
+    const again = await signedIn(app, 'senior')
+    await again.post('/api/sign-out-everywhere')
+    expect(await page.next()).toBe('ended')
+    senior = await signedIn(app, 'senior')
   })
 
   test('one’s own sheet follows without a link', async () => {

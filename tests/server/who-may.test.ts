@@ -127,6 +127,8 @@ const table: Row[] = [
   { route: 'get /edition', path: () => '/api/edition', status: all(200) },
   { route: 'get /edition/events', path: () => '/api/edition/events', status: all(200) },
   { route: 'get /editions', path: () => '/api/editions', status: all(200) },
+  { route: 'get /editions/:hash', path: () => `/api/editions/${starterBytes.hash}`, status: all(200) },
+  { route: 'get /editions/:hash', of: 'no hash', path: () => '/api/editions/1', status: all(404) },
   {
     route: 'get /edition-files/:hash',
     of: 'for everyone',
@@ -289,6 +291,24 @@ const table: Row[] = [
     path: () => `/api/sheets/${anothersSheet}/link`,
     status: all(404),
   },
+  // What somebody without an account began opens with the key of their device alone.
+  ...(
+    [
+      ['get /sheets/:id', ''],
+      ['get /sheets/:id/events', '/events'],
+      ['put /sheets/:id', ''],
+      ['post /sheets/:id/entries', '/entries'],
+      ['post /sheets/:id/link', '/link'],
+      ['delete /sheets/:id/link', '/link'],
+    ] as const
+  ).map(([route, rest]): Row => ({
+    route,
+    of: 'a visitor’s, without its key',
+    path: () => `/api/sheets/${sheetOf('visitor')}${rest}`,
+    ...(route.startsWith('put') && { body: head }),
+    ...(rest === '/entries' && { body: entries('e0000000-0000-4000-8000-0000000000bb') }),
+    status: { ...all(404), ...(route.startsWith('put') && { visitor: 401 }) },
+  })),
   { route: 'get /shared/:token', of: 'given', path: () => `/api/shared/${sharedToken}`, status: all(200) },
   { route: 'get /shared/:token', of: 'made up', path: () => '/api/shared/nonsense', status: all(404) },
   {
