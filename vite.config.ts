@@ -21,6 +21,11 @@ export default defineConfig({
               name: 'base',
               test: /node_modules\/(react|react-dom|react-router|react-router-dom|scheduler|@tanstack|zod|idb)\//,
             },
+            // What lies on the device, and the way to the server, in one piece for the same reason.
+            {
+              name: 'device',
+              test: /src\/(api|offline\/(database|whose|person|new-id|sheets|settings|files))\.ts$|\/(me|roles)\.contract\.ts$/,
+            },
           ],
         },
       },

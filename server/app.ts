@@ -20,12 +20,16 @@ import { requestLog } from './request-log.ts'
 import { onlyJson, sameOrigin } from './same-origin.ts'
 import { security } from './security.ts'
 import { allow, sessions } from './session.ts'
+import { sheetEvents } from './sheets/sheet-events.ts'
+import type { SheetFeed } from './sheets/sheet-feed.ts'
+import { sheetRoutes } from './sheets/sheets.routes.ts'
 import { site } from './site.ts'
 import { workerOff } from './worker-off.ts'
 
 export type AppParts = {
   db: Db
   feed: EditionFeed
+  sheetFeed: SheetFeed
   log: Log
   config: Pick<Config, 'trustProxy' | 'worker' | 'sessionSecret'>
   /** Where the built pages lie; the checkout's `dist` unless said. */
@@ -38,11 +42,12 @@ const dist = fileURLToPath(new URL('../dist', import.meta.url))
  * The application as a function of its parts: tests build it too. `close` ends the open event streams, which would
  * otherwise keep the server from stopping.
  */
-export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
+export function createApp({ db, feed, sheetFeed, log, config, pages = dist }: AppParts): {
   app: Express
   close: () => void
 } {
   const events = editionEvents(feed)
+  const sheetStreams = sheetEvents(sheetFeed)
   const session = sessions({ db, log, secret: config.sessionSecret })
   const throttle = openThrottle(db, config.sessionSecret)
   const app = express()
@@ -68,6 +73,7 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
     feedbackRoutes(db, throttle.feedback),
     accountRoutes(db, throttle),
     peopleRoutes(db),
+    sheetRoutes({ db, events: sheetStreams, count: { sheet: throttle.sheet, link: throttle.sheetLink } }),
     noSuchRoute,
   )
   if (!config.worker) app.use(workerOff)
@@ -75,6 +81,7 @@ export function createApp({ db, feed, log, config, pages = dist }: AppParts): {
   app.use(problems(log))
   const close = () => {
     events.close()
+    sheetStreams.close()
     session.close()
   }
   return { app, close }

@@ -8,6 +8,9 @@ type Role = 'helper' | 'tech' | 'senior' | 'admin'
 /** Written once, by the database's clock. */
 type Stamp = ColumnType<Date, never, never>
 
+/** jsonb: written as text, since the driver would take a list for an array of PostgreSQL's. */
+type Json = ColumnType<unknown, string, string>
+
 /** The tables, as the migrations leave them. */
 export type Database = {
   edition: { number: number; hash: string; note: string; made_at: Stamp }
@@ -35,6 +38,40 @@ export type Database = {
     expires_at: Date
     used_at: Date | null
   }
+  sheet: {
+    id: string
+    owner_id: string | null
+    key_hash: string | null
+    kind: 'triage' | 'diagnosis'
+    title: string
+    context: Json
+    edition_hash: string
+    made_at: Date
+    changed_at: Date
+    server_at: Stamp
+  }
+  sheet_entry: {
+    id: string
+    /** In the order they came; a whole number, which the driver hands over as text. */
+    seq: ColumnType<string, never, never>
+    sheet_id: string
+    mode: string
+    finding: string
+    value: Json | null
+    kept: Json | null
+    after: string[]
+    by_person: string | null
+    by_name: string | null
+    device_at: Date
+    server_at: Stamp
+  }
+  sheet_result: {
+    sheet_id: string
+    edition_hash: string
+    result: Json
+    made_at: ColumnType<Date, never, Date>
+  }
+  sheet_link: { token_hash: string; sheet_id: string; made_at: Stamp; taken_back_at: Date | null }
   sign_in_try: { key: string; points: number; expire: number | null }
   article_draft: {
     slug: string

@@ -8,8 +8,10 @@ import { isDatabaseDown, openDatabase } from './database.ts'
 import { EditionFeed } from './editions/edition-feed.ts'
 import { followEditions } from './editions/follow-editions.ts'
 import { seedStarter } from './editions/seed-starter.ts'
+import { listen } from './listen.ts'
 import { openLog } from './log.ts'
 import { seedDemoPeople, shutOutDemoPeople } from './people/demo-people.ts'
+import { SheetFeed } from './sheets/sheet-feed.ts'
 
 const patienceMs = 30_000
 
@@ -30,7 +32,9 @@ async function main(): Promise<void> {
 
   const feed = new EditionFeed()
   const unfollow = followEditions(config.databaseUrl, db, feed, log)
-  const { app, close } = createApp({ db, feed, log, config })
+  const sheetFeed = new SheetFeed()
+  const deafen = listen(config.databaseUrl, 'look_again', (id) => sheetFeed.announce(id), log)
+  const { app, close } = createApp({ db, feed, sheetFeed, log, config })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)
@@ -49,7 +53,7 @@ async function main(): Promise<void> {
     const cut = setTimeout(() => server.closeAllConnections(), 5_000)
     await closed
     clearTimeout(cut)
-    await unfollow()
+    await Promise.all([unfollow(), deafen()])
     await db.destroy()
     log.info('stopped')
     // An open channel to the parent would keep this process alive.

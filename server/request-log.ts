@@ -2,9 +2,11 @@ import type { IncomingMessage, ServerResponse } from 'node:http'
 import { pinoHttp } from 'pino-http'
 import type { Log } from './log.ts'
 
-/** What a log line may hold of an address: what is searched for stands behind the question mark, and a one-time link lets in. */
+/** What a log line may hold of an address: what is searched for stands behind the question mark, and a link lets in. */
 const pathOf = (request: { url?: string; originalUrl?: string }) =>
-  (request.originalUrl ?? request.url ?? '').replace(/[?#].*$/s, '').replace(/(\/links\/)[^/]+/gi, '$1…')
+  (request.originalUrl ?? request.url ?? '')
+    .replace(/[?#].*$/s, '')
+    .replace(/(\/(?:links|shared|sheets(?=\/[\w-]{40}))\/)[^/]+/gi, '$1…')
 
 /** One line a request: method, path, status, milliseconds. No header, cookie, query or body is ever written. */
 export const requestLog = (log: Log) =>

@@ -1,6 +1,7 @@
 import pgStore from 'connect-pg-simple'
 import type { Request, RequestHandler, Response } from 'express'
 import session from 'express-session'
+import type { SessionData } from 'express-session'
 import { poolOf } from './database.ts'
 import type { Db } from './database.ts'
 import type { Log } from './log.ts'
@@ -113,6 +114,24 @@ const done = (run: (end: (problem?: unknown) => void) => void) =>
       problem ? reject(problem instanceof Error ? problem : new Error('session')) : resolve(),
     ),
   )
+
+/**
+ * The way to ask again whether who asked is still signed in, for what stays open longer than a request. Always so for
+ * whoever was not.
+ */
+export function stillSignedIn(db: Db, req: Request): () => Promise<boolean> {
+  const person = personOf(req)
+  const { sessionStore, sessionID } = req
+  return async () => {
+    if (person === undefined) return true
+    const session = await new Promise<SessionData | null | undefined>((resolve, reject) =>
+      sessionStore.get(sessionID, (problem: unknown, found) =>
+        problem ? reject(problem instanceof Error ? problem : new Error('session')) : resolve(found),
+      ),
+    )
+    return session?.person === person.id && (await findPerson(db, person.id))?.epoch === person.epoch
+  }
+}
 
 /** Begins a session under a new id: one that somebody else has planted beforehand is worth nothing. */
 export async function beginSession(req: Request, person: Known): Promise<void> {

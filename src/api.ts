@@ -29,11 +29,13 @@ export class NoNetwork extends Error {
 const Problem = z.object({ title: z.string(), errors: z.optional(z.record(z.string(), z.string())) })
 const patienceMs = 20_000
 
-type Asked = { accept: string; method?: string; body?: unknown }
+/** What goes along with a request: headers, and whether it goes out in the name of whoever is signed in. */
+export type Along = { headers?: Readonly<Record<string, string>>; credentials?: 'same-origin' | 'omit' }
+type Asked = { accept: string; method?: string; body?: unknown; along?: Along | undefined }
 
 async function ask(
   path: string,
-  { accept, method = 'GET', body }: Asked,
+  { accept, method = 'GET', body, along = {} }: Asked,
   signal?: AbortSignal,
 ): Promise<Response> {
   const patience = AbortSignal.timeout(patienceMs)
@@ -41,8 +43,10 @@ async function ask(
   let answer: Response
   try {
     const sent = method === 'GET' ? {} : { body: JSON.stringify(body ?? {}) }
-    const headers = { accept, ...(method !== 'GET' && { 'content-type': 'application/json' }) }
-    answer = await fetch(`/api${path}`, { method, headers, signal: either, ...sent })
+    const json = method !== 'GET' && { 'content-type': 'application/json' }
+    const headers = { accept, ...json, ...along.headers }
+    const { credentials = 'same-origin' } = along
+    answer = await fetch(`/api${path}`, { method, headers, credentials, signal: either, ...sent })
   } catch (problem) {
     if (signal?.aborted === true) throw problem
     throw new NoNetwork(problem)
@@ -74,12 +78,13 @@ export async function get<Contract extends z.ZodMiniType>(
  * @throws ApiProblem when it refuses, with a sentence for each field at fault; NoNetwork when nobody answers
  */
 export async function send<Contract extends z.ZodMiniType>(
-  method: 'POST' | 'PUT' | 'PATCH',
+  method: 'POST' | 'PATCH' | 'PUT' | 'DELETE',
   path: string,
   body: unknown,
   contract: Contract,
+  along?: Along,
 ): Promise<z.output<Contract>> {
-  return read(await ask(path, { accept: 'application/json', method, body }), contract)
+  return read(await ask(path, { accept: 'application/json', method, body, along }), contract)
 }
 
 async function read<Contract extends z.ZodMiniType>(

@@ -20,6 +20,7 @@ createRoot(root).render(
 /** Everything must open in a cellar: it is fetched while there still is a network, the check before all else. */
 async function bringAhead(): Promise<void> {
   await bringTriage().catch(() => undefined)
+  await import('./sheets/send-sheets.ts').then(({ keepSending }) => keepSending()).catch(() => undefined)
   await bringLibrary().catch(() => undefined)
   // Under hot reload nothing may be kept. Brought last: what it keeps has come by then.
   if (import.meta.env.PROD) await (await import('./offline/worker.ts')).startWorker()

@@ -26,9 +26,10 @@ async function count(db: Db, number: number): Promise<Counts> {
 
 /** Counts what an edition holds, once: it never changes. */
 export function editionCounts(db: Db): (number: number) => Promise<Counts> {
-  let last: { number: number; counts: Counts } | undefined
+  const known = new Map<number, Counts>()
   return async (number) => {
-    if (last?.number !== number) last = { number, counts: await count(db, number) }
-    return last.counts
+    const counts = known.get(number) ?? (await count(db, number))
+    known.set(number, counts)
+    return counts
   }
 }

@@ -14,10 +14,11 @@ export const FileName = z.enum([
   'articles-qualified',
 ])
 
-/** GET /api/edition: the edition in force, with the files to fetch by hash. */
+/** GET /api/edition and GET /api/editions/:hash: the edition in force, or an earlier one, with the files to fetch. */
 export const EditionInForce = z.object({
   number: z.int(),
   hash: Hash,
+  /** When it was last put in force. */
   inForceSince: Moment,
   note: z.string(),
   counts: z.object({ causes: z.int(), tests: z.int(), rules: z.int(), articles: z.int() }),

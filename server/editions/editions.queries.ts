@@ -16,6 +16,18 @@ export function editionInForce(db: Db | Tx) {
     .executeTakeFirst()
 }
 
+/** The edition with this hash, with the last time it was in force. Undefined when it never was. */
+export function editionOfHash(db: Db, hash: string) {
+  return db
+    .selectFrom('edition_in_force as f')
+    .innerJoin('edition as e', 'e.number', 'f.edition_number')
+    .select(['e.number', 'e.hash', 'e.note', 'f.since'])
+    .where('e.hash', '=', hash)
+    .orderBy('f.id', 'desc')
+    .limit(1)
+    .executeTakeFirst()
+}
+
 export type EditionRow = NonNullable<Awaited<ReturnType<typeof editionInForce>>>
 
 /** Every edition with the last time it was in force, the newest first. */

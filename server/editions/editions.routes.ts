@@ -1,12 +1,13 @@
 import { Router } from 'express'
-import type { RequestHandler } from 'express'
+import type { Request, RequestHandler } from 'express'
 import type { Db } from '../database.ts'
 import { Problem, notFound } from '../problem.ts'
 import { mayReadQualified, personOf } from '../session.ts'
 import { compressedFiles } from './compressed-files.ts'
 import { editionCounts } from './count-edition.ts'
 import { EditionInForce, EditionList } from './editions.contract.ts'
-import { editionInForce, listEditions, listFiles } from './editions.queries.ts'
+import { editionInForce, editionOfHash, listEditions, listFiles } from './editions.queries.ts'
+import type { EditionRow } from './editions.queries.ts'
 
 const year = 31_536_000
 // The smallest first: browsers name gzip before br without meaning it.
@@ -19,16 +20,24 @@ const preferred = ['br', 'gzip'] as const
 export function editionRoutes(db: Db, events: RequestHandler): Router {
   const fileOf = compressedFiles(db)
   const countsOf = editionCounts(db)
+  /** An edition with the files that the asker may have. */
+  const asked = async (req: Request, { since, ...edition }: EditionRow) => {
+    const qualified = mayReadQualified(req)
+    const [files, { [qualified ? 'qualified' : 'everyone']: counts }] = await Promise.all([
+      listFiles(db, edition.number, qualified),
+      countsOf(edition.number),
+    ])
+    return EditionInForce.parse({ ...edition, inForceSince: since.toISOString(), counts, files })
+  }
   return Router()
     .get('/edition', async (req, res) => {
-      const { since, ...inForce } = (await editionInForce(db)) ?? noneYet()
-      const qualified = mayReadQualified(req)
-      const [files, { [qualified ? 'qualified' : 'everyone']: counts }] = await Promise.all([
-        listFiles(db, inForce.number, qualified),
-        countsOf(inForce.number),
-      ])
-      const answer = EditionInForce.parse({ ...inForce, inForceSince: since.toISOString(), counts, files })
-      res.json(answer)
+      res.json(await asked(req, (await editionInForce(db)) ?? noneYet()))
+    })
+    .get('/editions/:hash', async (req, res) => {
+      const { hash } = req.params
+      const edition = /^[0-9a-f]{64}$/.test(hash) ? await editionOfHash(db, hash) : undefined
+      if (edition === undefined) throw notFound('edition')
+      res.json(await asked(req, edition))
     })
     .get('/edition/events', events)
     .get('/editions', async (_req, res) => {

@@ -4,13 +4,13 @@ import type { Db } from '../database.ts'
 import { Problem, notFound } from '../problem.ts'
 import { readBody } from '../read.ts'
 import { allow, beginSession, endSession, lookAfterSession, personOf, signedIn } from '../session.ts'
+import { tokenHash } from '../token.ts'
 import { changePassword } from './change-password.ts'
 import { cookieOf } from './cookie-of.ts'
-import { tokenHash } from './one-time-link.ts'
 import { hashPassword } from './passwords.ts'
 import { Me } from './me.contract.ts'
 import { ChangePassword, LinkOpened, SetPassword, SignIn, SignUp } from './people.contract.ts'
-import { addPerson, endSessions, findLink, findPerson } from './people.queries.ts'
+import { addPerson, endSessions, findLink, findPerson, saySessionEnded } from './people.queries.ts'
 import type { Known } from './people.queries.ts'
 import { setPasswordByLink } from './set-password.ts'
 import { whoSignsIn } from './sign-in.ts'
@@ -51,7 +51,9 @@ export function accountRoutes(db: Db, throttle: Throttle): Router {
       await comeIn(req, res, await whoSignsIn(db, throttle, { email, password, address: req.ip, mark }))
     })
     .post('/sign-out', async (req, res) => {
+      const person = personOf(req)
       await endSession(req, res)
+      if (person !== undefined) await saySessionEnded(db, person.id)
       answer(res, null)
     })
     .post('/sign-out-everywhere', allow('person'), async (req, res) => {

@@ -104,6 +104,11 @@ export async function changePerson(
     .execute()
 }
 
+/** Tells every server process that a session of this person has ended: what is open for them is looked at anew. */
+export async function saySessionEnded(db: Db | Tx, id: string): Promise<void> {
+  await sql`select pg_notify('look_again', ${id})`.execute(db)
+}
+
 /** Ends every session of a person, on all devices. */
 export async function endSessions(tx: Tx, id: string): Promise<void> {
   await tx
@@ -115,6 +120,7 @@ export async function endSessions(tx: Tx, id: string): Promise<void> {
     .deleteFrom('session')
     .where(sql`sess ->> 'person'`, '=', id)
     .execute()
+  await saySessionEnded(tx, id)
 }
 
 /** Sets a password, which ends every session and every link that could set another. */

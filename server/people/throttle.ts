@@ -20,6 +20,9 @@ const limits = {
   password: { points: 10, duration: hour },
   signUp: { points: 20, duration: hour },
   feedback: { points: 20, duration: hour },
+  // Findings sheets begun without an account: a household, or a campground behind one address.
+  sheet: { points: 60, duration: hour },
+  sheetLink: { points: 60, duration: hour },
 } as const
 type Kind = keyof typeof limits
 
@@ -96,5 +99,7 @@ export function openThrottle(db: Db, secret: string) {
     },
     signUp: (address: string | undefined) => take([['signUp', networkOf(address)]]),
     feedback: (address: string | undefined) => take([['feedback', networkOf(address)]]),
+    sheet: (address: string | undefined) => take([['sheet', networkOf(address)]]),
+    sheetLink: (address: string | undefined) => take([['sheetLink', networkOf(address)]]),
   }
 }

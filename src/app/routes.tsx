@@ -50,6 +50,8 @@ export const routes: RouteObject[] = [
             ],
           },
           { path: 'diagnosis', lazy: diagnosis },
+          { path: 'sheets/:token', lazy: () => import('../diagnosis/shared-sheet.page.tsx') },
+          { path: 'not-sent', lazy: () => import('../sheets/not-sent.page.tsx') },
           { path: 'articles', lazy: articles },
           { path: 'articles/new', lazy: async () => ({ Component: (await edit()).NewArticle }) },
           { path: 'articles/:slug/edit', lazy: edit },

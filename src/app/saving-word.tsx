@@ -1,22 +1,20 @@
-import { useOnline } from '../offline/network.ts'
-import { usePagesKept } from '../offline/pages-kept.ts'
-import { useSheetCount } from '../offline/sheet-count.ts'
+import { lazy, Suspense } from 'react'
 import { SavingState } from '../ui/offline-bar.tsx'
 
-/**
- * Where what was typed lies. Nothing is sent yet, so whatever there is lies on this device only. Where the device
- * can't keep the pages themselves it says so, with what to do about it when the network goes.
- */
+const Gone = () => <SavingState state="here">No network.</SavingState>
+// It looks into all sheets of the device: the first page does not wait for it.
+const SavedWhere = lazy(() =>
+  import('./saved-where.tsx').then(
+    ({ SavedWhere }) => ({ default: SavedWhere }),
+    () => ({ default: Gone }),
+  ),
+)
+
+/** Where what was typed lies. */
 export function SavingWord() {
-  const online = useOnline()
-  const pagesKept = usePagesKept()
-  const count = useSheetCount() ?? 0
-  if (online && pagesKept && count === 0) return null
   return (
-    <SavingState state="here">
-      {!online && 'No network. '}
-      {!pagesKept && (online ? 'Works only with a network. ' : 'Keep this page open. ')}
-      {count > 0 && <>On this device only:&nbsp;{count}</>}
-    </SavingState>
+    <Suspense fallback={null}>
+      <SavedWhere />
+    </Suspense>
   )
 }

@@ -8,6 +8,7 @@ import { Rail } from '../ui/rail.tsx'
 import { ContextFields, TitleField } from './context-fields.tsx'
 import type { Draft } from './context-fields.tsx'
 import { meterOhmsOf } from './raw-sheet.ts'
+import { sentSheet } from './sent-sheet.ts'
 import { newSheet } from './sheet-content.ts'
 
 const untitled = 'Untitled sheet'
@@ -45,6 +46,7 @@ export function NewSheet({ edition, editionHash, onMade, onClose }: NewSheetProp
         edition: editionHash,
         changedAt,
         content,
+        sends: sentSheet(content),
       })
       onMade(id)
     } catch {

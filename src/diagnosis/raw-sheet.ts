@@ -1,7 +1,6 @@
 /** From what was typed to what the core reads. */
-import { readSheet } from '../../rules/findings/parse.ts'
 import type { FieldErrors } from '../../rules/findings/parse.ts'
-import type { RawFinding, RawSheet, Sheet } from '../../rules/findings/sheet.ts'
+import type { RawFinding, RawSheet } from '../../rules/findings/sheet.ts'
 import type { Edition } from '../../rules/edition/open.ts'
 import { inView } from './sheet-content.ts'
 import type { Entries, Entry, Meter, SheetContent } from './sheet-content.ts'
@@ -61,41 +60,6 @@ export function rawSheetOf(edition: Edition, content: SheetContent): RawSheet {
         .filter(([, f]) => Object.keys(f).length > 0),
     ),
   }
-}
-
-export type Readable = {
-  /** Undefined when what feeds it can't be read. */
-  sheet: Sheet | undefined
-  /** Field path → sentence. What stands here was left out of the sheet. */
-  errors: FieldErrors
-}
-
-function without(raw: RawSheet, errors: FieldErrors): RawSheet {
-  const keep = (at: string, findings: Record<string, RawFinding>) =>
-    Object.fromEntries(Object.entries(findings).filter(([id]) => errors[`${at}.${id}`] === undefined))
-  const others = Object.entries(raw.otherModes ?? {}).filter(
-    ([mode]) => errors[`otherModes.${mode}`] === undefined,
-  )
-  const { meterOhms, ...context } = raw.context
-  return {
-    context:
-      errors['context.meterOhms'] === undefined && meterOhms !== undefined
-        ? { ...context, meterOhms }
-        : context,
-    findings: keep('findings', raw.findings ?? {}),
-    otherModes: Object.fromEntries(others.map(([mode, f]) => [mode, keep(`otherModes.${mode}`, f)])),
-  }
-}
-
-/**
- * Reads as much of the sheet as can be read. One entry that is no number must not blind the page to all others; it
- * is named beside its field, and the bond stays held back while there is one.
- */
-export function readWhatCanBe(edition: Edition, raw: RawSheet): Readable {
-  const whole = readSheet(edition, raw)
-  if (whole.ok) return { sheet: whole.sheet, errors: {} }
-  const rest = readSheet(edition, without(raw, whole.errors))
-  return { sheet: rest.ok ? rest.sheet : undefined, errors: whole.errors }
 }
 
 /** The sentence beside one field, if it can't be read. */

@@ -20,7 +20,7 @@ export const ObservationEntry = z.object({
   value: z.string(),
   by: z.enum(['tech', 'owner']),
 })
-const Entry = z.discriminatedUnion('kind', [ReadingEntry, ObservationEntry])
+export const Entry = z.discriminatedUnion('kind', [ReadingEntry, ObservationEntry])
 const Entries = z.record(z.string(), z.record(z.string(), Entry))
 
 /** The meter's input resistance: two common kinds, or a low one as typed. */

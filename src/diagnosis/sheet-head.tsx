@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom'
 import type { EditionInForce } from '../../server/editions/editions.contract.ts'
 import { ohmsInWords } from '../../rules/triangle/weight.ts'
+import { useEdition } from '../editions/edition.api.ts'
 import { Stamp } from '../ui/stamp.tsx'
 import { useDesk } from './desk.ts'
 import { ChangeContext } from './change-context.tsx'
@@ -25,6 +26,11 @@ export function SheetHead({ info, open, onOpen, letters, onLetters }: SheetHeadP
   const since = new Intl.DateTimeFormat('en-US', { day: 'numeric', month: 'short' }).format(
     new Date(info.inForceSince),
   )
+  const { info: used } = useEdition()
+  const line =
+    used === undefined || used.hash === info.hash
+      ? `in force since ${since}`
+      : `an earlier edition, put in force ${since}`
   const turn = (what: HeadOpen) => onOpen(open === what ? undefined : what)
   return (
     <header className="desk-head">
@@ -55,7 +61,7 @@ export function SheetHead({ info, open, onOpen, letters, onLetters }: SheetHeadP
           </button>
         </p>
       </div>
-      <Stamp hash={info.hash} number={info.number} line={`in force since ${since}`} />
+      <Stamp hash={info.hash} number={info.number} line={line} />
       {open === 'context' && (
         <div className="desk-wide">
           <ChangeContext onClose={() => onOpen(undefined)} />

@@ -3,6 +3,8 @@ import { EditionNotHere, useEdition } from '../editions/edition.api.ts'
 import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Waiting } from '../ui/waiting.tsx'
+import { EarlierEdition } from './earlier-edition.tsx'
+import { Others } from './others.tsx'
 import { SheetDesk } from './sheet-desk.tsx'
 import { useSheet } from './use-sheet.ts'
 import type { OpenSheet } from './use-sheet.ts'
@@ -37,8 +39,8 @@ function OnItsEdition({ sheet }: { sheet: OpenSheet }) {
       <Bare title={sheet.typed.title}>
         <Failed title="Couldn’t open the edition of this sheet." onRetry={retry}>
           {error instanceof EditionNotHere
-            ? 'It was begun with an earlier edition whose files are not on this device. What was typed is kept.'
-            : error?.message}
+            ? 'It was begun with an edition that is not on the server any more. What was typed is kept.'
+            : `It was begun with an earlier edition, whose files are not on this device. ${error?.message ?? ''} What was typed is kept.`}
         </Failed>
       </Bare>
     )
@@ -48,7 +50,13 @@ function OnItsEdition({ sheet }: { sheet: OpenSheet }) {
         <Waiting what="the edition" />
       </Bare>
     )
-  return <SheetDesk sheet={sheet} edition={edition} info={info} />
+  return (
+    <>
+      <EarlierEdition content={sheet.stored} own={info} />
+      <Others sheet={sheet} edition={edition} />
+      <SheetDesk sheet={sheet} edition={edition} info={info} />
+    </>
+  )
 }
 
 /** One findings sheet, by its id on this device. */

@@ -1,7 +1,8 @@
 import { useEffect, useState } from 'react'
 import { Link } from 'react-router-dom'
 import { newId } from '../offline/new-id.ts'
-import { listSheets, onSheetsChanged, removeSheet, saveSheet } from '../offline/sheets.ts'
+import { onSheetsChanged, removeSheet, saveSheet } from '../offline/sheets.ts'
+import { listSheets } from '../offline/sheets-here.ts'
 import type { SheetDoc } from '../offline/sheets.ts'
 import { Button } from '../ui/button.tsx'
 import { Empty } from '../ui/empty.tsx'
@@ -11,6 +12,7 @@ import { Waiting } from '../ui/waiting.tsx'
 import { GroundGlyph } from '../ui/where-ground-sits/ground-glyph.tsx'
 import { HowLongKept } from './how-long-kept.tsx'
 import { numberIn } from './raw-sheet.ts'
+import { sentSheet } from './sent-sheet.ts'
 import { isTaken, readingOf, SheetContent } from './sheet-content.ts'
 
 type Listed = { sheets: readonly SheetDoc[] } | 'pending' | 'failed'
@@ -53,7 +55,9 @@ function Row({ doc }: { doc: SheetDoc }) {
     const changedAt = new Date().toISOString()
     const title = `${doc.title}, copy`
     const content = read.success ? { ...read.data, title, past: [] } : doc.content
-    await saveSheet({ ...doc, id: newId(), title, changedAt, content })
+    const { sends: _, ...rest } = doc
+    const sends = read.success && { sends: sentSheet({ ...read.data, title }) }
+    await saveSheet({ ...rest, id: newId(), title, changedAt, content, ...sends })
   }
   const remove = async () => {
     await removeSheet(doc.id)

@@ -7,6 +7,7 @@ import { Page } from '../ui/page.tsx'
 import { Rail } from '../ui/rail.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { NewSheet } from './new-sheet.tsx'
+import { ServerSheets } from './server-sheets.tsx'
 import { SheetsList } from './sheets-list.tsx'
 
 /** Diagnosis without a sheet open: those on this device, and a new one. */
@@ -51,6 +52,7 @@ export function SheetsPage() {
           </div>
         </Rail>
       )}
+      {!making && <ServerSheets />}
     </Page>
   )
 }

@@ -1,11 +1,12 @@
 import { useEffect, useMemo, useRef, useState } from 'react'
 import type { Edition } from '../../rules/edition/open.ts'
 import type { FieldErrors } from '../../rules/findings/parse.ts'
+import { readWhatCanBe } from '../../rules/findings/read-what-can-be.ts'
 import { bondGate } from '../../rules/ranking/bond-gate.ts'
 import { stopsOf } from '../../rules/ranking/stop.ts'
 import type { Bond, Diagnosis, Stop } from '../../rules/ranking/diagnosis-types.ts'
 import { diagnose } from '../../rules/ranking/diagnose.ts'
-import { rawSheetOf, readWhatCanBe } from './raw-sheet.ts'
+import { rawSheetOf } from './raw-sheet.ts'
 import type { SheetContent } from './sheet-content.ts'
 
 export type Live = {

@@ -1,8 +1,12 @@
 import { useCallback, useEffect, useRef, useState } from 'react'
 import { loadSheet, onSheetsChanged, saveSheet } from '../offline/sheets.ts'
 import type { SheetDoc } from '../offline/sheets.ts'
+import type { Received } from '../offline/outbox.ts'
+import { sentSheet } from './sent-sheet.ts'
+import type { Came } from './sent-sheet.ts'
 import { SheetContent } from './sheet-content.ts'
 import { reduce } from './sheet-state.ts'
+import { takeOver } from './take-over.ts'
 import type { Action } from './sheet-state.ts'
 
 export type OpenSheet = {
@@ -14,6 +18,8 @@ export type OpenSheet = {
   /** As it lies on the device: what is drawn and ranked. */
   stored: SheetContent
   dispatch: (action: Action) => void
+  /** Takes over what others wrote on the same sheet. False while something is being written: try again. */
+  receive: (came: readonly Came[]) => boolean
   /** Why what was typed does not lie on the device. */
   unkept: string | undefined
   keepAgain: () => void
@@ -45,6 +51,8 @@ export function useSheet(id: string): Loaded {
   const now = useRef<SheetContent | undefined>(undefined)
   const writing = useRef(false)
   const writtenAt = useRef('')
+  /** What others wrote, from when it is taken over until it is on the disk. */
+  const arrived = useRef<Received[]>([])
 
   const take = useCallback((doc: SheetDoc | undefined) => {
     const content = contentOf(doc)
@@ -86,7 +94,14 @@ export function useSheet(id: string): Loaded {
         written = now.current
         const changedAt = new Date().toISOString()
         writtenAt.current = changedAt
-        await saveSheet({ id, kind: 'diagnosis', title: written.title, edition, changedAt, content: written })
+        const received = arrived.current.splice(0)
+        const doc = { id, kind: 'diagnosis', title: written.title, edition, changedAt } as const
+        try {
+          await saveSheet({ ...doc, content: written, sends: sentSheet(written) }, received)
+        } catch (problem) {
+          arrived.current.unshift(...received)
+          throw problem
+        }
         setStored(written)
       }
       setUnkept(undefined)
@@ -111,10 +126,24 @@ export function useSheet(id: string): Loaded {
     [keep],
   )
 
+  const receive = useCallback(
+    (came: readonly Came[]): boolean => {
+      // What was typed a moment ago is not in the outbox yet, where it would be seen.
+      if (now.current === undefined || writing.current) return false
+      if (came.length === 0) return true
+      arrived.current.push(...came.map(({ mode, finding, ids, sent }) => ({ mode, finding, ids, sent })))
+      now.current = takeOver(now.current, came)
+      setTyped(now.current)
+      void keep()
+      return true
+    },
+    [keep],
+  )
+
   if (typeof typed === 'string') return { status: typed }
   if (stored === undefined) return { status: 'pending' }
   return {
     status: 'open',
-    sheet: { id, edition, typed, stored, dispatch, unkept, keepAgain: () => void keep() },
+    sheet: { id, edition, typed, stored, dispatch, receive, unkept, keepAgain: () => void keep() },
   }
 }

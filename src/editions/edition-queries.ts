@@ -5,11 +5,11 @@ import type { FileName } from '../../server/editions/editions.contract.ts'
 import type { Audience } from '../../rules/edition/audience.ts'
 import { Person } from '../../server/people/me.contract.ts'
 import { isQualified } from '../../server/people/roles.contract.ts'
-import { get } from '../api.ts'
+import { ApiProblem, get } from '../api.ts'
 import { keptPerson } from '../offline/person.ts'
 import { bringFile, fileOf, readJson } from './edition-file.ts'
 import type { FileOf } from './edition-file.ts'
-import { keepEdition, readKept } from './kept-editions.ts'
+import { keepEarlier, keepEdition, readKept } from './kept-editions.ts'
 
 /** A file never changes under its hash, so it is read once and stays. Maps must not be compared piece by piece. */
 const forGood = { staleTime: Infinity, gcTime: Infinity, structuralSharing: false } as const
@@ -61,13 +61,23 @@ export const usedQuery = (client: QueryClient) =>
     gcTime: Infinity,
   })
 
-/** An edition that was in force earlier, if its files lie on this device. */
+/**
+ * An edition that was in force earlier: from this device, else from the server, and then kept, so that a sheet begun
+ * with it opens with no network from then on.
+ */
 export const earlierQuery = (hash: string) =>
   queryOptions({
     queryKey: ['edition', 'earlier', hash] as const,
-    queryFn: async () => {
+    queryFn: async ({ signal }) => {
       const kept = await readKept()
-      return [kept?.inForce, ...(kept?.earlier ?? [])].find((one) => one?.hash === hash) ?? null
+      const here = [kept?.inForce, ...(kept?.earlier ?? [])].find((one) => one?.hash === hash)
+      if (here !== undefined) return here
+      const info = await get(`/editions/${hash}`, EditionInForce, signal).catch((problem: unknown) => {
+        if (problem instanceof ApiProblem && problem.status === 404) return null
+        throw problem
+      })
+      if (info !== null) whenIdle(() => void keepEarlier(info).catch(() => undefined))
+      return info
     },
     staleTime: 0,
   })

@@ -34,11 +34,11 @@ function together(...asked: readonly (Asked | undefined)[]): Shown {
   }
 }
 
-/** Thrown into `error` when a sheet's own edition does not lie on this device. */
+/** Thrown into `error` when neither this device nor the server has a sheet's own edition. */
 export class EditionNotHere extends Error {
   override name = 'EditionNotHere'
 }
-const notHere = new EditionNotHere('The edition this was begun with is not on this device.')
+const notHere = new EditionNotHere('The edition this was begun with is not on the server any more.')
 
 /** Whether there is more for qualified people. What lies on the device may stem from before they signed in. */
 const hasMore = (info: EditionInForce | undefined, name: FileName): boolean =>
@@ -50,8 +50,8 @@ function useUsed() {
 }
 
 /**
- * The edition this page works with, opened. With a hash, that edition, if it lies on this device: a sheet stays on
- * the edition it was begun with.
+ * The edition this page works with, opened. With a hash, that edition, from this device or from the server: a sheet
+ * stays on the edition it was begun with.
  */
 export function useEdition(
   hash?: string,

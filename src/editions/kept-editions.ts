@@ -18,6 +18,14 @@ export async function readKept(): Promise<Kept | undefined> {
 const wanted = ({ files }: EditionInForce) =>
   savesData() ? files.filter((file) => file.name === 'diagnosis') : files
 
+/** Brings what ranks with an earlier edition, and names it as one that lies here. */
+export async function keepEarlier(info: EditionInForce): Promise<void> {
+  for (const file of info.files.filter(({ name }) => name === 'diagnosis')) await bringFile(file)
+  const before = await readKept()
+  if (before === undefined || before.earlier.some(({ hash }) => hash === info.hash)) return
+  await setSetting('editionInForce', { ...before, earlier: [...before.earlier, info] })
+}
+
 /**
  * Brings all that the server lets this person have of an edition, then names it as the one to open with no network. In
  * this order: a name without its files would open nothing.

@@ -1,4 +1,5 @@
 import { useEffect, useState } from 'react'
+import { storage } from './ask-to-last.ts'
 
 export type Lasting = {
   /** Whether the browser agreed to clear nothing here by itself. */
@@ -6,15 +7,6 @@ export type Lasting = {
   /** Bytes, as the browser estimates them; undefined where it gives no figure. */
   used: number | undefined
   free: number | undefined
-}
-
-// Like the worker's, this part of the browser is missing on plain HTTP.
-const storage = (): StorageManager | undefined => ('storage' in navigator ? navigator.storage : undefined)
-
-/** Asks the browser not to clear this device's sheets when it runs full. Some ask the person in turn. */
-export async function askToLast(): Promise<void> {
-  const here = storage()
-  if (here !== undefined && !(await here.persisted())) await here.persist()
 }
 
 async function look(): Promise<Lasting> {

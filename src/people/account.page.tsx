@@ -1,15 +1,16 @@
 import { useState } from 'react'
 import type { Person } from '../../server/people/me.contract.ts'
 import { Button, LinkButton } from '../ui/button.tsx'
-import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Rail } from '../ui/rail.tsx'
 import { useToast } from '../ui/toast.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { Form, NewPasswordField, PasswordField } from './form.tsx'
 import { useMe } from './people.api.ts'
-import { changePassword, signOut } from './requests.ts'
+import { changePassword } from './requests.ts'
 import { roleWords } from './role-words.ts'
+import { SigningOut } from './signing-out.tsx'
+import { Unclaimed } from './unclaimed.tsx'
 import { useSending } from './use-sending.ts'
 
 function Password() {
@@ -47,37 +48,6 @@ function Password() {
   )
 }
 
-function SigningOut({ expired }: { expired: boolean }) {
-  const { sending, refusal, run } = useSending()
-  const [where, setWhere] = useState<'here' | 'everywhere'>()
-  const out = (from: 'here' | 'everywhere') => {
-    setWhere(from)
-    void run(() => signOut(from))
-  }
-  return (
-    <Rail title="Sign out" className="mt-7">
-      <p className="mb-4 mt-2 text-small text-ink-2">
-        Your findings sheets stay on this device. What is for qualified people leaves it.
-      </p>
-      {refusal !== undefined && (
-        <div className="mb-4">
-          <Failed title={refusal.title} />
-        </div>
-      )}
-      <div className="flex flex-wrap gap-3">
-        <Button look="main" onPress={() => out('here')}>
-          {sending && where === 'here' ? 'Signing out …' : 'Sign out on this device'}
-        </Button>
-        {!expired && (
-          <Button onPress={() => out('everywhere')}>
-            {sending && where === 'everywhere' ? 'Signing out …' : 'Sign out everywhere'}
-          </Button>
-        )}
-      </div>
-    </Rail>
-  )
-}
-
 function Account({ person, expired }: { person: Person; expired: boolean }) {
   return (
     <>
@@ -98,6 +68,7 @@ function Account({ person, expired }: { person: Person; expired: boolean }) {
       ) : (
         <Password />
       )}
+      <Unclaimed who={person.id} />
       <SigningOut expired={expired} />
     </>
   )

@@ -12,14 +12,17 @@ import type { NewPerson } from '../../server/people/people.contract.ts'
 import { isQualified } from '../../server/people/roles.contract.ts'
 import type { Role } from '../../server/people/roles.contract.ts'
 import { get, send } from '../api.ts'
+import { claimSheets } from '../offline/claim.ts'
 import { forgetPerson, rememberPerson } from './device-person.ts'
 
 /**
  * Remembers who came in, and opens a page whole: what this tab held was for who was here before.
  * @param to an address of ours; from the front page techs go on to Diagnosis
  */
-async function comeIn({ person }: Me, to: string): Promise<void> {
+async function comeIn({ person }: Me, to: string, isNew = false): Promise<void> {
   if (person !== null) await rememberPerson(person)
+  // Whoever makes an account made the check on this device just before. Who signs in may be somebody else, and is asked.
+  if (person !== null && isNew) await claimSheets(person.id).catch(() => undefined)
   window.location.assign(to === '/' && isQualified(person?.role) ? '/diagnosis' : to)
 }
 
@@ -27,7 +30,7 @@ export const signIn = async (email: string, password: string, to: string) =>
   comeIn(await send('POST', '/sign-in', { email, password }, Me), to)
 
 export const signUp = async (account: { email: string; name: string; password: string }, to: string) =>
-  comeIn(await send('POST', '/sign-up', account, Me), to)
+  comeIn(await send('POST', '/sign-up', account, Me), to, true)
 
 export const setPassword = async (token: string, password: string, to: string) =>
   comeIn(await send('POST', `/links/${encodeURIComponent(token)}`, { password }, Me), to)

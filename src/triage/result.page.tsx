@@ -10,6 +10,7 @@ import { Found } from './found.tsx'
 import { GuideLine } from './guide-line.tsx'
 import { PhoneWords } from './phone-words.tsx'
 import { openQuestions, readOut } from './read-out.ts'
+import { LateShare } from './late-share.tsx'
 import { StopView } from './stop-view.tsx'
 import { stopsHere } from './stops-here.ts'
 import { toSheet } from './to-sheet.ts'
@@ -65,6 +66,7 @@ export function Component() {
         Call {shop.name}, {shop.phone}
       </CallButton>
       <PhoneWords words={readOut(triage, stops)} />
+      {open === 0 && <LateShare edition={edition} />}
       {assumed.length > 0 && !nothing && (
         <p className="text-small text-ink-2">You left this open, so we took it that {assumed.join('; ')}.</p>
       )}

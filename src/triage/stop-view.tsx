@@ -8,6 +8,7 @@ import { GuideLine } from './guide-line.tsx'
 import { MadeOff } from './made-off.tsx'
 import { PhoneWords } from './phone-words.tsx'
 import { readOut } from './read-out.ts'
+import { LateShare } from './late-share.tsx'
 import { StopWords } from './stop-words.tsx'
 import { useTriage } from './triage-store.tsx'
 import { WhichWasIt } from './which-was-it.tsx'
@@ -36,6 +37,7 @@ export function StopView({ stops, edition }: { stops: readonly Here[]; edition: 
         ))}
       </Rail>
       <PhoneWords words={readOut(triage, stops)} />
+      <LateShare edition={edition} />
       <p className="screen-only">
         <Link to="/check/2" className="link-alone">
           Add what feeds it and what you notice, for the phone

@@ -3,11 +3,14 @@ import type { ReactNode } from 'react'
 import { newId } from '../offline/new-id.ts'
 import { getSetting, setSetting } from '../offline/settings.ts'
 import { loadSheet, removeSheet, saveSheet } from '../offline/sheets.ts'
+import { sentFindings } from './sent-findings.ts'
 import { blank, Triage } from './triage-state.ts'
 
 type Change = (from: Triage) => Triage
 export type TriageStore = {
   triage: Triage
+  /** The sheet the answers lie in on this device; undefined before the first. */
+  sheetId: () => string | undefined
   /** Keeps the change on the device, then draws it. Resolves once drawn. */
   change: (how: Change) => Promise<void>
   /** Forgets all answers and begins anew; gives the way back. */
@@ -94,6 +97,7 @@ export function TriageProvider({ edition, children }: { edition: string | undefi
       edition: hash.current,
       changedAt: new Date().toISOString(),
       content: triage,
+      sends: sentFindings(triage),
     })
     if (first) await setSetting('openTriage', id.current)
   }, [])
@@ -135,7 +139,7 @@ export function TriageProvider({ edition, children }: { edition: string | undefi
   }, [change])
 
   const store = useMemo(
-    () => drawn && { triage: drawn, change, startAgain, keepsNothing },
+    () => drawn && { triage: drawn, sheetId: () => id.current, change, startAgain, keepsNothing },
     [drawn, change, startAgain, keepsNothing],
   )
   return store === undefined ? null : <Store value={store}>{children}</Store>

@@ -1,17 +1,12 @@
 /** What browser tests share: the whole application on a database of its own, and Debian's Chromium. */
-import { createServer } from 'node:http'
-import type { AddressInfo } from 'node:net'
 import { chromium } from 'playwright-core'
 import type { Browser, BrowserContext, Page } from 'playwright-core'
-import { createApp } from '../../server/app.ts'
-import { EditionFeed } from '../../server/editions/edition-feed.ts'
-import { followEditions } from '../../server/editions/follow-editions.ts'
 import { seedStarter } from '../../server/editions/seed-starter.ts'
-import { openLog } from '../../server/log.ts'
 import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import { testDatabase } from '../server/database.ts'
 import type { TestDatabase } from '../server/database.ts'
-import { testSecret } from '../server/running-app.ts'
+import { runApp } from '../server/running-app.ts'
+import type { RunningApp } from '../server/running-app.ts'
 
 /** What is served: the checkout's build and its worker unless said. */
 type Served = { pages?: string; worker?: boolean }
@@ -28,37 +23,27 @@ export type Site = {
 
 /** Serves the built pages with the starter edition in force. */
 export async function openSite(served: Served = {}): Promise<Site> {
-  const log = openLog('silent')
   const database = await testDatabase()
   await seedStarter(database.db)
   await seedDemoPeople(database.db)
-  const feed = new EditionFeed()
-  const unfollow = followEditions(database.url, database.db, feed, log)
-  let port = 0
-  let stop = () => Promise.resolve()
-  const start = async ({ pages, worker = true }: Served = {}) => {
-    const config = { trustProxy: 0, worker, sessionSecret: testSecret }
-    const { app, close } = createApp({ db: database.db, feed, log, config, ...(pages && { pages }) })
-    const server = createServer(app)
-    await new Promise<void>((resolve) => server.listen(port, '127.0.0.1', resolve))
-    port = (server.address() as AddressInfo).port
-    let stopped: Promise<void> | undefined
-    stop = () =>
-      (stopped ??= new Promise((resolve) => {
-        server.close(() => resolve())
-        close()
-        server.closeAllConnections()
-      }))
+  let running: RunningApp | undefined = await runApp(database.url, served)
+  const { url } = running
+  const port = Number(new URL(url).port)
+  const stop = async () => {
+    const app = running
+    running = undefined
+    await app?.close()
   }
-  await start(served)
   return {
-    url: `http://127.0.0.1:${port}`,
+    url,
     database,
-    start,
-    stop: () => stop(),
+    stop,
+    start: async (again = {}) => {
+      await stop()
+      running = await runApp(database.url, { ...again, port })
+    },
     close: async () => {
       await stop()
-      await unfollow()
       await database.close()
     },
   }

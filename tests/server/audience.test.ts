@@ -1,4 +1,5 @@
 /** Nothing written for qualified people is in anything that a visitor or a homeowner can download. */
+import { randomUUID } from 'node:crypto'
 import { readFileSync, readdirSync, statSync } from 'node:fs'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
@@ -95,7 +96,64 @@ const words = [
   ...new Set(secrets.flatMap((sentence) => sentence.toLowerCase().match(/[a-z]{6,}/g) ?? [])),
 ].filter((_, index) => index % 12 === 0)
 
+/** A tech's sheet with findings, to which everybody here has the link, and one of the homeowner's own. */
+async function sheetsWithFindings(): Promise<{ shared: string; own: string }> {
+  const head = {
+    kind: 'diagnosis',
+    title: 'Cabin',
+    context: { source: 'all-in-one-inverter', system: '120', wiring: 'panel', mode: 'battery' },
+    edition: starterBytes.hash,
+    madeAt: '2026-11-30T09:00:00.000Z',
+    changedAt: '2026-11-30T09:00:00.000Z',
+  }
+  const entry = (finding: string, value: unknown) => {
+    const deviceAt = '2026-11-30T09:01:00.000Z'
+    return { id: randomUUID(), mode: 'battery', finding, value, kept: null, after: [], deviceAt }
+  }
+  const entries = () => [
+    entry('receptacle.hn.volts', 120),
+    entry('receptacle.ng.volts', 119.8),
+    entry('receptacle.hg.volts', 0.3),
+    entry('smoke-or-arcing', 'yes'),
+  ]
+  const begin = async (asker: Asker, kind: string) => {
+    const id = randomUUID()
+    const made = await asker.ask('PUT', `/api/sheets/${id}`, { body: { ...head, kind } })
+    const added = await asker.post(`/api/sheets/${id}/entries`, { entries: entries() })
+    expect([made.status, added.status]).toEqual([200, 200])
+    return id
+  }
+  const link = await askers.tech.post(`/api/sheets/${await begin(askers.tech, 'diagnosis')}/link`)
+  const { token } = (await link.json()) as { token: string }
+  return { shared: token, own: await begin(askers.helper, 'triage') }
+}
+
 describe.each(['visitor', 'helper'] as const)('a %s', (who) => {
+  test('is given no sentence of it with a sheet, its link, or an earlier edition', async () => {
+    const { shared, own } = await sheetsWithFindings()
+    const former = changedEdition('A former title').hash
+    const paths = [
+      `/api/shared/${shared}`,
+      `/api/sheets/${own}`,
+      '/api/sheets',
+      '/api/sheets?q=cabin',
+      `/api/editions/${former}`,
+      `/api/editions/${starterBytes.hash}`,
+    ]
+    for (const path of paths) {
+      const answer = await askers[who].get(path)
+      expect([path, answer.status < 500, leaks(await answer.text())]).toEqual([path, true, []])
+    }
+    for (const hash of [former, starterBytes.hash]) {
+      const named = async (asker: Asker) =>
+        EditionInForce.parse(await (await asker.get(`/api/editions/${hash}`)).json()).files.map(
+          (file) => file.audience,
+        )
+      expect(new Set(await named(askers[who]))).toEqual(new Set(['everyone']))
+      expect(new Set(await named(askers.tech))).toEqual(new Set(['everyone', 'qualified']))
+    }
+  })
+
   test('is given no sentence of it by any address of the server', async () => {
     const paths = [
       '/api/edition',

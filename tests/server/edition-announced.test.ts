@@ -69,13 +69,13 @@ test('an edition put in force by one process reaches the others, and every open 
 test('what was put in force while the listener was cut off is known once it is back', async () => {
   await until(async () => {
     const { rows } = await sql<{ pid: number }>`
-      select pid from pg_stat_activity where datname = current_database() and query ilike 'listen%'
+      select pid from pg_stat_activity where datname = current_database() and query ilike 'listen%edition_in_force%'
     `.execute(database.db)
     return rows.length === 2 ? true : undefined
   })
   const { rows } = await sql<{ gone: boolean }>`
     select pg_terminate_backend(pid) as gone from pg_stat_activity
-    where datname = current_database() and query ilike 'listen%'
+    where datname = current_database() and query ilike 'listen%edition_in_force%'
   `.execute(database.db)
   expect(rows).toHaveLength(2)
   const next = changedEdition('While nobody listened')

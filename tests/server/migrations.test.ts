@@ -32,6 +32,10 @@ test('an empty database comes to the latest, once, even when several processes m
       'one_time_link',
       'person',
       'session',
+      'sheet',
+      'sheet_entry',
+      'sheet_link',
+      'sheet_result',
       'sign_in_try',
     ])
   } finally {

@@ -5,8 +5,10 @@ import { openDatabase } from '../../server/database.ts'
 import type { Db } from '../../server/database.ts'
 import { EditionFeed } from '../../server/editions/edition-feed.ts'
 import { followEditions } from '../../server/editions/follow-editions.ts'
+import { listen } from '../../server/listen.ts'
 import { openLog } from '../../server/log.ts'
 import type { Log } from '../../server/log.ts'
+import { SheetFeed } from '../../server/sheets/sheet-feed.ts'
 
 export type RunningApp = { url: string; db: Db; feed: EditionFeed; close: () => Promise<void> }
 
@@ -32,8 +34,10 @@ export async function runApp(
   const db = openDatabase(databaseUrl, log)
   const feed = new EditionFeed()
   const unfollow = followEditions(databaseUrl, db, feed, log)
+  const sheetFeed = new SheetFeed()
+  const deafen = listen(databaseUrl, 'look_again', (id) => sheetFeed.announce(id), log)
   const config = { trustProxy, worker, sessionSecret: testSecret }
-  const { app, close } = createApp({ db, feed, log, config, ...(pages && { pages }) })
+  const { app, close } = createApp({ db, feed, sheetFeed, log, config, ...(pages && { pages }) })
   const server = createServer(app)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)
@@ -48,7 +52,7 @@ export async function runApp(
       close()
       server.closeAllConnections()
       await closed
-      await unfollow()
+      await Promise.all([unfollow(), deafen()])
       await db.destroy()
     },
   }

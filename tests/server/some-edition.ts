@@ -15,3 +15,12 @@ export function changedEdition(title: string): EditionBytes {
     diagnosis: { ...starter.diagnosis, causes: [{ ...first!, title }, ...others] },
   })
 }
+
+/** An edition that ranks otherwise: it knows nothing of volts at the receptacle. */
+export const rankingOtherwise: EditionBytes = editionBytes({
+  ...starter,
+  diagnosis: {
+    ...starter.diagnosis,
+    groups: starter.diagnosis.groups.filter(({ id }) => !id.startsWith('receptacle-')),
+  },
+})

@@ -1,10 +1,12 @@
 /** Every route, asked by everyone, for one's own and for another's: what it answers, over HTTP. */
+import { randomUUID } from 'node:crypto'
 import { readFileSync, readdirSync } from 'node:fs'
 import { fileURLToPath } from 'node:url'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { putInForce } from '../../server/editions/put-in-force.ts'
 import { seedDemoPeople } from '../../server/people/demo-people.ts'
 import type { Role } from '../../server/people/roles.contract.ts'
+import { tokenHash } from '../../server/token.ts'
 import { Asker, signedIn } from './asker.ts'
 import { testDatabase } from './database.ts'
 import type { TestDatabase } from './database.ts'
@@ -21,6 +23,29 @@ const askers = {} as Record<Who, Asker>
 const ids = {} as Record<Role, string>
 /** Somebody whom no test signs in. */
 let another: string
+
+async function addSheets(): Promise<void> {
+  const owners = [...who.map((asker) => [sheetOf(asker), asker === 'visitor' ? null : ids[asker]] as const)]
+  for (const [id, owner_id] of [...owners, [anothersSheet, another] as const])
+    await database.db
+      .insertInto('sheet')
+      .values({
+        id,
+        owner_id,
+        key_hash: owner_id === null ? 'a'.repeat(64) : null,
+        kind: 'triage',
+        title: 'A sheet',
+        context: JSON.stringify(head.context),
+        edition_hash: head.edition,
+        made_at: new Date(head.madeAt),
+        changed_at: new Date(head.changedAt),
+      })
+      .execute()
+  await database.db
+    .insertInto('sheet_link')
+    .values({ sheet_id: anothersSheet, token_hash: tokenHash(sharedToken) })
+    .execute()
+}
 
 beforeAll(async () => {
   database = await testDatabase()
@@ -39,6 +64,7 @@ beforeAll(async () => {
     made_by: null,
   } as const
   another = (await database.db.insertInto('person').values(row).returning('id').executeTakeFirstOrThrow()).id
+  await addSheets()
 })
 afterAll(async () => {
   await app.close()
@@ -82,10 +108,39 @@ type Row = {
   /** Which object is asked for, where it matters. */
   of?: string
   path: (asker: Who) => string
+  /** A function is given an id that nothing else has. */
   body?: unknown
   status: Record<Who, number>
 }
 const own = (asker: Who) => (asker === 'visitor' ? ids.helper : ids[asker])
+
+const head = {
+  kind: 'triage',
+  title: 'A sheet',
+  context: { source: 'power-station', system: '120', wiring: 'panel' },
+  edition: starterBytes.hash,
+  madeAt: '2026-11-30T09:00:00.000Z',
+  changedAt: '2026-11-30T09:00:00.000Z',
+}
+const entries = (id: string) => ({
+  entries: [
+    {
+      id,
+      mode: 'battery',
+      finding: 'tingle',
+      value: 'no',
+      kept: null,
+      after: [],
+      deviceAt: '2026-11-30T09:01:00.000Z',
+    },
+  ],
+})
+/** A sheet of each asker's; that of a visitor has a key which nobody here holds. */
+const sheetOf = (asker: Who) => `5ee70000-0000-4000-8000-00000000000${who.indexOf(asker)}`
+const anothersSheet = '5ee70000-0000-4000-8000-0000000000aa'
+const sharedToken = 'the token of the link that is given to everyone here'
+const ownSheet = (status: number) => ({ ...all(status), visitor: 404 })
+const forOwner = { visitor: 401, helper: 200, tech: 200, senior: 200, admin: 200 }
 
 /** Routes that end a session stand at the bottom, with one that is no session's. */
 const table: Row[] = [
@@ -93,6 +148,8 @@ const table: Row[] = [
   { route: 'get /edition', path: () => '/api/edition', status: all(200) },
   { route: 'get /edition/events', path: () => '/api/edition/events', status: all(200) },
   { route: 'get /editions', path: () => '/api/editions', status: all(200) },
+  { route: 'get /editions/:hash', path: () => `/api/editions/${starterBytes.hash}`, status: all(200) },
+  { route: 'get /editions/:hash', of: 'no hash', path: () => '/api/editions/1', status: all(404) },
   {
     route: 'get /edition-files/:hash',
     of: 'for everyone',
@@ -241,6 +298,137 @@ const table: Row[] = [
     path: () => '/api/account/password',
     status: { ...all(400), visitor: 401 },
   },
+  { route: 'get /sheets', path: () => '/api/sheets', status: forOwner },
+  {
+    route: 'put /sheets/:id',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}`,
+    body: head,
+    status: forOwner,
+  },
+  {
+    route: 'put /sheets/:id',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}`,
+    body: head,
+    status: { ...all(404), visitor: 401 },
+  },
+  {
+    route: 'put /sheets/:id',
+    of: 'a new Diagnosis sheet',
+    path: (asker) => `/api/sheets/${sheetOf(asker).replace('5ee7', '5ee8')}`,
+    body: { ...head, kind: 'diagnosis' },
+    status: forQualified,
+  },
+  {
+    route: 'get /sheets/:id',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}`,
+    status: ownSheet(200),
+  },
+  {
+    route: 'get /sheets/:id',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}`,
+    status: all(404),
+  },
+  { route: 'get /sheets/:id', of: 'no id', path: () => '/api/sheets/1', status: all(404) },
+  {
+    route: 'post /sheets/:id/entries',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}/entries`,
+    body: entries,
+    status: ownSheet(200),
+  },
+  {
+    route: 'post /sheets/:id/entries',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}/entries`,
+    body: entries,
+    status: all(404),
+  },
+  {
+    route: 'get /sheets/:id/events',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}/events`,
+    status: ownSheet(200),
+  },
+  {
+    route: 'get /sheets/:id/events',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}/events`,
+    status: all(404),
+  },
+  {
+    route: 'post /sheets/:id/link',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}/link`,
+    status: ownSheet(201),
+  },
+  {
+    route: 'post /sheets/:id/link',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}/link`,
+    status: all(404),
+  },
+  {
+    route: 'delete /sheets/:id/link',
+    of: 'own',
+    path: (asker) => `/api/sheets/${sheetOf(asker)}/link`,
+    status: ownSheet(200),
+  },
+  {
+    route: 'delete /sheets/:id/link',
+    of: 'another’s',
+    path: () => `/api/sheets/${anothersSheet}/link`,
+    status: all(404),
+  },
+  // What somebody without an account began opens with the key of their device alone.
+  ...(
+    [
+      ['get /sheets/:id', ''],
+      ['get /sheets/:id/events', '/events'],
+      ['put /sheets/:id', ''],
+      ['post /sheets/:id/entries', '/entries'],
+      ['post /sheets/:id/link', '/link'],
+      ['delete /sheets/:id/link', '/link'],
+    ] as const
+  ).map(([route, rest]): Row => ({
+    route,
+    of: 'a visitor’s, without its key',
+    path: () => `/api/sheets/${sheetOf('visitor')}${rest}`,
+    ...(route.startsWith('put') && { body: head }),
+    ...(rest === '/entries' && { body: entries('e0000000-0000-4000-8000-0000000000bb') }),
+    status: { ...all(404), ...(route.startsWith('put') && { visitor: 401 }) },
+  })),
+  { route: 'get /shared/:token', of: 'given', path: () => `/api/shared/${sharedToken}`, status: all(200) },
+  { route: 'get /shared/:token', of: 'made up', path: () => '/api/shared/nonsense', status: all(404) },
+  {
+    route: 'post /shared/:token/entries',
+    of: 'given',
+    path: () => `/api/shared/${sharedToken}/entries`,
+    body: entries,
+    status: forQualified,
+  },
+  {
+    route: 'post /shared/:token/entries',
+    of: 'made up',
+    path: () => '/api/shared/nonsense/entries',
+    body: entries,
+    status: { ...all(404), visitor: 401, helper: 403 },
+  },
+  {
+    route: 'get /shared/:token/events',
+    of: 'given',
+    path: () => `/api/shared/${sharedToken}/events`,
+    status: all(200),
+  },
+  {
+    route: 'get /shared/:token/events',
+    of: 'made up',
+    path: () => '/api/shared/nonsense/events',
+    status: all(404),
+  },
   {
     route: 'post /sign-out-everywhere',
     path: () => '/api/sign-out-everywhere',
@@ -265,14 +453,15 @@ describe.each(table)('$route $of', ({ route, path, body, status }) => {
   test.each(who)('asked by a %s', async (asker) => {
     const method = route.split(' ')[0]!.toUpperCase()
     const before = await askers[asker].whoAmI()
-    const answer = await askers[asker].ask(method, path(asker), { body })
+    const sent: unknown = typeof body === 'function' ? (body as (id: string) => unknown)(randomUUID()) : body
+    const answer = await askers[asker].ask(method, path(asker), { body: sent })
     expect(answer.status).toBe(status[asker])
     if (status[asker] >= 400) {
       expect(answer.headers.get('content-type')).toMatch(/^application\/problem\+json/)
       expect(answer.headers.get('cache-control')).toBe('no-store')
       expect(await askers[asker].whoAmI()).toBe(before)
     }
-    if (route === 'get /edition/events') await answer.body?.cancel()
+    if (route.endsWith('/events')) await answer.body?.cancel()
   })
 })
 
