@@ -88,7 +88,7 @@ describe('hostile Markdown', () => {
   test('does no harm in the preview, nor to readers once it is in force', async () => {
     const { page, strays, end } = await visit(browser, site)
     await signInAs(page, 'senior')
-    await openEditor(page, 'two-hots')
+    await openEditor(page, 'aluminum-wire')
     const body = hostileMarkdown.map(([tries, markdown]) => `## ${tries}\n\n${markdown}\n`).join('\n')
     await fill(page, `Lead.\n\n> **Warning:** Words.\n\n${body}`)
     await page.getByLabel('Title').fill('Hostile <img src=x onerror=harm()>')
@@ -103,7 +103,7 @@ describe('hostile Markdown', () => {
 
     const reader = await visit(browser, site)
     const refused = await watchPolicy(reader.page)
-    await reader.page.goto('/articles/two-hots')
+    await reader.page.goto('/articles/aluminum-wire')
     await reader.page.getByRole('heading', { level: 2, name: 'a template' }).waitFor()
     await settled(reader.page)
     await expectHarmless(reader.page.getByRole('article'))
@@ -121,15 +121,14 @@ describe('hostile Markdown', () => {
   })
 
   test.each([
-    ['huge nesting', `${'> '.repeat(40_000)}deep`, /lie more than 12 deep/],
-    ['lists in lists', `${'- '.repeat(9_000)}deep`, /lie more than 12 deep/],
+    ['huge nesting', `${'> '.repeat(9_000)}deep`, /lie more than 100 deep/],
+    ['lists in lists', `${'- '.repeat(9_000)}deep`, /lie more than 100 deep/],
     ['one endless paragraph', '_a*b'.repeat(20_000), /longer than 20,000 characters/],
     ['5 MB', 'Five megabytes of it. '.repeat(240_000), /longer than 200 kB/],
   ])('%s is refused beside the field, and the page goes on', async (_, markdown, says) => {
     const { page, complaints, end } = await visit(browser, site)
     await signInAs(page, 'senior')
     await openEditor(page, 'isolated-output')
-    const before = await keptText(page, 'isolated-output')
     // As from the clipboard: typing five megabytes takes the driver longer than the page.
     await text(page).press('ControlOrMeta+a')
     await text(page).evaluate((node, pasted) => {
@@ -145,7 +144,7 @@ describe('hostile Markdown', () => {
     await fill(page, 'Short again.\n\n> **Caution:** Hot.')
     await preview(page).getByText('Short again.').waitFor()
     await saved(page)
-    expect(await keptText(page, 'isolated-output')).not.toBe(before)
+    expect(await keptText(page, 'isolated-output')).toBe('Short again.\n\n> **Caution:** Hot.')
     expect(complaints).toEqual([])
     await end()
   })
