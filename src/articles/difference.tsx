@@ -7,8 +7,9 @@ const shownAround = 160
 function Same({ text, first, last }: { text: string; first: boolean; last: boolean }) {
   const [open, setOpen] = useState(false)
   if (open || text.length < 3 * shownAround) return <span>{text}</span>
-  const before = first ? '' : text.slice(0, shownAround)
-  const after = last ? '' : text.slice(-shownAround)
+  // Cut between words.
+  const before = first ? '' : text.slice(0, shownAround).replace(/\S+$/, '')
+  const after = last ? '' : text.slice(-shownAround).replace(/^\S+\s/, '')
   return (
     <span>
       {before}

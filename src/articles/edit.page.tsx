@@ -34,7 +34,7 @@ import './articles.css'
 import './editing.css'
 
 function SavingWords({ saving, onlyHere }: { saving: Saving; onlyHere: boolean }) {
-  const where = onlyHere ? 'only on this page: keep it open' : 'on this device only'
+  const where = onlyHere ? 'only on this page (keep it open)' : 'on this device only'
   switch (saving.state) {
     case 'saved':
       return <SavingState state="sent">Draft saved</SavingState>

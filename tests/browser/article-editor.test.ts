@@ -4,7 +4,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { axeFindings } from './axe.ts'
 import { openBrowser, openSite, settled, visit } from './browser.ts'
 import type { Site } from './browser.ts'
-import { button, keptText, openEditor, preview, saved, text, typeIn } from './editor-steps.ts'
+import { add, button, keptText, openEditor, preview, saved, text, typeIn } from './editor-steps.ts'
 import { expectHarmless } from './harmless.ts'
 import { hostileMarkdown } from './hostile-markdown.ts'
 import { signInAs } from './sign-in-as.ts'
@@ -91,7 +91,10 @@ describe('hostile Markdown', () => {
     await openEditor(page, 'aluminum-wire')
     const body = hostileMarkdown.map(([tries, markdown]) => `## ${tries}\n\n${markdown}\n`).join('\n')
     // One link of them leads to a page that is not there, which alone would keep it from being put in force.
-    await fill(page, `Lead.\n\n> **Warning:** Words.\n\n${body}`.replaceAll('/tests/x', '/tests/tester-lamps'))
+    await fill(
+      page,
+      `Lead.\n\n> **Warning:** Words.\n\n${body}`.replaceAll('/tests/x', '/tests/tester-lamps'),
+    )
     await page.getByLabel('Title').fill('Hostile <img src=x onerror=harm()>')
     await preview(page).getByRole('heading', { name: 'a template' }).waitFor()
     for (const link of await preview(page).getByRole('link').all()) await link.hover()
@@ -241,6 +244,52 @@ describe('what was typed and not sent', () => {
     await both.getByRole('button', { name: 'Go on with mine' }).click()
     await saved(page)
     expect(await keptText(page, 'open-neutral')).toMatch(/First of all\.\n\nTyped while it was on its way\.$/)
+    await end()
+  })
+
+  test('is not overwritten by the other text that one goes on with', async () => {
+    const [mine, other] = [await visit(browser, site), await visit(browser, site)]
+    const { page } = mine
+    await signInAs(page, 'senior')
+    await signInAs(other.page, 'admin')
+    await openEditor(page, 'balanced-output')
+    await openEditor(other.page, 'balanced-output')
+    await add(other.page, 'By the admin.')
+    await typeIn(page, 'By the senior.')
+    const both = page.getByRole('alert', { name: 'Two texts' })
+    await both.getByText('Demo admin changed this article while you were writing.').waitFor()
+    let letGo = () => {}
+    const held = new Promise<void>((resolve) => (letGo = resolve))
+    await page.route('**/api/article-drafts/balanced-output', async (route) => {
+      if (route.request().method() === 'PUT') await held
+      await route.continue()
+    })
+    await both.getByRole('button', { name: 'Go on with theirs' }).click()
+    await typeIn(page, 'Typed meanwhile.')
+    letGo()
+    await both.getByText('Another text of yours came in while you were writing.').waitFor()
+    await both.getByRole('button', { name: 'Go on with mine' }).click()
+    await saved(page)
+    expect(await keptText(page, 'balanced-output')).toMatch(/By the senior\.\n\nTyped meanwhile\.$/)
+    await mine.end()
+    await other.end()
+  })
+
+  test('is said to lie on the page alone where the device keeps nothing', async () => {
+    const { page, end } = await visit(browser, site)
+    await page.addInitScript(() => {
+      IDBObjectStore.prototype.put = () => {
+        throw new DOMException('full', 'QuotaExceededError')
+      }
+    })
+    await signInAs(page, 'senior')
+    await openEditor(page, 'isolated-output')
+    await page.route('**/api/**', (route) => route.abort())
+    await typeIn(page, 'Typed on a full device.')
+    await page.getByText('No network: only on this page (keep it open). It is sent again.').waitFor()
+    await page.unroute('**/api/**')
+    await saved(page)
+    expect(await keptText(page, 'isolated-output')).toMatch(/Typed on a full device\.$/)
     await end()
   })
 })
