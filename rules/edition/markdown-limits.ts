@@ -3,7 +3,7 @@ export const mostBodyBytes = 200_000
 export const tooLong = 'The text is longer than 200 kB. Make two articles of it.'
 
 /** Quotes and lists within one another, at most. A renderer of Markdown calls itself for each. */
-const mostNested = 12
+const mostNested = 100
 /** Characters without an empty line, at most: what renders a paragraph takes the square of its length. */
 const mostTogether = 20_000
 

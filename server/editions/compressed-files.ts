@@ -4,7 +4,11 @@ import type { Db } from '../database.ts'
 import { findFile } from './editions.queries.ts'
 
 export type Encoding = 'br' | 'gzip' | 'identity'
-export type CompressedFile = { forEveryone: boolean; bytes: Readonly<Record<Encoding, Buffer>> }
+export type CompressedFile = {
+  name: string
+  forEveryone: boolean
+  bytes: Readonly<Record<Encoding, Buffer>>
+}
 
 const brotli = promisify(brotliCompress)
 const gzipped = promisify(gzip)
@@ -17,7 +21,11 @@ async function load(db: Db, hash: string): Promise<CompressedFile | undefined> {
     brotli(file.bytes, { params: { [constants.BROTLI_PARAM_QUALITY]: 9 } }),
     gzipped(file.bytes, { level: 9 }),
   ])
-  return { forEveryone: file.audience === 'everyone', bytes: { br, gzip: gz, identity: file.bytes } }
+  return {
+    name: file.name,
+    forEveryone: file.audience === 'everyone',
+    bytes: { br, gzip: gz, identity: file.bytes },
+  }
 }
 
 /** Edition files, each compressed once and kept; those asked for last stay. Undefined for an unknown hash. */

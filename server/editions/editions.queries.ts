@@ -68,7 +68,7 @@ export function listFiles(db: Db, editionNumber: number, forQualified: boolean) 
 export function findFile(db: Db, hash: string) {
   return db
     .selectFrom('edition_file')
-    .select(['audience', 'bytes'])
+    .select(['name', 'audience', 'bytes'])
     .where('hash', '=', hash)
     .orderBy(sql`audience = 'everyone'`, 'desc')
     .limit(1)

@@ -8,6 +8,7 @@ import { editionCounts } from './count-edition.ts'
 import { EditionInForce, EditionList } from './editions.contract.ts'
 import { editionInForce, editionOfHash, listEditions, listFiles } from './editions.queries.ts'
 import type { EditionRow } from './editions.queries.ts'
+import { stillOpen } from './still-open.ts'
 
 const year = 31_536_000
 // The smallest first: browsers name gzip before br without meaning it.
@@ -29,6 +30,7 @@ export function editionRoutes(db: Db, events: RequestHandler): Router {
     ])
     return EditionInForce.parse({ ...edition, inForceSince: since.toISOString(), counts, files })
   }
+  const isStillOpen = stillOpen(db)
   return Router()
     .get('/edition', async (req, res) => {
       res.json(await asked(req, (await editionInForce(db)) ?? noneYet()))
@@ -54,15 +56,20 @@ export function editionRoutes(db: Db, events: RequestHandler): Router {
       const { hash } = req.params
       const file = /^[0-9a-f]{64}$/.test(hash) ? await fileOf(hash) : undefined
       if (file === undefined) throw notFound('file')
-      if (!file.forEveryone && !mayReadQualified(req))
+      const forAnyone =
+        file.forEveryone && (await isStillOpen({ name: file.name, hash, bytes: file.bytes.identity }))
+      if (!forAnyone && !mayReadQualified(req))
         throw new Problem(personOf(req) === undefined ? 'unauthorized' : 'forbidden')
       const encoding = preferred.find((one) => req.acceptsEncodings(one) === one) ?? 'identity'
       res.set({
-        // What is for qualified people must be gone when they sign out: no cache but the page's own keeps it.
-        'Cache-Control': file.forEveryone ? `public, max-age=${year}, immutable` : 'private, no-store',
+        // What is for qualified people must be gone when they sign out: no cache but the page's own keeps it. An
+        // article may become theirs later, so what holds articles lies in no cache that serves others.
+        'Cache-Control': !forAnyone
+          ? 'private, no-store'
+          : `${file.name === 'articles-everyone' ? 'private' : 'public'}, max-age=${year}, immutable`,
         'Content-Type': 'application/json; charset=utf-8',
         ETag: `"${hash}${encoding === 'identity' ? '' : `-${encoding}`}"`,
-        Vary: file.forEveryone ? 'Accept-Encoding' : 'Accept-Encoding, Cookie',
+        Vary: forAnyone ? 'Accept-Encoding' : 'Accept-Encoding, Cookie',
         ...(encoding === 'identity' ? {} : { 'Content-Encoding': encoding }),
       })
       res.send(file.bytes[encoding])

@@ -34,7 +34,7 @@ import './articles.css'
 import './editing.css'
 
 function SavingWords({ saving, onlyHere }: { saving: Saving; onlyHere: boolean }) {
-  const where = onlyHere ? 'only on this page: keep it open' : 'on this device only'
+  const where = onlyHere ? 'only on this page (keep it open)' : 'on this device only'
   switch (saving.state) {
     case 'saved':
       return <SavingState state="sent">Draft saved</SavingState>
@@ -61,7 +61,7 @@ function Preview({ slug, text }: { slug: string; text: DraftText }) {
   const late = useDeferredValue(text)
   const article = useMemo(() => articleOf(slug, late), [slug, late])
   return (
-    <section className="draft-preview" aria-label="As readers will see it">
+    <section className="draft-preview" aria-label="As readers will see it" tabIndex={0}>
       <p className="draft-preview-head">As readers will see it</p>
       <ArticleKind article={article} />
       <p className="draft-title">{article.title === '' ? 'No title yet' : article.title}</p>
@@ -119,14 +119,14 @@ function Editor({ slug, personId, knowledge, opened, unsent }: EditorProps) {
       <TwoTexts desk={desk} />
       <Overtaken desk={desk} />
       <div className="draft-desk">
-        <div>
-          <DraftFields desk={desk} knowledge={knowledge} faults={{ ...faults, ...refusedFields }} />
+        <DraftFields desk={desk} knowledge={knowledge} faults={{ ...faults, ...refusedFields }} />
+        <Preview slug={slug} text={text} />
+        <div className="draft-rest">
           <PutInForce slug={slug} desk={desk} knowledge={knowledge} faults={faults} />
           <Withdrawal slug={slug} desk={desk} knowledge={knowledge} faults={faults} />
           <Revisions slug={slug} desk={desk} />
           <ReaderWords slug={slug} />
         </div>
-        <Preview slug={slug} text={text} />
       </div>
     </>
   )

@@ -2,9 +2,10 @@
 import { markdown, markdownLanguage } from '@codemirror/lang-markdown'
 import { HighlightStyle, syntaxHighlighting } from '@codemirror/language'
 import { tags } from '@lezer/highlight'
-import CodeMirror, { EditorView } from '@uiw/react-codemirror'
+import CodeMirror, { Compartment, EditorState, EditorView } from '@uiw/react-codemirror'
 import { useCallback, useMemo, useState } from 'react'
 import { createPortal } from 'react-dom'
+import { tooMuchMarkdown } from '../../rules/edition/markdown-limits.ts'
 
 export type MarkdownEditorProps = {
   label: string
@@ -32,12 +33,18 @@ const inks = HighlightStyle.define([
   { tag: tags.link, color: 'var(--glow)' },
   { tag: [tags.url, tags.processingInstruction, tags.monospace], color: 'var(--ink-2)' },
 ])
-const writing = [
-  markdown({ base: markdownLanguage, completeHTMLTags: false }),
-  syntaxHighlighting(inks),
-  look,
-  EditorView.lineWrapping,
-]
+// What is too much for the preview is too much for the editor's own reading of it too: then it is plain text. Decided
+// with the change itself, because the change is read before anything else can look at it.
+const reading = new Compartment()
+const asMarkdown = [markdown({ base: markdownLanguage, completeHTMLTags: false }), syntaxHighlighting(inks)]
+const asPlain = [syntaxHighlighting(inks)]
+const choose = (text: string) => (tooMuchMarkdown(text) === undefined ? asMarkdown : asPlain)
+const readOrNot = EditorState.transactionExtender.of((change) => {
+  if (!change.docChanged) return null
+  const wanted = choose(change.newDoc.toString())
+  return reading.get(change.startState) === wanted ? null : { effects: reading.reconfigure(wanted) }
+})
+const writing = [readOrNot, look, EditorView.lineWrapping]
 // What is left out has words or colors that are not ours, or takes the page's own keys.
 const setup = {
   lineNumbers: false,
@@ -67,9 +74,11 @@ export function MarkdownEditor({ label, about, invalid, value, onText, onReady }
   const host = useCallback((node: HTMLDivElement | null) => {
     if (node !== null) setRoot(node.shadowRoot ?? node.attachShadow({ mode: 'open', delegatesFocus: true }))
   }, [])
+  const read = choose(value)
   const extensions = useMemo(
     () => [
       writing,
+      reading.of(read),
       EditorView.contentAttributes.of({
         'aria-label': label,
         'aria-describedby': 'about',
@@ -79,7 +88,7 @@ export function MarkdownEditor({ label, about, invalid, value, onText, onReady }
         ...(invalid && { 'aria-invalid': 'true' }),
       }),
     ],
-    [label, invalid],
+    [label, invalid, read],
   )
   return (
     <div className={`input markdown-editor ${invalid ? 'markdown-editor-invalid' : ''}`} ref={host}>

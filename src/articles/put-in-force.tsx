@@ -94,7 +94,7 @@ export function PutInForce({ slug, desk, faults }: Props) {
             onText={setReason}
             error={refusal?.errors['reason']}
           />
-          <div>
+          <div className="w-fit">
             <Button type="submit" look="main" barredBecause={bars}>
               {sending ? 'Putting it in force …' : 'Put in force'}
             </Button>

@@ -105,7 +105,7 @@ describe('a senior', () => {
     await openEditor(page, 'backfeed')
     await page.route('**/api/**', (route) => route.abort())
     await typeIn(page, 'Typed in a crawl space.')
-    await page.getByText('No network: only on this page.').waitFor()
+    await page.getByText('No network: on this device only.').waitFor()
     await page.unroute('**/api/**')
     await saved(page)
     await page.reload()

@@ -31,6 +31,7 @@ let senior: Asker
 let admin: Asker
 let tech: Asker
 let visitor: Asker
+let homeowner: Asker
 beforeAll(async () => {
   database = await testDatabase()
   await seedStarter(database.db)
@@ -40,6 +41,7 @@ beforeAll(async () => {
   admin = await signedIn(app, 'admin')
   tech = await signedIn(app, 'tech')
   visitor = new Asker(app)
+  homeowner = await signedIn(app, 'helper')
 })
 afterAll(async () => {
   await app.close()
@@ -304,6 +306,105 @@ describe('put in force', () => {
     )
     expect(answers.map((answer) => answer.status).sort()).toEqual([200, 409, 409])
     expect((await inForce()).number).toBe(number + 1)
+  })
+
+  test('two articles at the same moment: an edition each, and the later holds both', async () => {
+    const [one, two] = await Promise.all([
+      changedBy(senior, 'shared-neutral-lost', 'From the senior.'),
+      changedBy(admin, 'low-source-voltage', 'From the admin.'),
+    ])
+    const { number } = await inForce()
+    const answers = await Promise.all([
+      putInForce(senior, 'shared-neutral-lost', one.version),
+      putInForce(admin, 'low-source-voltage', two.version),
+    ])
+    const editions = await Promise.all(
+      answers.map(async (answer) => ArticleInForce.parse(await answer.json()).edition),
+    )
+    expect(editions.sort((a, b) => a - b)).toEqual([number + 1, number + 2])
+    expect((await served(tech, 'shared-neutral-lost'))?.body).toMatch(/From the senior\.$/)
+    expect((await served(tech, 'low-source-voltage'))?.body).toMatch(/From the admin\.$/)
+  })
+
+  test('what fails half way leaves nothing: no edition, no revision, and the draft as it was', async () => {
+    const draft = await changedBy(senior, 'high-source-voltage', 'Never in force.')
+    const state = async () => ({
+      inForce: await inForce(),
+      draft: await read(senior, 'high-source-voltage'),
+      revisions: await revisions('high-source-voltage'),
+      editions: EditionList.parse(await (await tech.get('/api/editions')).json()),
+    })
+    const before = await state()
+    // The last step of all: the edition is kept and in force by then, and so is the revision.
+    await sql`
+      create function fail_half_way() returns trigger language plpgsql as
+      $$ begin raise exception 'half way'; end $$
+    `.execute(database.db)
+    await sql`
+      create trigger fail_half_way before update on article_draft
+      for each row when (old.slug = 'high-source-voltage') execute function fail_half_way()
+    `.execute(database.db)
+    expect((await putInForce(senior, 'high-source-voltage', draft.version)).status).toBe(500)
+    expect(await state()).toEqual(before)
+    await sql`drop trigger fail_half_way on article_draft`.execute(database.db)
+    expect((await putInForce(senior, 'high-source-voltage', draft.version)).status).toBe(200)
+    expect((await served(tech, 'high-source-voltage'))?.body).toMatch(/Never in force\.$/)
+  })
+})
+
+describe('a former edition’s file for everyone', () => {
+  const fileHash = async () => (await inForce()).files.find((file) => file.name === 'articles-everyone')!.hash
+  const statuses = (hash: string) =>
+    Promise.all(
+      [visitor, homeowner, tech, senior].map(
+        async (asker) => (await asker.get(`/api/edition-files/${hash}`)).status,
+      ),
+    )
+
+  test('is served on while all that stands in it still is for everyone', async () => {
+    const former = await fileHash()
+    const draft = await changedBy(senior, 'long-run', 'Another line.')
+    expect((await putInForce(senior, 'long-run', draft.version)).status).toBe(200)
+    expect(await fileHash()).not.toBe(former)
+    expect(await statuses(former)).toEqual([200, 200, 200, 200])
+  })
+
+  test('is for qualified people alone once an article of it is', async () => {
+    const former = await fileHash()
+    const holds = async (hash: string) =>
+      (await (await visitor.get(`/api/edition-files/${hash}`)).text()).includes('"slug":"backfeed"')
+    expect(await holds(former)).toBe(true)
+    const seen = await read(senior, 'backfeed')
+    const head = { ...seen.text!.head, audience: 'qualified' as const }
+    const draft = await saved(await save(senior, 'backfeed', seen.version, { ...seen.text!, head }))
+    expect((await putInForce(senior, 'backfeed', draft.version)).status).toBe(200)
+    expect(await statuses(former)).toEqual([401, 403, 200, 200])
+    const theirs = await tech.get(`/api/edition-files/${former}`)
+    expect(theirs.headers.get('cache-control')).toBe('private, no-store')
+    expect(await statuses(await fileHash())).toEqual([200, 200, 200, 200])
+    expect(await holds(await fileHash())).toBe(false)
+    expect(await holds(former)).toBe(false)
+    // Back with everyone, the former file says nothing that everyone may not read.
+    const again = await read(senior, 'backfeed')
+    const back = await saved(
+      await save(senior, 'backfeed', again.version, {
+        ...again.text!,
+        head: { ...head, audience: 'everyone' },
+      }),
+    )
+    expect((await putInForce(senior, 'backfeed', back.version)).status).toBe(200)
+    expect(await statuses(former)).toEqual([200, 200, 200, 200])
+  })
+
+  test('and once one of it is withdrawn, because there it stands without a mark', async () => {
+    const former = await fileHash()
+    const withdraw = (withdrawn: boolean) =>
+      senior.ask('PUT', at('open-neutral', '/withdrawn'), { body: { withdrawn, reason: 'A test' } })
+    expect((await withdraw(true)).status).toBe(200)
+    expect(await statuses(former)).toEqual([401, 403, 200, 200])
+    expect(await served(visitor, 'open-neutral')).toHaveProperty('withdrawn')
+    expect((await withdraw(false)).status).toBe(200)
+    expect(await statuses(former)).toEqual([200, 200, 200, 200])
   })
 })
 

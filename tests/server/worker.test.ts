@@ -17,6 +17,7 @@ const built: Record<string, string> = {
   '.made-of': 'hidden',
   'assets/main-1a2b3c.js': 'export {}',
   'assets/main-1a2b3c.css': 'body {}',
+  'assets/markdown-editor-1a2b3c.js': 'export {}',
 }
 beforeAll(async () => {
   pages = await mkdtemp(join(tmpdir(), 'tracelamp-worker-'))
@@ -35,7 +36,7 @@ test('the worker keeps what pages are made of, each under what changes with it',
     expect(text).toMatch(new RegExp(`/${path}.{1,20}${revisionOf(built[path]!)}`))
   for (const path of ['assets/main-1a2b3c.js', 'assets/main-1a2b3c.css'])
     expect(text).toMatch(new RegExp(`/${path}.{1,20}null`))
-  expect(text).not.toMatch(/icon-192|made-of|builtFiles|\bimport\b|process\.env/)
+  expect(text).not.toMatch(/icon-192|markdown-editor|made-of|builtFiles|\bimport\b|process\.env/)
 })
 
 test('it changes when a page does, and only then', async () => {
