@@ -91,7 +91,7 @@ test('two who enter different readings without a network: both stay, with who an
     await page.getByText('All sent').waitFor()
   }
   for (const { page } of [tech, senior]) {
-    const panel = page.getByRole('complementary', { name: 'Others on this sheet' })
+    const panel = page.getByRole('region', { name: 'Readings that contradict each other' })
     await panel.getByText('Two people entered different readings.').waitFor()
     await panel.getByText(/121\.4 V: Demo tech, .*\d{4}.*\d:\d\d:\d\d/).waitFor()
     await panel.getByText(/117\.5 V: Demo senior tech, .*\d{4}.*\d:\d\d:\d\d/).waitFor()
@@ -100,7 +100,7 @@ test('two who enter different readings without a network: both stay, with who an
   }
   expect(await ranking(tech.page)).toEqual(await ranking(senior.page))
 
-  await tech.page.getByRole('button', { name: /^Keep 121\.4 V for / }).focus()
+  await tech.page.getByRole('button', { name: /^Keep this one: 121\.4 V/ }).focus()
   await tech.page.keyboard.press('Enter')
   for (const { page } of [tech, senior]) {
     await page.getByText('Two people entered different readings.').waitFor({ state: 'detached' })
