@@ -4,7 +4,7 @@ import { afterAll, beforeAll, expect, test } from 'vitest'
 import { openBrowser, openSite, visit } from './browser.ts'
 import type { Site } from './browser.ts'
 import { choose } from './check-steps.ts'
-import { field, ranking, read } from './diagnosis-steps.ts'
+import { field, observe, ranking, read } from './diagnosis-steps.ts'
 import { makeLink, onServer, openLink, sayOnline } from './sheet-steps.ts'
 import { signInAs } from './sign-in-as.ts'
 
@@ -41,7 +41,10 @@ test('sign-up, a check, its link, a tech: each sees the other’s findings withi
   await second.goto('/check/3')
   await choose(second, 'How much is affected?', 'Everything')
   since = Date.now()
-  await tech.page.getByRole('row', { name: /Everything/ }).waitFor()
+  await tech.page
+    .getByRole('row', { name: /Everything/ })
+    .first()
+    .waitFor()
   expect(Date.now() - since).toBeLessThan(withinMs)
   await second.close()
 
@@ -124,6 +127,12 @@ test('the server restarts: both pages take the line up again, and what was misse
   await tech.page.getByText('On this device only: 1').waitFor()
   await site.start()
   await home.page.getByText(/119\.1 V/).waitFor()
+
+  // What stops the tech's page stops the homeowner's: in place of what it may be, not below it.
+  await observe(tech.page, 'tingle', 'Tingle', 'Yes')
+  await home.page.getByRole('heading', { name: 'Why we say so' }).waitFor()
+  expect(await home.page.getByRole('heading', { name: 'What it may be' }).count()).toBe(0)
+  await home.page.getByText('Tingle: Yes').waitFor()
   await home.end()
   await tech.end()
 })
