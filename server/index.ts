@@ -11,6 +11,7 @@ import { seedStarter } from './editions/seed-starter.ts'
 import { listen } from './listen.ts'
 import { openLog } from './log.ts'
 import { seedDemoPeople, shutOutDemoPeople } from './people/demo-people.ts'
+import { seedDemoSheets, shutDemoLinks } from './sheets/demo-sheets.ts'
 import { SheetFeed } from './sheets/sheet-feed.ts'
 
 const patienceMs = 30_000
@@ -29,6 +30,7 @@ async function main(): Promise<void> {
   )
 
   await whenDatabaseIsUp(() => (config.demo ? seedDemoPeople(db) : shutOutDemoPeople(db)))
+  await whenDatabaseIsUp(() => (config.demo ? seedDemoSheets(db) : shutDemoLinks(db)))
 
   const feed = new EditionFeed()
   const unfollow = followEditions(config.databaseUrl, db, feed, log)

@@ -201,6 +201,18 @@ export async function keepDemoPerson(db: Db, person: Omit<NewColumns, 'made_by'>
     .execute()
 }
 
+/** The demo person with a role. Undefined where there is none. */
+export function findDemoPerson(db: Db, role: Role) {
+  return db
+    .selectFrom('person')
+    .select(known)
+    .where('demo', '=', true)
+    .where('role', '=', role)
+    .where('left_at', 'is', null)
+    .limit(1)
+    .executeTakeFirst()
+}
+
 /** Everyone whose password everyone knows. */
 export async function listDemoPeople(tx: Tx): Promise<string[]> {
   const found = await tx

@@ -267,6 +267,16 @@ export async function keepLink(tx: Tx, sheetId: string, tokenHash: string): Prom
   await tx.insertInto('sheet_link').values({ sheet_id: sheetId, token_hash: tokenHash }).execute()
 }
 
+/** Ends the links with these hashes. */
+export async function endDemoLinks(db: Db, hashes: readonly string[]): Promise<void> {
+  await db
+    .updateTable('sheet_link')
+    .set({ taken_back_at: sql<Date>`now()` })
+    .where('token_hash', 'in', hashes)
+    .where('taken_back_at', 'is', null)
+    .execute()
+}
+
 /** Tells every server process, once the transaction ends, that a sheet or its link is not what it was. */
 export async function sayChanged(tx: Tx, sheetId: string): Promise<void> {
   await sql`select pg_notify('look_again', ${sheetId})`.execute(tx)

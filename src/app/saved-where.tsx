@@ -27,7 +27,8 @@ export function SavedWhere() {
   return (
     <SavingState state={online && pagesKept ? state : 'here'}>
       {!online && 'No network. '}
-      {!pagesKept && (online ? 'Works only with a network. ' : 'Keep this page open. ')}
+      {/* On a phone there is room for one of the two, and what lies here alone weighs more. */}
+      {!pagesKept && (online ? here === 0 && 'Works only with a network. ' : 'Keep this page open. ')}
       {refused + waiting > 0 && state === 'here' ? (
         <Link to="/not-sent" className="underline">
           {words}

@@ -24,17 +24,15 @@ export function EarlierEdition({ content, own }: { content: SheetContent; own: E
     await navigate(`/diagnosis?sheet=${id}`)
   }
   return (
-    <aside className="mx-auto mt-4 max-w-[1240px] px-4" aria-label="Edition of this sheet">
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 border-b border-rule pb-3">
-        <p className="text-small">
-          This sheet stays on edition {own.number}, with which it was begun. Edition {info.number} is in force
-          and may rank otherwise.
-        </p>
-        <Button size="small" onPress={() => void goOn().catch(() => setFailed(true))}>
-          Go on with the edition in force
-        </Button>
-        {failed && <p role="alert">This device keeps nothing for this page: the new sheet was not begun.</p>}
-      </div>
-    </aside>
+    <div className="desk-wide flex flex-wrap items-center gap-x-4 gap-y-2">
+      <p className="text-small">
+        This sheet stays on edition {own.number}, with which it was begun. Edition {info.number} is in force
+        and may rank otherwise.
+      </p>
+      <Button size="small" onPress={() => void goOn().catch(() => setFailed(true))}>
+        Go on with the edition in force
+      </Button>
+      {failed && <p role="alert">This device keeps nothing for this page: the new sheet was not begun.</p>}
+    </div>
   )
 }

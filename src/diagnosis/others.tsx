@@ -2,10 +2,9 @@ import type { Edition } from '../../rules/edition/open.ts'
 import type { Standing } from '../../rules/findings/standing.ts'
 import type { SheetEntry } from '../../server/sheets/sheets.contract.ts'
 import { Button } from '../ui/button.tsx'
-import { SignalPanel } from '../ui/signal-panel.tsx'
 import { entryFrom } from './sent-sheet.ts'
 import type { OpenSheet } from './use-sheet.ts'
-import { useOthers } from './use-others.ts'
+import type { useOthers } from './use-others.ts'
 import { findingLabel, modeLabel } from './words.ts'
 
 const when = (moment: string) =>
@@ -39,14 +38,14 @@ function Disagree({ edition, one, onKeep }: DisagreeProps) {
       <b>{label}</b>, {modeLabel(edition, one.mode)}
       <ul>
         {[one.entry, ...one.against].map((entry) => (
-          <li key={entry.id} className="flex flex-wrap items-center gap-x-3">
-            <span>
+          <li key={entry.id} className="flex flex-wrap items-center justify-between gap-x-4 gap-y-1 py-1">
+            <span className="min-w-[12rem] flex-1">
               <b>{saidBy(edition, entry)}</b>: {entry.by?.name ?? 'somebody without an account'},{' '}
               {when(entry.deviceAt)}
             </span>
             <Button
               size="small"
-              label={`Keep ${saidBy(edition, entry)} for ${label}`}
+              label={`Keep this one: ${saidBy(edition, entry)}, ${label}`}
               onPress={() => onKeep(entry)}
             >
               Keep this one
@@ -58,9 +57,22 @@ function Disagree({ edition, one, onKeep }: DisagreeProps) {
   )
 }
 
-/** What others have to do with the open sheet. Nothing while it is one person's. */
-export function Others({ sheet, edition }: { sheet: OpenSheet; edition: Edition }) {
-  const { against, shared, ended } = useOthers(sheet)
+type OthersProps = { sheet: OpenSheet; edition: Edition; others: ReturnType<typeof useOthers> }
+
+/** Whether somebody else writes on the open sheet. Nothing while it is one person's. */
+export function OthersLine({ others: { shared, ended } }: Pick<OthersProps, 'others'>) {
+  if (!shared && !ended) return null
+  return (
+    <p className="desk-wide text-small text-ink-2" role="status">
+      {ended
+        ? 'The link was taken back. This sheet goes on as your own, with all that is on it; the homeowner sees nothing more of it.'
+        : 'This sheet came by a link. What either of you enters shows for both within seconds.'}
+    </p>
+  )
+}
+
+/** Readings of the open sheet that contradict each other. What stops stands above them. */
+export function Contradictions({ sheet, edition, others: { against } }: OthersProps) {
   const keep = (one: Standing<SheetEntry>) => (entry: SheetEntry) => {
     const ids = [one.entry, ...one.against].map(({ id }) => id)
     const { mode, finding } = one
@@ -69,27 +81,18 @@ export function Others({ sheet, edition }: { sheet: OpenSheet; edition: Edition 
       { mode, finding, ids, entry: entryFrom(entry), sent: { value: null, kept: 'not decided' } },
     ])
   }
-  if (!shared && !ended && against.length === 0) return null
+  if (against.length === 0) return null
   return (
-    <aside className="mx-auto mt-4 max-w-[1240px] px-4" aria-label="Others on this sheet">
-      <p className="text-small text-ink-2" role="status">
-        {ended
-          ? 'The link was taken back. This sheet goes on as your own, with all that is on it; the homeowner sees nothing more of it.'
-          : shared && 'This sheet came by a link. What either of you enters shows for both within seconds.'}
+    <section className="plate contradict" aria-label="Readings that contradict each other">
+      <p role="status">
+        <b>Two people entered different readings.</b> The last one is ranked. Take it again, or keep the one
+        you trust; until then go by the worse.
       </p>
-      {against.length > 0 && (
-        <SignalPanel word="caution" className="mt-3">
-          <p>
-            <b>Two people entered different readings.</b> The last one is ranked. Take it again, or keep the
-            one you trust; until then go by the worse.
-          </p>
-          <ul>
-            {against.map((one) => (
-              <Disagree key={`${one.mode} ${one.finding}`} edition={edition} one={one} onKeep={keep(one)} />
-            ))}
-          </ul>
-        </SignalPanel>
-      )}
-    </aside>
+      <ul>
+        {against.map((one) => (
+          <Disagree key={`${one.mode} ${one.finding}`} edition={edition} one={one} onKeep={keep(one)} />
+        ))}
+      </ul>
+    </section>
   )
 }

@@ -85,7 +85,7 @@ export function ServerSheets() {
           onFailed={fail}
         />
       )}
-      <div id="my-sheets">
+      <div id="my-sheets" className="mt-3">
         {found.isPending ? (
           <Waiting what="my sheets" />
         ) : found.isError ? (
@@ -93,7 +93,7 @@ export function ServerSheets() {
             {found.error.message} Those on this device are above.
           </Failed>
         ) : sheets.length === 0 ? (
-          <p className="mt-3 text-small text-ink-2">
+          <p className="text-small text-ink-2">
             {words.trim() === '' ? 'None sent yet.' : 'None of that title.'}
           </p>
         ) : (

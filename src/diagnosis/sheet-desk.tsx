@@ -1,4 +1,5 @@
 import { useMemo, useState } from 'react'
+import type { ReactNode } from 'react'
 import type { EditionInForce } from '../../server/editions/editions.contract.ts'
 import type { Edition } from '../../rules/edition/open.ts'
 import { useArticles, useProcedures } from '../editions/edition.api.ts'
@@ -34,10 +35,18 @@ import { WhatIfBar } from './what-if-bar.tsx'
 
 const focusIn = (selector: string) => document.querySelector<HTMLElement>(selector)?.focus()
 
-type SheetDeskProps = { sheet: OpenSheet; edition: Edition; info: EditionInForce }
+type SheetDeskProps = {
+  sheet: OpenSheet
+  edition: Edition
+  info: EditionInForce
+  /** What is to be known of the sheet as a whole, under its head. */
+  lines: ReactNode
+  /** Below what stops. */
+  contradictions: ReactNode
+}
 
 /** The open sheet: readings at the left, what to do and what it may be at the right; on a phone one below the other. */
-export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
+export function SheetDesk({ sheet, edition, info, lines, contradictions }: SheetDeskProps) {
   const { typed, stored, dispatch, unkept, keepAgain } = sheet
   const { diagnosis, before, stops, bond, errors, failed } = useDiagnosis(edition, stored)
   const desk = useDeskState(edition, sheet, errors)
@@ -99,6 +108,7 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
             </Failed>
           </div>
         )}
+        {lines}
         <div className="desk-left">
           <Rail
             title="Where ground sits"
@@ -135,6 +145,7 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
         </div>
         <div className="desk-right">
           <StopPanel stops={stops} trying={trying} />
+          {contradictions}
           {failed && (
             <Failed title="Couldn’t rank these findings.">What you typed stays. Load the page again.</Failed>
           )}

@@ -4,8 +4,9 @@ import { Failed } from '../ui/failed.tsx'
 import { Page } from '../ui/page.tsx'
 import { Waiting } from '../ui/waiting.tsx'
 import { EarlierEdition } from './earlier-edition.tsx'
-import { Others } from './others.tsx'
+import { Contradictions, OthersLine } from './others.tsx'
 import { SheetDesk } from './sheet-desk.tsx'
+import { useOthers } from './use-others.ts'
 import { useSheet } from './use-sheet.ts'
 import type { OpenSheet } from './use-sheet.ts'
 
@@ -34,6 +35,7 @@ function Bare({ title, children }: { title: string; children?: React.ReactNode }
 /** A sheet on the edition it was begun with. */
 function OnItsEdition({ sheet }: { sheet: OpenSheet }) {
   const { status, edition, info, error, retry } = useEdition(sheet.edition)
+  const others = useOthers(sheet)
   if (status === 'error' || (status === 'success' && edition === undefined))
     return (
       <Bare title={sheet.typed.title}>
@@ -51,11 +53,18 @@ function OnItsEdition({ sheet }: { sheet: OpenSheet }) {
       </Bare>
     )
   return (
-    <>
-      <EarlierEdition content={sheet.stored} own={info} />
-      <Others sheet={sheet} edition={edition} />
-      <SheetDesk sheet={sheet} edition={edition} info={info} />
-    </>
+    <SheetDesk
+      sheet={sheet}
+      edition={edition}
+      info={info}
+      lines={
+        <>
+          <EarlierEdition content={sheet.stored} own={info} />
+          <OthersLine others={others} />
+        </>
+      }
+      contradictions={<Contradictions sheet={sheet} edition={edition} others={others} />}
+    />
   )
 }
 

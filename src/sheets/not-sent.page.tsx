@@ -28,7 +28,7 @@ function why(row: Row): string {
   const refused = row.letters.find((letter) => letter.refused !== undefined)
   if (refused !== undefined) return `${about(refused)}: ${refused.refused ?? ''}`
   const failures = Math.max(...row.letters.map((letter) => letter.failures))
-  return failures > 0 ? `The server failed ${failures} times.` : 'Waits for a network, or for its writer.'
+  return failures > 0 ? `The server failed ${failures} times.` : 'Waits for the server to answer.'
 }
 
 /** What the server has yet to take, why, and what can be done about it. */
@@ -78,14 +78,14 @@ export function Component() {
               {row.letters.length} to send. {why(row)}
             </p>
             <div className="mt-2 flex flex-wrap gap-3">
-              <Button size="small" label={`Send ${row.title} again`} onPress={() => void again(row)}>
+              <Button size="small" label={`Send again: ${row.title}`} onPress={() => void again(row)}>
                 Send again
               </Button>
               {row.letters.some((letter) => letter.refused !== undefined) && (
                 <Button
                   size="small"
                   look="plain"
-                  label={`Leave what was refused of ${row.title} here`}
+                  label={`Leave it on this device: ${row.title}`}
                   onPress={() => void leave(row)}
                 >
                   Leave it on this device

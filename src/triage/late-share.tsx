@@ -1,5 +1,5 @@
 import { lazy, Suspense } from 'react'
-import type { Edition } from '../../rules/edition/open.ts'
+import type { ShareProps } from './share.tsx'
 
 // Without a network on a device that keeps no pages there is no link to make either.
 const Share = lazy(() =>
@@ -10,10 +10,10 @@ const Share = lazy(() =>
 )
 
 /** The link for a professional, once the page stands: none of it may weigh on what stops. */
-export function LateShare({ edition }: { edition: Edition | undefined }) {
+export function LateShare(props: ShareProps) {
   return (
     <Suspense fallback={null}>
-      <Share edition={edition} />
+      <Share {...props} />
     </Suspense>
   )
 }

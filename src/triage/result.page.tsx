@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import { useEdition } from '../editions/edition.api.ts'
 import { Button, CallButton, LinkButton } from '../ui/button.tsx'
 import { Empty } from '../ui/empty.tsx'
@@ -11,6 +12,7 @@ import { GuideLine } from './guide-line.tsx'
 import { PhoneWords } from './phone-words.tsx'
 import { openQuestions, readOut } from './read-out.ts'
 import { LateShare } from './late-share.tsx'
+import { byWorst } from './said-stops.ts'
 import { StopView } from './stop-view.tsx'
 import { stopsHere } from './stops-here.ts'
 import { toSheet } from './to-sheet.ts'
@@ -23,8 +25,12 @@ export function Component() {
   const { edition, status, retry } = useEdition()
   const sheet = toSheet(triage)
   const { diagnosis, failed } = useDiagnosis(edition, sheet)
-  const stops = stopsHere(triage, edition)
-  if (stops.length > 0) return <StopView stops={stops} edition={edition} />
+  // What the professional found stops the homeowner's page as what they said themselves does.
+  const [theirs, setTheirs] = useState<readonly string[]>([])
+  const own = stopsHere(triage, edition)
+  const more = theirs.filter((id) => own.every((stop) => stop.id !== id))
+  const stops = byWorst([...own, ...more.map((id) => ({ id, mayBeGhost: false }))])
+  if (stops.length > 0) return <StopView stops={stops} edition={edition} onStops={setTheirs} />
 
   const assumed = assume(triage.feeds).words
   const open = openQuestions(triage)
@@ -66,7 +72,7 @@ export function Component() {
         Call {shop.name}, {shop.phone}
       </CallButton>
       <PhoneWords words={readOut(triage, stops)} />
-      {open === 0 && <LateShare edition={edition} />}
+      {open === 0 && <LateShare edition={edition} onStops={setTheirs} />}
       {assumed.length > 0 && !nothing && (
         <p className="text-small text-ink-2">You left this open, so we took it that {assumed.join('; ')}.</p>
       )}

@@ -11,15 +11,15 @@ import { Rail } from '../ui/rail.tsx'
 import { TheirFindings } from './their-findings.tsx'
 import { useTriage } from './triage-store.tsx'
 
-/** The link made for this check, if one holds. */
-function useGiven(sheet: string | undefined): string | undefined {
-  const [given, setGiven] = useState<string>()
+/** The link made for this check; null when none holds, undefined until that was read. */
+function useGiven(sheet: string | undefined): string | null | undefined {
+  const [given, setGiven] = useState<string | null>()
   useEffect(() => {
     if (sheet === undefined) return setGiven(undefined)
     let wanted = true
     const read = () =>
       void getSending(sheet).then(
-        (sending) => wanted && setGiven(sending?.given),
+        (sending) => wanted && setGiven(sending?.given ?? null),
         () => undefined,
       )
     read()
@@ -32,8 +32,14 @@ function useGiven(sheet: string | undefined): string | undefined {
   return given
 }
 
+export type ShareProps = {
+  edition: Edition | undefined
+  /** Told what stops, by what stands on the sheet with the professional's findings. */
+  onStops: (stops: readonly string[]) => void
+}
+
 /** A private link with which a professional opens these answers, and the way to take it back. */
-export function Share({ edition }: { edition: Edition | undefined }) {
+export function Share({ edition, onStops }: ShareProps) {
   const { sheetId } = useTriage()
   const sheet = sheetId()
   const { person } = useMe()
@@ -41,7 +47,10 @@ export function Share({ edition }: { edition: Edition | undefined }) {
   const [busy, setBusy] = useState(false)
   const [failed, setFailed] = useState<string>()
   const [copied, setCopied] = useState<boolean>()
-  if (sheet === undefined) return null
+  useEffect(() => {
+    if (given === null) onStops([])
+  }, [given, onStops])
+  if (sheet === undefined || given === undefined) return null
   const run = async (work: () => Promise<unknown>) => {
     if (busy) return
     setBusy(true)
@@ -65,7 +74,7 @@ export function Share({ edition }: { edition: Edition | undefined }) {
     )
   return (
     <Rail title="For your professional" className="screen-only">
-      {given === undefined ? (
+      {given === null ? (
         <>
           <p className="mb-3 mt-2">
             A private link shows them your answers, and shows you what they find. Making it sends your answers
@@ -93,7 +102,9 @@ export function Share({ edition }: { edition: Edition | undefined }) {
               </span>
             )}
           </div>
-          {edition !== undefined && <TheirFindings given={given} edition={edition} me={person?.id} />}
+          {edition !== undefined && (
+            <TheirFindings given={given} edition={edition} me={person?.id} onStops={onStops} />
+          )}
         </>
       )}
       {failed !== undefined && <Failed title="That did not work.">{failed}</Failed>}

@@ -16,8 +16,16 @@ import { WhyList } from './why-list.tsx'
 import { dangersSaid } from './said-stops.ts'
 import type { Here } from './said-stops.ts'
 
+type StopViewProps = {
+  stops: readonly Here[]
+  edition: Edition | undefined
+  /** Told what stops by the professional's findings too. */
+  onStops?: (stops: readonly string[]) => void
+}
+const nobody = () => undefined
+
 /** Stopped: what to do now, whom to call, then why. No causes, no shares, nothing further to measure. */
-export function StopView({ stops, edition }: { stops: readonly Here[]; edition: Edition | undefined }) {
+export function StopView({ stops, edition, onStops = nobody }: StopViewProps) {
   const { triage } = useTriage()
   const why = stops.flatMap(({ id }) => edition?.file.stops.find((one) => one.id === id)?.why ?? [])
   return (
@@ -37,7 +45,7 @@ export function StopView({ stops, edition }: { stops: readonly Here[]; edition: 
         ))}
       </Rail>
       <PhoneWords words={readOut(triage, stops)} />
-      <LateShare edition={edition} />
+      <LateShare edition={edition} onStops={onStops} />
       <p className="screen-only">
         <Link to="/check/2" className="link-alone">
           Add what feeds it and what you notice, for the phone

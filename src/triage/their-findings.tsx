@@ -6,6 +6,7 @@ import type { SheetEntry } from '../../server/sheets/sheets.contract.ts'
 import { followSheet } from '../sheets/follow.api.ts'
 import { openShared } from '../sheets/sheets.api.ts'
 import { inHomeownerWords } from './homeowner-words.ts'
+import type { ShareProps } from './share.tsx'
 
 const when = (moment: string) =>
   new Intl.DateTimeFormat('en-US', { dateStyle: 'medium', timeStyle: 'short' }).format(new Date(moment))
@@ -22,16 +23,15 @@ function saidIn(edition: Edition, entry: SheetEntry): string {
   return `${label}: ${typeof value === 'number' ? value : value.value} ${reading?.unit ?? ''}`
 }
 
-/** What the professional has entered on the same sheet, as they enter it. */
-export function TheirFindings({
-  given,
-  edition,
-  me,
-}: {
+type TheirFindingsProps = {
   given: string
   edition: Edition
+  /** Id of whoever is signed in here. */
   me: string | undefined
-}) {
+} & Pick<ShareProps, 'onStops'>
+
+/** What the professional has entered on the same sheet, as they enter it. */
+export function TheirFindings({ given, edition, me, onStops }: TheirFindingsProps) {
   const client = useQueryClient()
   const shared = useQuery({
     queryKey: ['shared', given] as const,
@@ -42,6 +42,10 @@ export function TheirFindings({
     const news = () => void client.invalidateQueries({ queryKey: ['shared', given] })
     return followSheet(`/shared/${given}`, news, news)
   }, [client, given])
+  const stops = shared.data?.result?.stops
+  useEffect(() => {
+    if (stops !== undefined) onStops(stops)
+  }, [stops, onStops])
   const theirs = standing(shared.data?.entries ?? [])
     .flatMap(({ entry, against }) => [entry, ...against])
     .filter(({ by }) => by !== null && by.id !== me)

@@ -88,7 +88,7 @@ describe('the way to the server', () => {
     await page.getByRole('heading', { level: 1, name: 'On this device only' }).waitFor()
     await page.getByText('Mend what is marked. entries.0: is not wanted').waitFor()
     await page.unroute(/\/entries$/)
-    await page.getByRole('button', { name: 'Send Refused again' }).click()
+    await page.getByRole('button', { name: 'Send again: Refused' }).click()
     await allSent(page)
     expect(await valuesOf('Refused')).toEqual({ 'receptacle.hn.volts': 117 })
     await end()
