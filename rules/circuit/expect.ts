@@ -7,9 +7,9 @@ import type { Tester } from './instruments/plug-in-tester.ts'
 import type { ElectricalCause, WiringContext } from './wiring/context.ts'
 import { pointsIn } from './design.ts'
 import { measured } from './wiring/readings/measured.ts'
-import type { Measured } from './wiring/readings/measured.ts'
 import { takeReadings } from './wiring/take-readings.ts'
 import { typicalOf } from './wiring/parameters.ts'
+import type { Parameters } from './wiring/parameters.ts'
 import { rangesWith, wire } from './wiring/wire.ts'
 
 /** Lowest, typical and highest value of a reading, in its unit; `overLimitOhms` where an ohmmeter shows over limit. */
@@ -31,52 +31,33 @@ const testers: readonly Tester[] = [
 ]
 const bulbWatts = [60, 40] as const
 
-type Looked = { typical: Measured; others: readonly Measured[] }
-const looked = new Map<string, Looked>()
 const expected = new Map<string, Expected>()
-
-const keyOf = ({ source, system, wiring }: WiringContext, cause: ElectricalCause) =>
-  `${source} ${system} ${wiring} ${cause}`
-
-/** The wirings looked at for a cause in a context, each solved once for every meter that will be held to it. */
-function lookedAt(context: WiringContext, cause: ElectricalCause): Looked {
-  const key = keyOf(context, cause)
-  const known = looked.get(key)
-  if (known !== undefined) return known
-  const ranges = rangesWith(context, cause)
-  const look = (p: Measured['p']) => measured(context, wire(context, cause, p), p)
-  const made: Looked = {
-    typical: look(typicalOf(ranges)),
-    others: pointsIn(ranges, corners, inners).map(look),
-  }
-  looked.set(key, made)
-  return made
-}
 
 /**
  * What a cause lets one expect in a context, through a meter of this input resistance. Kept once computed.
  * @param meterOhms input resistance of the voltmeter, ohms
  */
 export function expect(context: WiringContext, cause: ElectricalCause, meterOhms: number): Expected {
-  const key = `${keyOf(context, cause)} ${meterOhms}`
+  const key = `${context.source} ${context.system} ${context.wiring} ${cause} ${meterOhms}`
   const known = expected.get(key)
   if (known !== undefined) return known
-  const made = predict(lookedAt(context, cause), meterOhms)
+  const made = predict(context, cause, meterOhms)
   expected.set(key, made)
   return made
 }
 
 /** Forgets what was computed: for measuring how long it takes. */
 export function forgetExpected(): void {
-  looked.clear()
   expected.clear()
 }
 
-function predict({ typical, others }: Looked, meterOhms: number): Expected {
+function predict(context: WiringContext, cause: ElectricalCause, meterOhms: number): Expected {
+  const ranges = rangesWith(context, cause)
   const readings = new Map<string, Band>()
   const observations = new Map<string, { typical: string; can: string[] }>()
   const meter = meterOf(meterOhms)
-  const take = (m: Measured, turn: number) => {
+  const take = (p: Parameters, turn: number) => {
+    const m = measured(context, wire(context, cause, p), p)
     const tester = testers[turn % testers.length] as Tester
     const found = takeReadings(m, { meter, tester, bulbWatts: bulbWatts[turn % bulbWatts.length] ?? 60 })
     for (const [id, value] of Object.entries(found)) {
@@ -94,7 +75,7 @@ function predict({ typical, others }: Looked, meterOhms: number): Expected {
       }
     }
   }
-  take(typical, 0)
-  others.forEach((m, i) => take(m, i))
+  take(typicalOf(ranges), 0)
+  pointsIn(ranges, corners, inners).forEach(take)
   return { readings, observations }
 }
