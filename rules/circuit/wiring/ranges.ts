@@ -254,6 +254,9 @@ function faultRanges() {
   }
 }
 
+/** Parameters that only a fault has: two faults at once each have their own. */
+export const faultOnly = Object.keys(faultRanges()) as (keyof ReturnType<typeof faultRanges>)[]
+
 /** Every range and choice of a wiring in this context, before a fault narrows some of them. */
 export function rangesIn(context: WiringContext): Ranges {
   return {
