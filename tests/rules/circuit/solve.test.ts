@@ -15,7 +15,7 @@ const far = (a: Complex, b: Complex) => magnitude(minus(a, b))
 function byMathjs(network: Network): Map<string, Complex> {
   const { nodes, matrix: y, injected } = nodalEquations(network)
   const n = nodes.size - 1
-  const entry = (part: { re: Float64Array; im: Float64Array }, i: number) => complex(part.re[i]!, part.im[i]!)
+  const entry = (array: Float64Array, i: number) => complex(array[2 * i]!, array[2 * i + 1]!)
   const rows = Array.from({ length: n }, (_, i) => Array.from({ length: n }, (_, j) => entry(y, i * n + j)))
   const answer = lusolve(
     matrix(rows),
