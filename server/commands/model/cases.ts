@@ -42,7 +42,12 @@ function visited(chance: Chance, { context, network, p, cause }: Drawn, everythi
     context: { ...context, meterOhms: tech.kit.meter.ohms },
     findings: {
       ...takenBy(chance, tech, takeReadings(wired, tech.kit), { everything, engine, reach }),
-      ...reportedBy(chance, signs(wired), { cause, engine, plugged: p.pluggedInOhms > 0, wrong }),
+      ...reportedBy(chance, signs(wired), {
+        cause,
+        source: context.source,
+        plugged: p.pluggedInOhms > 0,
+        wrong,
+      }),
     },
   }
 }
@@ -51,7 +56,7 @@ function visited(chance: Chance, { context, network, p, cause }: Drawn, everythi
  * One case of a cause. The same seed, cause and number give the same case.
  * @param everything also the readings that a call seldom takes
  */
-export function modelCase(seed: string, cause: ElectricalCause, n: number, everything: boolean): ModelCase {
+export function modelCase(seed: string, cause: ElectricalCause, n: number, everything = false): ModelCase {
   const id = `${seed}/${cause}/${n}`
   const chance = chanceFrom(id)
   const context = sampleContext(chance, cause)
@@ -66,7 +71,7 @@ export function modelCase(seed: string, cause: ElectricalCause, n: number, every
 const faulty = electricalCauses.filter((c) => c !== 'sound').map((value) => ({ value, weight: 1 }))
 
 /** One case of two faults that can be there together. */
-export function pairCase(seed: string, n: number, everything: boolean): PairCase {
+export function pairCase(seed: string, n: number, everything = false): PairCase {
   const id = `${seed}/pair/${n}`
   const chance = chanceFrom(id)
   for (;;) {

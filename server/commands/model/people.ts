@@ -1,5 +1,5 @@
 /** What people report of a wiring, from what they could notice; sometimes nothing, now and then the wrong thing. */
-import type { ElectricalCause } from '../../../rules/circuit/wiring/context.ts'
+import type { ElectricalCause, SourceKind } from '../../../rules/circuit/wiring/context.ts'
 import type { Found } from '../../../rules/circuit/wiring/readings/measured.ts'
 import type { Extent, Signs } from '../../../rules/circuit/wiring/readings/signs.ts'
 import { between, happens, pick } from '../../../rules/circuit/wiring/sample.ts'
@@ -52,26 +52,25 @@ const extents: Record<Extent | 'nothing', Weights<Extent>> = {
 const tingles = (amps: number): number =>
   amps > 0.005 ? 0.55 : amps > 0.0005 ? 0.35 : amps > 0.0002 ? 0.12 : 0.02
 
-/**
- * What people say, by finding id.
- * @param wrong how often an answer is any other than the true one
- */
-export function reportedBy(
-  chance: Chance,
-  s: Signs,
-  {
-    cause,
-    engine,
-    plugged,
-    wrong,
-  }: { cause: ElectricalCause; engine: boolean; plugged: boolean; wrong: number },
-): Found {
+type About = {
+  cause: ElectricalCause
+  source: SourceKind
+  /** Whether something else is plugged in on the circuit. */
+  plugged: boolean
+  /** How often an answer is any other than the true one. */
+  wrong: number
+}
+
+/** What people say, by finding id. */
+export function reportedBy(chance: Chance, s: Signs, { cause, source, plugged, wrong }: About): Found {
   const found: Found = {}
   const say = (id: string, values: readonly string[], value: string, silent: number) => {
     if (happens(chance, silent)) return
     const others = values.filter((v) => v !== value).map((v) => ({ value: v, weight: 1 }))
     found[id] = happens(chance, wrong) ? pick(chance, others) : value
   }
+  const engine = source === 'generator'
+  const stepped = (source === 'standalone-inverter' || source === 'power-station') && happens(chance, 0.08)
   const loose = cause === 'loose-hot' || cause === 'loose-neutral'
   const silent = between(chance, 0.25, 0.45)
   say('lights', lightsValues, pick(chance, options(lights(s, engine, loose))), silent)
@@ -98,6 +97,7 @@ export function reportedBy(
     0.5,
   )
   say('meter.kind', ['true-rms', 'averaging'], happens(chance, 0.65) ? 'true-rms' : 'averaging', 0.5)
+  say('source.waveform', ['sine', 'stepped'], stepped ? 'stepped' : 'sine', 0.5)
   say('others-plugged-in', ['yes', 'no'], plugged ? 'yes' : 'no', 0.7)
   return found
 }
