@@ -48,10 +48,13 @@ export function factorMatrix(n: number, { re, im }: ComplexArray): (x: ComplexAr
 }
 
 function pivotRow(n: number, re: Float64Array, im: Float64Array, k: number): number {
-  const size = (row: number) => Math.abs(re[row * n + k]!) + Math.abs(im[row * n + k]!)
-  let row = k
-  for (let i = k + 1; i < n; i++) if (size(i) > size(row)) row = i
-  return size(k) >= goodEnough * size(row) ? k : row
+  const own = Math.abs(re[k * n + k]!) + Math.abs(im[k * n + k]!)
+  let [row, largest] = [k, own]
+  for (let i = k + 1; i < n; i++) {
+    const size = Math.abs(re[i * n + k]!) + Math.abs(im[i * n + k]!)
+    if (size > largest) [row, largest] = [i, size]
+  }
+  return own >= goodEnough * largest ? k : row
 }
 
 function swapRows(n: number, re: Float64Array, im: Float64Array, a: number, b: number): void {

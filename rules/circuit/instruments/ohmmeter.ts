@@ -7,10 +7,11 @@ const topOhms = 50e6
 
 /**
  * Ohms an ohmmeter shows between two points of a dead circuit; `overLimitOhms` where it shows over limit.
+ * @param limitOhms end of its top range
  * @throws Error unless the network was solved at 0 Hz, with its sources off
  */
-export function ohmsBetween(dead: Factored, a: Node, b: Node): number {
+export function ohmsBetween(dead: Factored, a: Node, b: Node, limitOhms: number = topOhms): number {
   if (dead.hertz !== 0) throw new Error('An ohmmeter is for a dead circuit: solve the network at 0 Hz.')
   const ohms = Math.abs(dead.port(a, b).impedance.re)
-  return ohms > topOhms ? overLimitOhms : ohms
+  return ohms > limitOhms ? overLimitOhms : ohms
 }

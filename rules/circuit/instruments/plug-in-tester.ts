@@ -7,15 +7,17 @@ export type Slots = { hot: Node; neutral: Node; ground: Node }
 /** The lamps of a three-lamp tester, by the pair of slots each lies between. */
 export type Lamps = { hn: Lamp; hg: Lamp; ng: Lamp }
 
+/** One number for each lamp, in the order hot–neutral, hot–ground, neutral–ground. */
+export type EachLamp = readonly [hn: number, hg: number, ng: number]
 export type Tester =
-  | { kind: 'resistive'; ohms: number }
+  | { kind: 'resistive'; ohms: EachLamp }
   /** A gas lamp does nothing until it strikes; then its series resistance sets the current. */
-  | { kind: 'neon'; ohms: number; strikeVolts: number }
+  | { kind: 'neon'; ohms: EachLamp; strikeVolts: EachLamp }
 
 /** Common practice: 100 to 200 kΩ a lamp; a neon strikes at 60 to 74 V RMS. */
 export const usualTesters: readonly Tester[] = [
-  { kind: 'resistive', ohms: 150_000 },
-  { kind: 'neon', ohms: 150_000, strikeVolts: 67 },
+  { kind: 'resistive', ohms: [150_000, 150_000, 150_000] },
+  { kind: 'neon', ohms: [150_000, 150_000, 150_000], strikeVolts: [67, 67, 67] },
 ]
 
 /** When people call a lamp lit or dim, by the part of nominal volts across it while it burns. Common practice. */
@@ -43,6 +45,7 @@ const ends = ({ hot, neutral, ground }: Slots): Record<Pair, { from: Node; to: N
   hg: { from: hot, to: ground },
   ng: { from: neutral, to: ground },
 })
+const ofEach = ([hn, hg, ng]: EachLamp): Record<Pair, number> => ({ hn, hg, ng })
 
 const lookOf = (part: number): Lamp => lampLooks.find(({ fromPart }) => part >= fromPart)?.look ?? 'dark'
 
@@ -57,48 +60,53 @@ export function testerShows(network: Factored, slots: Slots, tester: Tester, nom
     : neonShows(network, slots, tester, nominalVolts)
 }
 
-function resistiveShows(network: Factored, slots: Slots, ohms: number, nominalVolts: number): Lamps {
-  const between = ends(slots)
-  const plugged = network.loaded(pairs.map((pair) => ({ ...between[pair], ohms })))
+function resistiveShows(network: Factored, slots: Slots, ohms: EachLamp, nominalVolts: number): Lamps {
+  const [between, own] = [ends(slots), ofEach(ohms)]
+  const plugged = network.loaded(pairs.map((pair) => ({ ...between[pair], ohms: own[pair] })))
   const look = (pair: Pair) =>
     lookOf(magnitude(plugged.between(between[pair].from, between[pair].to)) / nominalVolts)
   return { hn: look('hn'), hg: look('hg'), ng: look('ng') }
 }
 
-/** Strikes the lamp with most volts to spare, and looks again, until nothing changes. */
+/** Strikes the lamp with the most volts for what it needs, and looks again, until nothing changes. */
 function neonShows(
   network: Factored,
   slots: Slots,
-  { ohms, strikeVolts }: Extract<Tester, { kind: 'neon' }>,
+  tester: Extract<Tester, { kind: 'neon' }>,
   nominalVolts: number,
 ): Lamps {
   const between = ends(slots)
+  const [ohms, strikes] = [ofEach(tester.ohms), ofEach(tester.strikeVolts)]
   const burning = new Set<Pair>()
   /** Amps while it lasted, of lamps that strike and go out again. */
   const flickering = new Map<Pair, number>()
   const voltsNow = () => {
-    const lamps = pairs.map((pair) => ({ ...between[pair], ...(burning.has(pair) ? { ohms } : outLamp) }))
-    const plugged = network.loaded(lamps)
+    const plugged = network.loaded(
+      pairs.map((pair) => ({ ...between[pair], ...(burning.has(pair) ? { ohms: ohms[pair] } : outLamp) })),
+    )
     return (pair: Pair) => magnitude(plugged.between(between[pair].from, between[pair].to))
   }
   let volts = voltsNow()
   // Every turn strikes a lamp or puts one out for good, so six are the most there can be.
   for (;;) {
-    const out = pairs.find((pair) => burning.has(pair) && volts(pair) < staysLit * strikeVolts)
+    const part = (pair: Pair) => volts(pair) / strikes[pair]
+    const out = pairs.find((pair) => burning.has(pair) && part(pair) < staysLit)
     if (out !== undefined) {
       burning.delete(out)
-      flickering.set(out, volts(out) / ohms)
+      flickering.set(out, volts(out) / ohms[out])
     } else {
       const unlit = pairs.filter((pair) => !burning.has(pair) && !flickering.has(pair))
-      const next = unlit.sort((a, b) => volts(b) - volts(a))[0]
-      if (next === undefined || volts(next) < strikeVolts) break
+      const next = unlit.sort((a, b) => part(b) - part(a))[0]
+      if (next === undefined || part(next) < 1) break
       burning.add(next)
     }
     volts = voltsNow()
   }
   const look = (pair: Pair): Lamp => {
-    if (burning.has(pair)) return volts(pair) >= 0.7 * nominalVolts ? 'lit' : 'dim'
-    return (flickering.get(pair) ?? 0) >= glowAmps ? 'dim' : 'dark'
+    if (!burning.has(pair)) return (flickering.get(pair) ?? 0) >= glowAmps ? 'dim' : 'dark'
+    // A neon that burns is seen, however few volts are left.
+    const burns = lookOf(volts(pair) / nominalVolts)
+    return burns === 'dark' ? 'dim' : burns
   }
   return { hn: look('hn'), hg: look('hg'), ng: look('ng') }
 }

@@ -8,7 +8,8 @@ import type { ElectricalCause, WiringContext } from './context.ts'
 import { add, couple, join, move, open, remove, replace, swap } from './edits.ts'
 import type { Edit } from './edits.ts'
 import { capacitance, feedOf, resistance } from './healthy.ts'
-import type { Choice, Parameters, Place, Range, Ranges } from './parameters.ts'
+import type { Choice, Parameters, Place, Ranges } from './parameters.ts'
+import { choice as of, even } from './ranges.ts'
 
 export type Fault = {
   /** What is wrong, in a few words. */
@@ -18,18 +19,6 @@ export type Fault = {
   edits: (p: Parameters, context: WiringContext) => Edit[]
 }
 
-const of = <T>(because: string, ...options: (readonly [T, number])[]): Choice<T> => ({
-  options: options.filter(([, weight]) => weight > 0).map(([value, weight]) => ({ value, weight })),
-  because,
-})
-const even = (low: number, typical: number, high: number, unit: string, because: string): Range => ({
-  low,
-  typical,
-  high,
-  unit,
-  spread: 'even',
-  because,
-})
 /** Weighted places of a fault; a feeder only where there is one. */
 const at = (context: WiringContext, places: Partial<Record<Place, number>>): Choice<Place> =>
   of(
