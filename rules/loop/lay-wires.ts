@@ -67,6 +67,11 @@ export function faultAlong(frame: Frame, run: Run): number {
 
 /** Neutral's way on to a bond in the source is the bond's own; in the panel it comes from the loads there. */
 function currentBegin(frame: Frame, state: LoopState, run: Run, begin: number): number {
+  // With no ground wire from there on, what comes back goes into the rod.
+  const ends = state.runs.some(
+    (one) => one.stretch === 'feeder' && one.from === 'ground' && one.state === 'absent',
+  )
+  if (run.from === 'ground' && run.stretch === 'circuit' && ends) return frame.panelRod
   if (run.from !== 'neutral') return begin
   return run.stretch === 'circuit' && state.house.length > 0 ? frame.house : Math.max(begin, frame.coil)
 }

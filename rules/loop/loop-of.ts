@@ -144,15 +144,15 @@ function touchOf({ network, hotAt }: Drawn, solved: Factored): Touch | undefined
 
 /**
  * The loop of a cause, as the model computes it.
- * @param context what feeds it, which system, and how it is wired
+ * @param given what feeds it, which system, and how it is wired
  * @param cause a cause of the catalogue
  * @param options what is turned on and off; `loopDefaults` has those of the cause itself
- * @returns undefined where the picture can't draw this cause (`drawnAs` says why)
+ * @returns undefined where the picture can't draw this cause (`drawnAs` says why), or it can't occur there
  */
-export function loopOf(context: WiringContext, cause: string, options: LoopOptions): LoopState | undefined {
-  const drawn = drawnWiring(context, cause, options)
+export function loopOf(given: WiringContext, cause: string, options: LoopOptions): LoopState | undefined {
+  const drawn = drawnWiring(given, cause, options)
   if (drawn === undefined) return undefined
-  const { network } = drawn
+  const { context, network } = drawn
   const solved = factor(network)
   const nominal = nominalVolts(context)
   const load = branchOf(network, 'load')
@@ -179,6 +179,3 @@ export function loopOf(context: WiringContext, cause: string, options: LoopOptio
     note: drawn.as.note,
   }
 }
-
-/** Where the circuit begins: its breaker stands there. */
-export const breakerPlace = (state: LoopState): Place => (state.places.includes('panel') ? 'panel' : 'source')

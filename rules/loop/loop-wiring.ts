@@ -2,6 +2,7 @@
 import type { Network, Node } from '../circuit/network.ts'
 import { hasPanel, ohmsScale } from '../circuit/wiring/context.ts'
 import type { WiringContext } from '../circuit/wiring/context.ts'
+import { canOccur } from '../circuit/wiring/occurs.ts'
 import { applyEdit, join, remove } from '../circuit/wiring/edits.ts'
 import type { Edit } from '../circuit/wiring/edits.ts'
 import { feedOf } from '../circuit/wiring/healthy.ts'
@@ -53,9 +54,18 @@ function baseOf(context: WiringContext, as: DrawnAs): { p: Parameters; network: 
   return { p, network: edited(context, p, [...editsOf(context, as.wiring, p), ...as.edits]) }
 }
 
-/** What the cause's own wiring has: the state the picture opens with. */
-export function loopDefaults(context: WiringContext, as: DrawnAs): Omit<LoopOptions, 'state'> {
-  const { network } = baseOf(context, as)
+/** Two legs in series are drawn with the panel on which they meet. */
+const drawnContext = (context: WiringContext, as: DrawnAs): WiringContext =>
+  as.wiring === 'shared-neutral-lost' ? { ...context, wiring: 'panel' } : context
+
+/**
+ * What the cause's own wiring has: the state the picture opens with.
+ * @returns undefined where the cause is not drawn, or can't occur in this context
+ */
+export function loopDefaults(context: WiringContext, cause: string): Omit<LoopOptions, 'state'> | undefined {
+  const as = drawnAs(cause)
+  if (as === undefined || 'because' in as || !canOccur(as.wiring, context)) return undefined
+  const { network } = baseOf(drawnContext(context, as), as)
   return {
     bond: has(network, 'bond'),
     rod: has(network, 'panel.rod') || has(network, 'source.rod'),
@@ -95,11 +105,12 @@ function turned(
 
 /**
  * The wiring of a cause as it is drawn.
- * @returns undefined where the cause is not drawn
+ * @returns undefined where the cause is not drawn, or can't occur in this context
  */
-export function drawnWiring(context: WiringContext, cause: string, options: LoopOptions): Drawn | undefined {
+export function drawnWiring(given: WiringContext, cause: string, options: LoopOptions): Drawn | undefined {
   const as = drawnAs(cause)
-  if (as === undefined || 'because' in as) return undefined
+  if (as === undefined || 'because' in as || !canOccur(as.wiring, given)) return undefined
+  const context = drawnContext(given, as)
   const { p, network } = baseOf(context, as)
   const bondPlace = hasPanel(context) ? p.bondAt : 'source'
   const hotAt = terminalOf(network, `${feedOf(context)}.hot`)

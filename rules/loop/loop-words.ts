@@ -3,7 +3,7 @@ import { inAmps, inVolts } from './amounts.ts'
 import { breakerDoes } from './breaker.ts'
 import { gfciTrips, metalIsLive, worthTheName } from './loop-state.ts'
 import type { LoopState, Metal, Place, Run } from './loop-state.ts'
-import { breakOf, goesRound, isBrief, wayRound } from './way.ts'
+import { breakOf, goesRound, isBrief } from './way.ts'
 
 export type LoopWords = {
   /** The verdict, in a few words. */
@@ -26,22 +26,27 @@ const metalNames: Readonly<Record<Place, string>> = {
 }
 const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
 
-/** Live metal at the same volts is said at once. */
+/** "53 to 64 V", "118 V". */
+function spanOf(volts: readonly number[]): string {
+  const [low, high] = [inVolts(Math.min(...volts)), inVolts(Math.max(...volts))]
+  return low === high ? high : `${low.replace(' V', '')} to ${high}`
+}
+
+/** One sentence for all metal that is live against earth, one for all that hot is on. */
 function dangerOf(state: LoopState): string[] {
   const live = state.metal.filter((metal) => metalIsLive(metal) && !isBrief(state, metal))
-  const groups = new Map<string, Metal[]>()
-  for (const metal of live) {
-    const key = `${metal.is} ${inVolts(metal.volts)}`
-    groups.set(key, [...(groups.get(key) ?? []), metal])
-  }
-  return [...groups.values()].map((group) => {
-    const [first] = group as [Metal, ...Metal[]]
+  return (['live', 'joined'] as const).flatMap((kind): string[] => {
+    const group = live.filter(({ is }) => is === kind)
+    if (group.length === 0) return []
     const who = capital(listed(group.map(({ place }) => metalNames[place])))
     const are = group.length > 1 ? 'are' : 'is'
-    const person = `A person of 1000 Ω gets ${inAmps(first.bodyAmps)}`
-    return first.is === 'joined'
-      ? `${who} ${are} live: hot is on it, and nothing turns it off. ${person} between it and neutral, at ${inVolts(first.volts)}.`
-      : `${who} ${are} live: ${inVolts(first.volts)} to earth, and nothing turns it off at once. ${person}.`
+    const volts = spanOf(group.map((metal) => metal.volts))
+    const person = `a person of 1000 Ω gets up to ${inAmps(Math.max(...group.map((metal) => metal.bodyAmps)))}`
+    return kind === 'joined'
+      ? [
+          `${who} ${are} live: hot is on that metal, and nothing turns it off. Between it and neutral, at ${volts}, ${person}.`,
+        ]
+      : [`${who} ${are} live: ${volts} to earth, and nothing turns it off at once; ${person}.`]
   })
 }
 
@@ -117,7 +122,10 @@ function currentsOf(state: LoopState): string[] {
   const [circuit, feeder] = said
   if (circuit === undefined) return []
   if (feeder === undefined) return [`${circuit.where}: ${circuit.text}.`]
-  if (feeder.text === circuit.text) return [`${capital(circuit.text)}, all the way.`]
+  if (feeder.text === circuit.text)
+    return [
+      circuit.key === '' ? 'No current worth the name anywhere.' : `${capital(circuit.text)}, all the way.`,
+    ]
   return [`${circuit.where}: ${circuit.text}.`, `${feeder.where}: ${feeder.text}.`]
 }
 
@@ -250,10 +258,4 @@ export function loopWords(state: LoopState): LoopWords {
     says,
     spoken: `The loop. ${drawn}. ${title}. ${[...danger, ...says].join(' ')}`,
   }
-}
-
-/** The conductors of the way round, for a test or a caption: "hot, the ground wire". */
-export const wayWords = (state: LoopState): string => {
-  const { out, back } = wayRound(state)
-  return listed([...new Set([...out, ...back].map((run) => wireNames[run.from]))])
 }

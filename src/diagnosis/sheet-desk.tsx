@@ -14,8 +14,10 @@ import { Announcement } from './announcement.tsx'
 import { BondPlate } from './bond-plate.tsx'
 import { offersOf } from './choose-test.ts'
 import { DeskContext } from './desk.ts'
+import { ExpectedContext, SelectedContext } from './expected.ts'
 import { FieldStrip } from './field-strip.tsx'
 import { LikelyCauses } from './likely-causes.tsx'
+import { LoopSection } from './loop-section.tsx'
 import { ModeWays } from './mode-ways.tsx'
 import { MoreReadings } from './more-readings.tsx'
 import { NextStep } from './next-step.tsx'
@@ -28,7 +30,9 @@ import { undoes } from './sheet-state.ts'
 import { StopPanel } from './stop-panel.tsx'
 import { useDeskState } from './use-desk-state.ts'
 import { useDiagnosis } from './use-diagnosis.ts'
+import { useExpected } from './use-expected.ts'
 import { useKeys, useLetterKeys } from './use-keys.ts'
+import { useSelectedCause } from './use-selected-cause.ts'
 import type { OpenSheet } from './use-sheet.ts'
 import { WhatIfBar } from './what-if-bar.tsx'
 
@@ -41,6 +45,8 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   const { typed, stored, dispatch, unkept, keepAgain } = sheet
   const { diagnosis, before, stops, bond, errors, failed } = useDiagnosis(edition, stored)
   const desk = useDeskState(edition, sheet, errors)
+  const selected = useSelectedCause(diagnosis)
+  const expected = useExpected(stored, desk.meterOhms, selected.cause)
   const { tests } = useProcedures(true)
   const { articles } = useArticles(true)
   const [letters, setLetters] = useLetterKeys()
@@ -90,100 +96,107 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
   const offer = offers.open.find((one) => one.key === picked) ?? offers.open[0]
   return (
     <DeskContext value={desk}>
-      <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
-        <SheetHead info={info} open={head} onOpen={setHead} letters={letters} onLetters={setLetters} />
-        {unkept !== undefined && (
-          <div className="desk-wide">
-            <Failed title="Not kept on this device." onRetry={keepAgain}>
-              {unkept}
-            </Failed>
-          </div>
-        )}
-        <div className="desk-left">
-          <Rail
-            title="Where ground sits"
-            className="desk-ground"
-            action={
-              <span className="flex">
-                {!trying && (
-                  <Button look="plain" size="small" onPress={() => dispatch({ do: 'what-if' })}>
-                    What if
-                  </Button>
-                )}
+      <SelectedContext value={selected}>
+        <ExpectedContext value={expected}>
+          <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
+            <SheetHead info={info} open={head} onOpen={setHead} letters={letters} onLetters={setLetters} />
+            {unkept !== undefined && (
+              <div className="desk-wide">
+                <Failed title="Not kept on this device." onRetry={keepAgain}>
+                  {unkept}
+                </Failed>
+              </div>
+            )}
+            <div className="desk-left">
+              <Rail
+                title="Where ground sits"
+                className="desk-ground"
+                action={
+                  <span className="flex">
+                    {!trying && (
+                      <Button look="plain" size="small" onPress={() => dispatch({ do: 'what-if' })}>
+                        What if
+                      </Button>
+                    )}
+                    <Button
+                      look="plain"
+                      size="small"
+                      icon="undo"
+                      onPress={undo}
+                      {...(undone === undefined
+                        ? { label: 'Undo: nothing to take back' }
+                        : { label: `Undo: ${undone}` })}
+                    >
+                      Undo
+                    </Button>
+                  </span>
+                }
+              >
+                <ModeWays />
+                <PlaceRun />
+                <WhatIfBar />
+                {seats && <SeatsOfGround seats={seats} />}
+                <FieldStrip />
+                {place && <MoreReadings key={place.id} place={place} />}
+              </Rail>
+              <AlsoFound finding={finding} onFinding={setFinding} />
+            </div>
+            <div className="desk-right">
+              <StopPanel stops={stops} trying={trying} />
+              {failed && (
+                <Failed title="Couldn’t rank these findings.">
+                  What you typed stays. Load the page again.
+                </Failed>
+              )}
+              {unread && (
+                <p className="unread" role="status">
+                  {Object.keys(errors).length === 1 ? 'One entry' : `${Object.keys(errors).length} entries`}{' '}
+                  can’t be read and {Object.keys(errors).length === 1 ? 'is' : 'are'} left out of the ranking
+                  until mended.
+                </p>
+              )}
+              {failed ? null : diagnosis === undefined ? (
+                <Waiting what="the ranking" />
+              ) : (
+                <>
+                  <NextStep
+                    offers={offers}
+                    stopped={stops.length > 0}
+                    misfit={diagnosis.misfit !== undefined}
+                    procedure={(test) => tests.get(test)}
+                    picked={picked}
+                    onPick={setPicked}
+                  />
+                  {bond && <BondPlate bond={bond} trying={trying} unread={unread} />}
+                  <LikelyCauses diagnosis={diagnosis} before={before} articleOf={byCause} />
+                  <Announcement diagnosis={diagnosis} />
+                </>
+              )}
+            </div>
+            <LoopSection />
+            <SignalPanel word="warning" slim className="desk-warning">
+              Readings with a cover off and power on are for qualified people. Prove the meter on a known
+              source, before and after. Local code and the authority having jurisdiction decide.
+            </SignalPanel>
+          </Page>
+          {offer !== undefined && diagnosis !== undefined && !desk.typing && (
+            <div className={`desk-dock ${stops.length > 0 ? 'desk-dock-still' : ''}`}>
+              <Dock>
                 <Button
-                  look="plain"
-                  size="small"
-                  icon="undo"
-                  onPress={undo}
-                  {...(undone === undefined
-                    ? { label: 'Undo: nothing to take back' }
-                    : { label: `Undo: ${undone}` })}
+                  look={stops.length > 0 || diagnosis.misfit !== undefined ? 'outline' : 'main'}
+                  size="glove"
+                  wide
+                  iconAfter="next"
+                  onPress={() => desk.go(offer.next.findings, offer.mode)}
                 >
-                  Undo
+                  Next: {offer.test.label}
                 </Button>
-              </span>
-            }
-          >
-            <ModeWays />
-            <PlaceRun />
-            <WhatIfBar />
-            {seats && <SeatsOfGround seats={seats} />}
-            <FieldStrip />
-            {place && <MoreReadings key={place.id} place={place} />}
-          </Rail>
-          <AlsoFound finding={finding} onFinding={setFinding} />
-        </div>
-        <div className="desk-right">
-          <StopPanel stops={stops} trying={trying} />
-          {failed && (
-            <Failed title="Couldn’t rank these findings.">What you typed stays. Load the page again.</Failed>
+              </Dock>
+            </div>
           )}
-          {unread && (
-            <p className="unread" role="status">
-              {Object.keys(errors).length === 1 ? 'One entry' : `${Object.keys(errors).length} entries`} can’t
-              be read and {Object.keys(errors).length === 1 ? 'is' : 'are'} left out of the ranking until
-              mended.
-            </p>
-          )}
-          {failed ? null : diagnosis === undefined ? (
-            <Waiting what="the ranking" />
-          ) : (
-            <>
-              <NextStep
-                offers={offers}
-                stopped={stops.length > 0}
-                misfit={diagnosis.misfit !== undefined}
-                procedure={(test) => tests.get(test)}
-                picked={picked}
-                onPick={setPicked}
-              />
-              {bond && <BondPlate bond={bond} trying={trying} unread={unread} />}
-              <LikelyCauses diagnosis={diagnosis} before={before} articleOf={byCause} />
-              <Announcement diagnosis={diagnosis} />
-            </>
-          )}
-        </div>
-        <SignalPanel word="warning" slim className="desk-warning">
-          Readings with a cover off and power on are for qualified people. Prove the meter on a known source,
-          before and after. Local code and the authority having jurisdiction decide.
-        </SignalPanel>
-      </Page>
-      {offer !== undefined && diagnosis !== undefined && !desk.typing && (
-        <div className={`desk-dock ${stops.length > 0 ? 'desk-dock-still' : ''}`}>
-          <Dock>
-            <Button
-              look={stops.length > 0 || diagnosis.misfit !== undefined ? 'outline' : 'main'}
-              size="glove"
-              wide
-              iconAfter="next"
-              onPress={() => desk.go(offer.next.findings, offer.mode)}
-            >
-              Next: {offer.test.label}
-            </Button>
-          </Dock>
-        </div>
-      )}
-      <NumberPad />
+          <NumberPad />
+        </ExpectedContext>
+      </SelectedContext>
     </DeskContext>
   )
 }

@@ -55,10 +55,7 @@ type LoopPictureProps = {
 export function LoopPicture({ context, cause, begin = 'fault', read = nothingRead }: LoopPictureProps) {
   const as = useMemo(() => drawnAs(cause), [cause])
   const { source, system, wiring } = context
-  const own = useMemo(
-    () => (as === undefined || 'because' in as ? undefined : loopDefaults({ source, system, wiring }, as)),
-    [as, source, system, wiring],
-  )
+  const own = useMemo(() => loopDefaults({ source, system, wiring }, cause), [source, system, wiring, cause])
   const [turned, setTurned] = useState<Partial<LoopOptions>>({})
   const [still, setStill] = useState(false)
   const options = useMemo(() => own && { state: begin, ...own, ...turned }, [own, begin, turned])
@@ -69,13 +66,18 @@ export function LoopPicture({ context, cause, begin = 'fault', read = nothingRea
   const words = useMemo(() => state && loopWords(state), [state])
   if (as === undefined) return <p className="text-small">No loop picture: this cause is not known here.</p>
   if ('because' in as) return <p className="text-small">No loop picture of this cause. {as.because}</p>
-  if (own === undefined || options === undefined || state === undefined || words === undefined) return null
+  if (own === undefined || options === undefined || state === undefined || words === undefined)
+    return (
+      <p className="text-small">
+        No loop picture: this cause can’t occur with this source, system and wiring.
+      </p>
+    )
   return (
     <figure className="loop-figure">
       <LoopToggles
         options={options}
         own={own}
-        panel={wiring === 'panel'}
+        panel={state.places.includes('panel')}
         onTurn={(part) => setTurned({ ...turned, ...part })}
         onAsFound={() => setTurned(turned.state === undefined ? {} : { state: turned.state })}
         still={still}
