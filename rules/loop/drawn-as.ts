@@ -36,8 +36,8 @@ const others: Readonly<Record<string, DrawnAs | Undrawn>> = {
     // 15 mA at 120 V: a Class A GFCI trips from 6 mA on (UL 943).
     { edits: [join('leak', 'receptacle.hot', 'receptacle.ground', 8000)] },
   ),
-  'neutral-touch-downstream': as('sound', 'Drawn with neutral on metal in what is plugged in.', {
-    edits: [join('bootleg', 'receptacle.neutral', 'receptacle.ground', 0.5)],
+  'neutral-touch-downstream': as('sound', undefined, {
+    edits: [join('astray', 'receptacle.neutral', 'receptacle.ground', 0.5)],
   }),
   'overloaded-circuit': as('sound', 'Drawn with loads of about 24 A on the circuit.', { loadOhms: 5 }),
   'short-circuit': as('sound', 'The wiring is sound: the fault has a good way back.'),

@@ -103,13 +103,13 @@ const rows = {
   },
   standing: {
     one: { hot: 38, neutral: 106, ground: 176, leg2: 0 },
-    two: { hot: 30, neutral: 90, leg2: 146, ground: 202 },
+    two: { hot: 30, neutral: 86, leg2: 138, ground: 188 },
   },
 } as const
 /** Metal's edges across the run. */
 const edges = {
   lying: { one: [52, 252], two: [52, 306] },
-  standing: { one: [8, 226], two: [8, 236] },
+  standing: { one: [8, 226], two: [8, 228] },
 } as const
 
 export type Frame = Along & {
@@ -156,8 +156,4 @@ export function gapOf(frame: Frame, stretch: 'feeder' | 'circuit'): readonly [nu
   const begin = stretch === 'circuit' && frame.boxes.panel !== undefined ? 'panel' : 'source'
   const end = stretch === 'feeder' ? 'panel' : 'receptacle'
   return [frame.boxOf(begin)[1], frame.boxOf(end)[0]]
-}
-export const middleOf = (frame: Frame, stretch: 'feeder' | 'circuit'): number => {
-  const [from, to] = gapOf(frame, stretch)
-  return (from + to) / 2
 }

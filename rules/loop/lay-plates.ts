@@ -4,7 +4,7 @@ import { gapOf } from './frame.ts'
 import type { Frame } from './frame.ts'
 import { missingBondAt } from './lay-parts.ts'
 import { faultAlong } from './lay-wires.ts'
-import { worthTheName } from './loop-state.ts'
+import { isAtReceptacle, worthTheName } from './loop-state.ts'
 import type { LoopState, Run, Stretch } from './loop-state.ts'
 import type { LoopScene, Point } from './scene.ts'
 import { breakOf } from './way.ts'
@@ -39,7 +39,8 @@ function runSays(run: Run, long: boolean): { look: Plate['look']; says: string }
 function namesOf(frame: Frame, state: LoopState): Named[] {
   const broken = breakOf(state)
   const leak = state.drawn === 'fault' && broken !== undefined ? state.touch?.amps : undefined
-  const aside = leak !== undefined && leak < worthTheName && leak > 1e-6 ? `${inAmps(leak)} leaks` : undefined
+  const aside =
+    leak !== undefined && leak < worthTheName && leak >= 1e-5 ? `${inAmps(leak)} leaks` : undefined
   // Too many ohms in every wire alike is the run itself.
   const long = state.runs.filter((run) => run.state === 'poor').length > 1
   const names = state.runs.flatMap((run): Named[] => {
@@ -67,7 +68,7 @@ function namesOf(frame: Frame, state: LoopState): Named[] {
         column: run.stretch,
       })
   }
-  if (state.bondMissing === undefined || state.ties.some((tie) => tie.kind !== 'jumper')) return names
+  if (state.bondMissing === undefined || !state.ties.every(isAtReceptacle)) return names
   const place = state.bondMissing === 'panel' ? 'panel' : 'source'
   return [
     ...names,
@@ -85,7 +86,8 @@ function namesOf(frame: Frame, state: LoopState): Named[] {
 const letter = { strong: 8.1, plain: 7.3 } as const
 function wrapped(text: string, width: number, each: number): string[] {
   const lines: string[] = []
-  for (const word of text.split(' ')) {
+  const together = text.replaceAll(/(\d) (?=[ΩmAV])/g, '$1\u00a0')
+  for (const word of together.split(' ')) {
     const last = lines.at(-1)
     if (last !== undefined && (last.length + 1 + word.length) * each <= width)
       lines[lines.length - 1] = `${last} ${word}`
@@ -98,11 +100,19 @@ function wrapped(text: string, width: number, each: number): string[] {
 const standingColumn = (frame: Frame, column: Named['column']): Stretch =>
   column === 'panel' || frame.boxes.panel === undefined ? 'circuit' : column === 'source' ? 'feeder' : column
 
+const ownColumn = (frame: Frame, column: Named['column']): Named['column'] =>
+  frame.lie === 'standing' ? standingColumn(frame, column) : column
+
 /** Where a column's plates begin, and how wide they may be. */
-function columnOf(frame: Frame, column: Named['column']): { x: number; y: number; width: number } {
+function columnOf(
+  frame: Frame,
+  column: Named['column'],
+  earthPath: boolean,
+): { x: number; y: number; width: number } {
   if (frame.lie === 'standing') {
     const x = frame.edge[1] + 10
-    const width = frame.width - x - 26
+    // Current through the ground runs down the right edge.
+    const width = frame.width - x - (earthPath ? 26 : 6)
     return { x, y: gapOf(frame, standingColumn(frame, column))[0] + 2, width }
   }
   const y = frame.edge[1] + 10
@@ -112,16 +122,20 @@ function columnOf(frame: Frame, column: Named['column']): { x: number; y: number
 }
 
 export function platesOf(frame: Frame, state: LoopState): { plates: Plate[]; height: number } {
+  const earthPath = state.rods.filter((rod) => rod.amps >= worthTheName).length > 1
   const filled: Partial<Record<Named['column'], number>> = {}
-  const plates = namesOf(frame, state).map((named): Plate => {
-    const { x, y, width } = columnOf(frame, named.column)
+  const names = namesOf(frame, state)
+  const columns = names.map(({ column }) => ownColumn(frame, column))
+  const plates = names.map((named, index): Plate => {
+    const { x, y, width } = columnOf(frame, named.column, earthPath)
     const lines = [
       ...wrapped(named.says, width - 16, letter.strong).map((text) => ({ text, strong: true })),
-      ...(named.aside === undefined
+      ...(named.aside === undefined || !alone
         ? []
         : wrapped(named.aside, width - 16, letter.plain).map((text) => ({ text, strong: false }))),
     ]
-    const own = frame.lie === 'standing' ? standingColumn(frame, named.column) : named.column
+    const own = ownColumn(frame, named.column)
+    const alone = columns.every((column, other) => other === index || column !== own)
     const top = filled[own] ?? y
     const height = lines.length * 18 + 11
     filled[own] = top + height + 6

@@ -1,12 +1,12 @@
 /** The conductors from the source to the receptacle: where they run, cross and end, and which way current goes. */
 import { inAmps } from './amounts.ts'
-import { gapOf, middleOf } from './frame.ts'
+import { gapOf } from './frame.ts'
 import type { Frame } from './frame.ts'
 import type { Piece } from './lay-parts.ts'
-import { worthTheName } from './loop-state.ts'
+import { isAtReceptacle, worthTheName } from './loop-state.ts'
 import type { LoopState, Run } from './loop-state.ts'
 import type { LoopScene, Points } from './scene.ts'
-import { wayRound } from './way.ts'
+import { goesRound, wayRound } from './way.ts'
 
 type Pair = readonly [number, number]
 /** Half of the opening in an open conductor, and half of a poor joint, px. */
@@ -29,8 +29,8 @@ function endsOf(frame: Frame, state: LoopState, run: Run): Pair {
       run.from === 'leg2' && !state.runs.some((one) => one.stretch === 'circuit' && one.from === 'leg2')
     return [begin, idle ? frame.house : frame.bus]
   }
-  const jumper = state.ties.some((tie) => tie.kind === 'jumper')
-  const touched = state.touch?.place === 'receptacle' && run.from === 'hot'
+  const jumper = state.ties.some(isAtReceptacle)
+  const touched = (state.touch?.place === 'receptacle' || state.leak !== undefined) && run.from === 'hot'
   const last =
     run.to === 'ground'
       ? frame.metal
@@ -62,7 +62,9 @@ function cornersOf(frame: Frame, [begin, end]: Pair, run: Run): Pair[] {
 
 /** Where along the run it is open or poor. */
 export function faultAlong(frame: Frame, run: Run): number {
-  return run.openAt === 'source' ? frame.pin : middleOf(frame, run.stretch) + (run.from === run.to ? 0 : -34)
+  if (run.openAt === 'source') return frame.pin
+  const [from, to] = gapOf(frame, run.stretch)
+  return from + (run.from === run.to ? 0.66 : 0.2) * (to - from)
 }
 
 /** Neutral's way on to a bond in the source is the bond's own; in the panel it comes from the loads there. */
@@ -82,7 +84,7 @@ function currentEnd(frame: Frame, state: LoopState, run: Run, end: number): numb
   if (run.from === 'hot') return frame.metal
   return state.touch?.place === 'receptacle' && state.touch.amps >= worthTheName
     ? frame.touch
-    : state.ties.some((tie) => tie.kind === 'jumper')
+    : state.ties.some(isAtReceptacle)
       ? frame.jumper
       : frame.load
 }
@@ -100,6 +102,7 @@ export function layRuns(frame: Frame, state: LoopState): Laid {
   const pieces: Piece[] = []
   const texts: Laid['texts'] = []
   const { out, back } = wayRound(state)
+  const round = goesRound(state)
   const draw = (run: Run, points: Points) =>
     wires.push({ wire: run.from, points, look: run.state === 'absent' ? 'absent' : 'whole' })
   // A wire that nobody ran is drawn first, so that nothing hides behind it; crossed ones last.
@@ -131,7 +134,7 @@ export function layRuns(frame: Frame, state: LoopState): Laid {
         toward: run.toward,
       })
     }
-    const onTheWay = out.includes(run) || back.includes(run)
+    const onTheWay = !round && (out.includes(run) || back.includes(run))
     if (!flows && !onTheWay) continue
     const place = arrowAlong(frame, run)
     const toward = flows ? run.toward : out.includes(run) ? 'load' : 'source'
@@ -141,26 +144,21 @@ export function layRuns(frame: Frame, state: LoopState): Laid {
       texts.push(
         frame.lie === 'lying'
           ? {
-              at: frame.at(place + (run.from === run.to ? 26 : 8), row - 15),
+              at: frame.at(place + 8, row - 15),
               text: inAmps(run.amps),
               look: 'amps',
               anchor: 'middle',
             }
-          : { at: frame.at(place + 24, row + 12), text: inAmps(run.amps), look: 'amps', anchor: 'start' },
+          : { at: frame.at(place + 24, row + 10), text: inAmps(run.amps), look: 'amps', anchor: 'start' },
       )
   }
   return { wires, ends, joints, arrows, pieces, texts }
 }
 
-/** Before what is open or crossed, where anything is. */
+/** Before what is open, poor or crossed, in the same place on every wire. */
 function arrowAlong(frame: Frame, run: Run): number {
-  const [from] = gapOf(frame, run.stretch)
-  const room = frame.lie === 'lying' ? 44 : 26
-  const middle = middleOf(frame, run.stretch)
-  if (run.from !== run.to) return from + room - 14
-  return run.state === 'whole' || run.openAt === 'source'
-    ? middle - (frame.lie === 'lying' ? 0 : 14)
-    : from + room - 10
+  const [from, to] = gapOf(frame, run.stretch)
+  return from + (run.from === run.to ? 0.32 : 0.24) * (to - from)
 }
 
 const degreesOf = ({ lie }: Frame, toward: 'load' | 'source'): number =>

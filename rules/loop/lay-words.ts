@@ -23,7 +23,7 @@ const titles = (state: LoopState): Readonly<Record<Place, string>> => ({
 })
 const breakerWords = ({ breaker }: LoopState): [string, string] => [
   `breaker ${breaker.amps} A`,
-  `sees ${inAmps(breaker.sees)}`,
+  breaker.sees < 1e-5 ? 'sees nothing' : `sees ${inAmps(breaker.sees)}`,
 ]
 const breakerIsAt = (state: LoopState, place: Place): boolean =>
   place === (state.places.includes('panel') ? 'panel' : 'source')
@@ -78,7 +78,10 @@ function lyingWords(
   }
   for (const tie of state.ties.filter((one) => one.place === place))
     texts.push({
-      at: at(tieAlong(frame, place) + 10, rows.neutral + 31),
+      at:
+        tie.kind === 'middle'
+          ? at(frame.tie - 14, rows.hot - 18)
+          : at(tieAlong(frame, place) + 10, rows.ground - 22),
       text: tieNames[tie.kind],
       look: 'quiet',
       anchor: 'start',

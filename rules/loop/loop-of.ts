@@ -97,6 +97,7 @@ function tiesOf({ network }: Drawn, solved: Factored): Tie[] {
     bond: 'wanted',
     'bond.second': 'second',
     bootleg: 'jumper',
+    astray: 'astray',
     tie: 'middle',
     'tie.hot': 'middle',
   } as const
@@ -156,12 +157,14 @@ export function loopOf(given: WiringContext, cause: string, options: LoopOptions
   const solved = factor(network)
   const nominal = nominalVolts(context)
   const load = branchOf(network, 'load')
+  const leak = branchOf(network, 'leak')
   const bonded = branchOf(network, 'bond') !== undefined
   return {
     nominal,
     places: hasPanel(context) ? ['source', 'panel', 'receptacle'] : ['source', 'receptacle'],
     twoLegs: hasTwoLegs(context),
     sourceLabel: sourceLabels[context.source],
+    sourceVolts: magnitude(solved.between('source.hot', 'source.neutral')),
     limited: context.source !== 'utility',
     drawn: options.state,
     runs: [...feederRuns(drawn, solved), ...circuitRuns(drawn, solved)],
@@ -174,6 +177,7 @@ export function loopOf(given: WiringContext, cause: string, options: LoopOptions
       amps: magnitude(solved.amps('load')),
     },
     touch: touchOf(drawn, solved),
+    leak: leak?.kind === 'resistance' ? { ohms: leak.ohms, amps: magnitude(solved.amps('leak')) } : undefined,
     metal: metalOf(drawn, solved),
     breaker: { ...usualBreaker(nominal), sees: magnitude(solved.amps('branch.hot')) },
     note: drawn.as.note,

@@ -29,8 +29,8 @@ export type Run = Flow & {
 /** Neutral joined to ground, on purpose or not. */
 export type Tie = {
   place: Place
-  /** `wanted`: the one bond. `second`: one too many. `jumper`: in the receptacle. `middle`: case tied to half the output. */
-  kind: 'wanted' | 'second' | 'jumper' | 'middle'
+  /** `wanted`: the one bond. `second`: one too many. `jumper`: in the receptacle. `astray`: in what is plugged in. `middle`: case tied to half the output. */
+  kind: 'wanted' | 'second' | 'jumper' | 'astray' | 'middle'
   amps: number
   toward: 'ground' | 'neutral'
 }
@@ -69,6 +69,8 @@ export type LoopState = {
   places: readonly Place[]
   twoLegs: boolean
   sourceLabel: string
+  /** Across the source's hot and neutral. */
+  sourceVolts: number
   /** An inverter or generator limits what it gives into a fault; a utility does not. */
   limited: boolean
   drawn: 'load' | 'fault'
@@ -80,6 +82,8 @@ export type LoopState = {
   house: readonly HouseLoad[]
   load: { volts: number; amps: number } | undefined
   touch: Touch | undefined
+  /** From hot to metal through what is plugged in. */
+  leak: { ohms: number; amps: number } | undefined
   metal: readonly Metal[]
   breaker: Breaker
   /** One sentence about this cause that the picture can't say. */
@@ -95,5 +99,8 @@ export const bodyOhms = 1000
 export const letGoAmps = 0.005
 /** Volts of metal that are worth a word although next to nothing flows through a person. */
 export const faintVolts = 15
+
+/** Joined at the receptacle: no bond of the system. */
+export const isAtReceptacle = (tie: Tie): boolean => tie.place === 'receptacle'
 
 export const metalIsLive = ({ is }: Metal): boolean => is === 'live' || is === 'joined'

@@ -1,6 +1,6 @@
 /** The way round that current would take, and where it ends when it can't come back. */
 import { breakerDoes } from './breaker.ts'
-import { worthTheName } from './loop-state.ts'
+import { isAtReceptacle, metalIsLive, worthTheName } from './loop-state.ts'
 import type { LoopState, Metal, Run, Stretch, Wire } from './loop-state.ts'
 
 const runTo = (state: LoopState, stretch: Stretch, to: Wire): Run | undefined =>
@@ -19,7 +19,7 @@ export function wayRound(state: LoopState): { out: readonly Run[]; back: readonl
   }
   if (state.touch !== undefined && state.touch.place !== 'receptacle')
     return { out: out.slice(0, 1), back: taken(runFrom(state, 'feeder', 'ground')) }
-  const jumper = state.ties.some((tie) => tie.kind === 'jumper')
+  const jumper = state.ties.some(isAtReceptacle)
   const hotOnMetal = out.at(-1)?.to === 'ground'
   const last = jumper
     ? runFrom(state, 'circuit', 'neutral')
@@ -45,7 +45,7 @@ export function breakOf(state: LoopState): Run | 'bond' | undefined {
 
 /** Metal that is live only until the breaker has seen its fault: the loop does its work. */
 export function isBrief(state: LoopState, metal: Metal): boolean {
-  if (metal.is !== 'live' || state.touch === undefined || state.touch.amps < worthTheName) return false
+  if (!metalIsLive(metal) || state.touch === undefined || state.touch.amps < worthTheName) return false
   const does = breakerDoes(state.breaker)
   return does === 'soon' || does === 'at-once'
 }

@@ -13,8 +13,7 @@ import { AlsoFound } from './also-found.tsx'
 import { Announcement } from './announcement.tsx'
 import { BondPlate } from './bond-plate.tsx'
 import { offersOf } from './choose-test.ts'
-import { DeskContext } from './desk.ts'
-import { ExpectedContext, SelectedContext } from './expected.ts'
+import { DeskProviders } from './desk-providers.tsx'
 import { FieldStrip } from './field-strip.tsx'
 import { LikelyCauses } from './likely-causes.tsx'
 import { LoopSection } from './loop-section.tsx'
@@ -95,108 +94,102 @@ export function SheetDesk({ sheet, edition, info }: SheetDeskProps) {
 
   const offer = offers.open.find((one) => one.key === picked) ?? offers.open[0]
   return (
-    <DeskContext value={desk}>
-      <SelectedContext value={selected}>
-        <ExpectedContext value={expected}>
-          <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
-            <SheetHead info={info} open={head} onOpen={setHead} letters={letters} onLetters={setLetters} />
-            {unkept !== undefined && (
-              <div className="desk-wide">
-                <Failed title="Not kept on this device." onRetry={keepAgain}>
-                  {unkept}
-                </Failed>
-              </div>
-            )}
-            <div className="desk-left">
-              <Rail
-                title="Where ground sits"
-                className="desk-ground"
-                action={
-                  <span className="flex">
-                    {!trying && (
-                      <Button look="plain" size="small" onPress={() => dispatch({ do: 'what-if' })}>
-                        What if
-                      </Button>
-                    )}
-                    <Button
-                      look="plain"
-                      size="small"
-                      icon="undo"
-                      onPress={undo}
-                      {...(undone === undefined
-                        ? { label: 'Undo: nothing to take back' }
-                        : { label: `Undo: ${undone}` })}
-                    >
-                      Undo
-                    </Button>
-                  </span>
-                }
-              >
-                <ModeWays />
-                <PlaceRun />
-                <WhatIfBar />
-                {seats && <SeatsOfGround seats={seats} />}
-                <FieldStrip />
-                {place && <MoreReadings key={place.id} place={place} />}
-              </Rail>
-              <AlsoFound finding={finding} onFinding={setFinding} />
-            </div>
-            <div className="desk-right">
-              <StopPanel stops={stops} trying={trying} />
-              {failed && (
-                <Failed title="Couldn’t rank these findings.">
-                  What you typed stays. Load the page again.
-                </Failed>
-              )}
-              {unread && (
-                <p className="unread" role="status">
-                  {Object.keys(errors).length === 1 ? 'One entry' : `${Object.keys(errors).length} entries`}{' '}
-                  can’t be read and {Object.keys(errors).length === 1 ? 'is' : 'are'} left out of the ranking
-                  until mended.
-                </p>
-              )}
-              {failed ? null : diagnosis === undefined ? (
-                <Waiting what="the ranking" />
-              ) : (
-                <>
-                  <NextStep
-                    offers={offers}
-                    stopped={stops.length > 0}
-                    misfit={diagnosis.misfit !== undefined}
-                    procedure={(test) => tests.get(test)}
-                    picked={picked}
-                    onPick={setPicked}
-                  />
-                  {bond && <BondPlate bond={bond} trying={trying} unread={unread} />}
-                  <LikelyCauses diagnosis={diagnosis} before={before} articleOf={byCause} />
-                  <Announcement diagnosis={diagnosis} />
-                </>
-              )}
-            </div>
-            <LoopSection />
-            <SignalPanel word="warning" slim className="desk-warning">
-              Readings with a cover off and power on are for qualified people. Prove the meter on a known
-              source, before and after. Local code and the authority having jurisdiction decide.
-            </SignalPanel>
-          </Page>
-          {offer !== undefined && diagnosis !== undefined && !desk.typing && (
-            <div className={`desk-dock ${stops.length > 0 ? 'desk-dock-still' : ''}`}>
-              <Dock>
+    <DeskProviders desk={desk} selected={selected} expected={expected}>
+      <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
+        <SheetHead info={info} open={head} onOpen={setHead} letters={letters} onLetters={setLetters} />
+        {unkept !== undefined && (
+          <div className="desk-wide">
+            <Failed title="Not kept on this device." onRetry={keepAgain}>
+              {unkept}
+            </Failed>
+          </div>
+        )}
+        <div className="desk-left">
+          <Rail
+            title="Where ground sits"
+            className="desk-ground"
+            action={
+              <span className="flex">
+                {!trying && (
+                  <Button look="plain" size="small" onPress={() => dispatch({ do: 'what-if' })}>
+                    What if
+                  </Button>
+                )}
                 <Button
-                  look={stops.length > 0 || diagnosis.misfit !== undefined ? 'outline' : 'main'}
-                  size="glove"
-                  wide
-                  iconAfter="next"
-                  onPress={() => desk.go(offer.next.findings, offer.mode)}
+                  look="plain"
+                  size="small"
+                  icon="undo"
+                  onPress={undo}
+                  {...(undone === undefined
+                    ? { label: 'Undo: nothing to take back' }
+                    : { label: `Undo: ${undone}` })}
                 >
-                  Next: {offer.test.label}
+                  Undo
                 </Button>
-              </Dock>
-            </div>
+              </span>
+            }
+          >
+            <ModeWays />
+            <PlaceRun />
+            <WhatIfBar />
+            {seats && <SeatsOfGround seats={seats} />}
+            <FieldStrip />
+            {place && <MoreReadings key={place.id} place={place} />}
+          </Rail>
+          <AlsoFound finding={finding} onFinding={setFinding} />
+        </div>
+        <div className="desk-right">
+          <StopPanel stops={stops} trying={trying} />
+          {failed && (
+            <Failed title="Couldn’t rank these findings.">What you typed stays. Load the page again.</Failed>
           )}
-          <NumberPad />
-        </ExpectedContext>
-      </SelectedContext>
-    </DeskContext>
+          {unread && (
+            <p className="unread" role="status">
+              {Object.keys(errors).length === 1 ? 'One entry' : `${Object.keys(errors).length} entries`} can’t
+              be read and {Object.keys(errors).length === 1 ? 'is' : 'are'} left out of the ranking until
+              mended.
+            </p>
+          )}
+          {failed ? null : diagnosis === undefined ? (
+            <Waiting what="the ranking" />
+          ) : (
+            <>
+              <NextStep
+                offers={offers}
+                stopped={stops.length > 0}
+                misfit={diagnosis.misfit !== undefined}
+                procedure={(test) => tests.get(test)}
+                picked={picked}
+                onPick={setPicked}
+              />
+              {bond && <BondPlate bond={bond} trying={trying} unread={unread} />}
+              <LikelyCauses diagnosis={diagnosis} before={before} articleOf={byCause} />
+              <Announcement diagnosis={diagnosis} />
+            </>
+          )}
+        </div>
+        <LoopSection />
+        <SignalPanel word="warning" slim className="desk-warning">
+          Readings with a cover off and power on are for qualified people. Prove the meter on a known source,
+          before and after. Local code and the authority having jurisdiction decide.
+        </SignalPanel>
+      </Page>
+      {offer !== undefined && diagnosis !== undefined && !desk.typing && (
+        <div className={`desk-dock ${stops.length > 0 ? 'desk-dock-still' : ''}`}>
+          <Dock>
+            <Button
+              look={stops.length > 0 || diagnosis.misfit !== undefined ? 'outline' : 'main'}
+              size="glove"
+              wide
+              iconAfter="next"
+              onPress={() => desk.go(offer.next.findings, offer.mode)}
+            >
+              Next: {offer.test.label}
+            </Button>
+          </Dock>
+        </div>
+      )}
+      <NumberPad />
+    </DeskProviders>
   )
 }
