@@ -29,16 +29,18 @@ function atPart(one: Range, part: number): number {
   return one.spread === 'log' ? one.low * (one.high / one.low) ** part : one.low + (one.high - one.low) * part
 }
 
-/** A range's value in a corner. What may be absent is absent in half of the corners of its upper side. */
-function corner(one: One, point: number, column: number, corners: number): unknown {
+/**
+ * A range's value in a corner. What is mostly absent is absent in half of the corners, so that the other half shows
+ * what it does; what is now and then absent is there.
+ */
+function corner(one: One, point: number, column: number, columns: number): unknown {
   const high = upper(point, column)
-  if (!isRange(one)) {
-    // More than two options: the next column decides as well.
-    const next = upper(point, 1 + (column % (corners - 1)))
-    return one.options[(Number(high) + 2 * Number(next)) % one.options.length]?.value
-  }
-  if (one.absent !== undefined && !high) return 0
-  return high ? one.high : one.low
+  const next = upper(point, 1 + (column % columns))
+  // More than two options: the next column decides as well.
+  if (!isRange(one)) return one.options[(Number(high) + 2 * Number(next)) % one.options.length]?.value
+  if (one.absent === undefined || one.absent < 0.5) return high ? one.high : one.low
+  if (one.absent === 1 || !high) return 0
+  return next ? one.high : one.low
 }
 
 const primes = [2, 3, 5, 7, 11, 13, 17, 19, 23, 29, 31, 37, 41, 43, 47, 53]
@@ -64,7 +66,7 @@ export function pointsIn(ranges: Ranges, corners: number, inners: number): Param
   const columns = corners - 1
   return [
     ...Array.from({ length: corners }, (_, point) =>
-      made(ranges, (one, index) => corner(one, point, 1 + (index % columns), corners)),
+      made(ranges, (one, index) => corner(one, point, 1 + (index % columns), columns)),
     ),
     ...Array.from({ length: inners }, (_, n) => made(ranges, (one, index) => inner(one, n + 1, index))),
   ]

@@ -66,7 +66,7 @@ function refuse({ name }: Branch, what: string, value: number): never {
 }
 
 /** The two ends of every branch by their nodes' numbers, −1 for earth. */
-type Numbered = { nodes: Map<Node, number>; ends: Int32Array }
+type Numbered = { nodes: Map<Node, number>; ends: number[] }
 
 /**
  * Numbers the nodes from 0, those with the fewest branches first: eliminating them leaves the fewest new entries in
@@ -74,9 +74,9 @@ type Numbered = { nodes: Map<Node, number>; ends: Int32Array }
  */
 function numberNodes(branches: readonly Branch[]): Numbered {
   const nodes = new Map<Node, number>([[earth, -1]])
-  const ends = new Int32Array(2 * branches.length)
+  const ends: number[] = []
   const branchesAt: number[] = []
-  for (let i = 0; i < ends.length; i++) {
+  for (let i = 0; i < 2 * branches.length; i++) {
     const branch = branches[i >> 1]!
     const node = i % 2 === 0 ? branch.from : branch.to
     let number = nodes.get(node)
@@ -85,9 +85,9 @@ function numberNodes(branches: readonly Branch[]): Numbered {
       nodes.set(node, number)
     }
     if (number >= 0) branchesAt[number]! += 1
-    ends[i] = number
+    ends.push(number)
   }
-  const place = new Int32Array(branchesAt.length)
+  const place = branchesAt.map(() => 0)
   const fewestFirst = branchesAt.map((_, number) => number).sort((a, b) => branchesAt[a]! - branchesAt[b]!)
   fewestFirst.forEach((number, i) => (place[number] = i))
   for (const [node, number] of nodes) if (number >= 0) nodes.set(node, place[number]!)
@@ -95,33 +95,24 @@ function numberNodes(branches: readonly Branch[]): Numbered {
 }
 
 /** Adds an admittance between two nodes to the matrix. */
-function connect({ re, im }: ComplexArray, n: number, { from, to, admittance: y }: Conducts): void {
-  if (from >= 0) {
-    re[from * n + from]! += y.re
-    im[from * n + from]! += y.im
-  }
-  if (to >= 0) {
-    re[to * n + to]! += y.re
-    im[to * n + to]! += y.im
-  }
+function connect(matrix: ComplexArray, n: number, { from, to, admittance: { re, im } }: Conducts): void {
+  if (from >= 0) add(matrix, from * n + from, re, im)
+  if (to >= 0) add(matrix, to * n + to, re, im)
   if (from < 0 || to < 0) return
-  re[from * n + to]! -= y.re
-  im[from * n + to]! -= y.im
-  re[to * n + from]! -= y.re
-  im[to * n + from]! -= y.im
+  add(matrix, from * n + to, -re, -im)
+  add(matrix, to * n + from, -re, -im)
 }
 
 /** Adds a source's short-circuit current, which leaves `from` and enters `to`. */
-function inject({ re, im }: ComplexArray, { from, to, admittance, push }: Conducts): void {
-  const amps = times(admittance, push)
-  if (from >= 0) {
-    re[from]! -= amps.re
-    im[from]! -= amps.im
-  }
-  if (to >= 0) {
-    re[to]! += amps.re
-    im[to]! += amps.im
-  }
+function inject(injected: ComplexArray, { from, to, admittance, push }: Conducts): void {
+  const { re, im } = times(admittance, push)
+  if (from >= 0) add(injected, from, -re, -im)
+  if (to >= 0) add(injected, to, re, im)
+}
+
+function add(array: ComplexArray, i: number, re: number, im: number): void {
+  array[2 * i]! += re
+  array[2 * i + 1]! += im
 }
 
 /**
@@ -136,7 +127,7 @@ export function nodalEquations({ hertz, branches }: Network): Equations {
   const n = nodes.size - 1
   const [matrix, injected] = [zeros(n * n), zeros(n)]
   const named = new Map<string, Conducts>()
-  for (let i = 0; i < n; i++) matrix.re[i * n + i] = leakSiemens
+  for (let i = 0; i < n; i++) add(matrix, i * n + i, leakSiemens, 0)
   branches.forEach((branch, i) => {
     check(branch)
     const runs = branch.kind === 'source' && hertz > 0

@@ -78,7 +78,7 @@ function strayRanges(context: WiringContext) {
       ...even(-1.2, 0, 1.2, 'ln of ratio', 'one wire has more of them than the other: 25 to 75 % happens'),
       absent: 0.45,
     },
-    filterSkewOther: { ...even(-1.2, 0, 1.2, 'ln of ratio', 'the same for the other leg'), absent: 0.45 },
+    filterSkewOther: { ...even(-1.2, 0, 1.2, 'ln of ratio', 'the other leg against this one'), absent: 0.45 },
     strayFarads: panel
       ? log(50e-12, 300e-12, 2e-9, 'F', 'wires of a house to earth')
       : log(10e-12, 80e-12, 500e-12, 'F', 'a portable set and its cords to earth'),
@@ -220,11 +220,11 @@ function loadRanges(context: WiringContext) {
 /** Numbers that only a fault has; `faults.ts` says which fault uses which. */
 function faultRanges() {
   return {
-    jointOhms: log(0.5, 1, 2, 'Ω', 'a poor joint that shows: 5 to 20 V at 10 A'),
+    jointOhms: log(0.4, 1, 4, 'Ω', 'a poor joint that shows: 4 to 40 V at 10 A'),
     faultOhms: even(0, 0.5, 5, 'Ω', 'bare copper on metal, or through rust'),
     bootlegOhms: log(0.01, 0.02, 0.06, 'Ω', 'a jumper of some inches with two screws'),
     restVolts: even(0, 0, 1.2, 'V', 'what a dead output picks up'),
-    runDrop: even(0.06, 0.08, 0.12, 'of nominal', 'twice the advised 3 % and more, at 12 A'),
+    runDrop: even(0.055, 0.08, 0.15, 'of nominal', 'twice the advised 3 % and more, at 12 A'),
     stuckAmps: log(0.3, 2, 8, 'A', 'what runs on a multiwire circuit when its neutral goes'),
     stuckAmpsOther: log(0.3, 2, 8, 'A', 'the same on its other leg'),
     tieOhms: log(0.02, 0.08, 0.3, 'Ω', 'a center tap wired to the case'),
@@ -253,6 +253,9 @@ function faultRanges() {
     ),
   }
 }
+
+/** Parameters that only a fault has: two faults at once each have their own. */
+export const faultOnly = Object.keys(faultRanges()) as (keyof ReturnType<typeof faultRanges>)[]
 
 /** Every range and choice of a wiring in this context, before a fault narrows some of them. */
 export function rangesIn(context: WiringContext): Ranges {
