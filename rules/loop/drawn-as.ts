@@ -66,5 +66,7 @@ const isElectrical = (cause: string): cause is ElectricalCause =>
 
 /** How a cause is drawn, or why it isn't; undefined for a cause that nobody here knows. */
 export function drawnAs(cause: string): DrawnAs | Undrawn | undefined {
-  return isElectrical(cause) ? as(cause) : others[cause]
+  if (isElectrical(cause)) return as(cause)
+  // Names come from articles: "constructor" is none of ours.
+  return Object.hasOwn(others, cause) ? others[cause] : undefined
 }

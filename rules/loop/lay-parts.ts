@@ -1,5 +1,5 @@
 /** The source's winding, the bonds and the rods. */
-import { isAtReceptacle, worthTheName } from './loop-state.ts'
+import { flowsRodToRod, isAtReceptacle } from './loop-state.ts'
 import type { LoopState, Tie, Wire } from './loop-state.ts'
 import type { Frame } from './frame.ts'
 import type { LoopScene, Points } from './scene.ts'
@@ -97,14 +97,13 @@ export function rodsOf(
       bars: [bar(deep, 15), bar(deep + 7, 10), bar(deep + 14, 5)],
     }
   })
-  const both = state.rods.length === 2 && state.rods.every((rod) => rod.amps >= worthTheName)
   const pieces = state.rods.map((rod, index): Piece => ({
     points: rods[index]!.lead,
     amps: rod.amps,
     // Seen from the metal: into the ground at the panel, out of it at the source.
     toward: rod.place === 'panel' ? 'load' : 'source',
   }))
-  if (!both) return { rods, earthPath: undefined, pieces, texts }
+  if (!flowsRodToRod(state)) return { rods, earthPath: undefined, pieces, texts }
   const far = deep + (lie === 'lying' ? 22 : 18)
   const earthPath = line(
     [frame.panelRod, deep + 14],
@@ -112,7 +111,12 @@ export function rodsOf(
     [frame.sourceRod, far],
     [frame.sourceRod, deep + 14],
   )
-  pieces.push({ points: earthPath, amps: state.rods[0]!.amps, toward: 'load' })
+  const into = state.rods.find((rod) => rod.toward === 'earth')
+  pieces.push({
+    points: earthPath,
+    amps: into?.amps ?? 0,
+    toward: into?.place === 'panel' ? 'load' : 'source',
+  })
   const half = (frame.panelRod + frame.sourceRod) / 2
   if (lie === 'lying')
     texts.push({ at: at(half, far + 18), text: 'through the ground', look: 'quiet', anchor: 'middle' })

@@ -4,7 +4,7 @@ import { gapOf } from './frame.ts'
 import type { Frame } from './frame.ts'
 import { missingBondAt } from './lay-parts.ts'
 import { faultAlong } from './lay-wires.ts'
-import { isAtReceptacle, worthTheName } from './loop-state.ts'
+import { flowsRodToRod, isAtReceptacle, worthTheName } from './loop-state.ts'
 import type { LoopState, Run, Stretch } from './loop-state.ts'
 import type { LoopScene, Point } from './scene.ts'
 import { breakOf } from './way.ts'
@@ -122,20 +122,20 @@ function columnOf(
 }
 
 export function platesOf(frame: Frame, state: LoopState): { plates: Plate[]; height: number } {
-  const earthPath = state.rods.filter((rod) => rod.amps >= worthTheName).length > 1
+  const earthPath = flowsRodToRod(state)
   const filled: Partial<Record<Named['column'], number>> = {}
   const names = namesOf(frame, state)
   const columns = names.map(({ column }) => ownColumn(frame, column))
   const plates = names.map((named, index): Plate => {
     const { x, y, width } = columnOf(frame, named.column, earthPath)
+    const own = ownColumn(frame, named.column)
+    const alone = columns.every((column, other) => other === index || column !== own)
     const lines = [
       ...wrapped(named.says, width - 16, letter.strong).map((text) => ({ text, strong: true })),
       ...(named.aside === undefined || !alone
         ? []
         : wrapped(named.aside, width - 16, letter.plain).map((text) => ({ text, strong: false }))),
     ]
-    const own = ownColumn(frame, named.column)
-    const alone = columns.every((column, other) => other === index || column !== own)
     const top = filled[own] ?? y
     const height = lines.length * 18 + 11
     filled[own] = top + height + 6

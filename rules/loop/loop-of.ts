@@ -113,9 +113,9 @@ function tiesOf({ network }: Drawn, solved: Factored): Tie[] {
 function rodsOf({ network }: Drawn, solved: Factored): Rod[] {
   return (['source', 'panel'] as const).flatMap((place): Rod[] => {
     const rod = branchOf(network, `${place}.rod`)
-    return rod?.kind === 'resistance'
-      ? [{ place, ohms: rod.ohms, amps: magnitude(solved.amps(rod.name)) }]
-      : []
+    if (rod?.kind !== 'resistance') return []
+    const { amps, toward } = flowOf(solved.amps(rod.name))
+    return [{ place, ohms: rod.ohms, amps, toward: toward === 'load' ? 'earth' : 'metal' }]
   })
 }
 

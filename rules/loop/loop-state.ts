@@ -35,7 +35,7 @@ export type Tie = {
   toward: 'ground' | 'neutral'
 }
 
-export type Rod = { place: 'source' | 'panel'; ohms: number; amps: number }
+export type Rod = { place: 'source' | 'panel'; ohms: number; amps: number; toward: 'earth' | 'metal' }
 
 /** What runs at the panel, where its current matters. */
 export type HouseLoad = { leg: 'hot' | 'leg2'; volts: number; amps: number }
@@ -102,5 +102,9 @@ export const faintVolts = 15
 
 /** Joined at the receptacle: no bond of the system. */
 export const isAtReceptacle = (tie: Tie): boolean => tie.place === 'receptacle'
+
+/** Current goes into the ground at one rod and comes out at the other. */
+export const flowsRodToRod = ({ rods }: LoopState): boolean =>
+  rods.length === 2 && rods.every((rod) => rod.amps >= worthTheName) && rods[0]?.toward !== rods[1]?.toward
 
 export const metalIsLive = ({ is }: Metal): boolean => is === 'live' || is === 'joined'

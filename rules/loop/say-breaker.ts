@@ -1,7 +1,7 @@
 /** What would turn it off, in words: breaker, GFCI, earth. */
 import { inAmps, inVolts } from './amounts.ts'
 import { breakerDoes } from './breaker.ts'
-import { gfciTrips, isAtReceptacle, worthTheName } from './loop-state.ts'
+import { flowsRodToRod, gfciTrips, isAtReceptacle, worthTheName } from './loop-state.ts'
 import type { LoopState } from './loop-state.ts'
 import { metalNames } from './say-names.ts'
 import { breakOf, goesRound, isBrief } from './way.ts'
@@ -57,8 +57,15 @@ export function gfciSays(state: LoopState): string | undefined {
 
 export function earthSays(state: LoopState): string | undefined {
   const carrying = state.rods.filter((rod) => rod.amps >= worthTheName)
-  if (carrying.length > 0)
-    return `${carrying.length > 1 ? 'The rods pass' : 'The rod passes'} ${inAmps(Math.max(...carrying.map((rod) => rod.amps)))} through the ground${state.drawn === 'fault' ? ': too little for a breaker' : ''}.`
+  if (carrying.length > 0) {
+    const most = inAmps(Math.max(...carrying.map((rod) => rod.amps)))
+    const who = carrying.length > 1 ? 'The rods pass' : 'The rod passes'
+    // What doesn't come out at another rod can only go to the utility's own earth.
+    const where = flowsRodToRod(state)
+      ? 'through the ground'
+      : 'through the ground, to the utility’s own earth'
+    return `${who} up to ${most} ${where}${state.drawn === 'fault' ? ': too little for a breaker' : ''}.`
+  }
   return state.rods.length > 0 && breakOf(state) === 'bond'
     ? 'The ground rod changes nothing: without a bond, earth leads nowhere.'
     : undefined

@@ -49,13 +49,14 @@ function Links({ cause, article }: { cause: RankedCause; article: Article | unde
       <button
         type="button"
         className="link-alone text-glow underline"
+        aria-label={`Expected readings and loop: ${label}`}
         aria-pressed={selected === cause.cause}
         onClick={() => {
           select(cause.cause)
           document.getElementById('loop')?.scrollIntoView({ block: 'start' })
         }}
       >
-        Expected readings and loop<span className="sr-only">: {label}</span>
+        Expected readings and loop
       </button>
     </p>
   )
