@@ -2,6 +2,8 @@ import type { ReactNode } from 'react'
 import { Link, useParams } from 'react-router-dom'
 import type { Cause, CauseProcedure } from '../../rules/edition/schema.ts'
 import { HazardMark } from '../ui/hazard-mark.tsx'
+import { typicalContext } from '../../rules/loop/known-context.ts'
+import { LateLoop } from '../ui/loop/late-loop.tsx'
 import { SignalPanel } from '../ui/signal-panel.tsx'
 import { Steps } from '../ui/steps.tsx'
 import { typicalOf } from './cause-glyph.ts'
@@ -118,6 +120,9 @@ function Content({ knowledge, cause }: { knowledge: Knowledge; cause: Cause }) {
         </SignalPanel>
       )}
       {readings !== undefined && <TypicalFigure readings={readings} />}
+      <Section title="Where current goes">
+        <LateLoop key={cause.id} context={typicalContext(cause.id)} cause={cause.id} />
+      </Section>
       {doNow.length > 0 && (
         <Section title="What to do now, with nothing opened">
           <Steps className="mt-3" steps={doNow} />

@@ -71,6 +71,21 @@ export function proseOf(markdown: string): DocumentFragment {
   return fragment
 }
 
+export type Part = { kind: 'text'; markdown: string } | { kind: 'loop'; block: string }
+
+/** An article's text, cut where a loop picture stands: a fenced block named `loop`, outside of lists and quotations. */
+export function partsOf(markdown: string): Part[] {
+  const parts: Part[] = []
+  for (const token of marked.lexer(markdown)) {
+    const last = parts.at(-1)
+    if (token.type === 'code' && token['lang'] === 'loop')
+      parts.push({ kind: 'loop', block: String(token['text']) })
+    else if (last?.kind === 'text') last.markdown += token.raw
+    else parts.push({ kind: 'text', markdown: token.raw })
+  }
+  return parts
+}
+
 export type Target = { kind: 'page'; to: string } | { kind: 'elsewhere'; href: string }
 
 // Only pages that exist: no second slash, no backslash, no tab that a browser would read as one.

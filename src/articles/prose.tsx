@@ -4,7 +4,8 @@ import { Link } from 'react-router-dom'
 import { HazardMark } from '../ui/hazard-mark.tsx'
 import type { HazardClass } from '../ui/hazard-mark.tsx'
 import { SignalPanel } from '../ui/signal-panel.tsx'
-import { proseOf, signalOf, targetOf } from './prose-source.ts'
+import { ArticleLoop } from './article-loop.tsx'
+import { partsOf, proseOf, signalOf, targetOf } from './prose-source.ts'
 
 const hazardHeadings: readonly { begins: string; hazard: HazardClass }[] = [
   { begins: 'nothing opened, can make metal live', hazard: 'closed-can-energize' },
@@ -101,26 +102,48 @@ function drawn(node: Node): ReactNode {
   return tag === 'br' || tag === 'hr' ? <Tag /> : <Tag>{inside(node)}</Tag>
 }
 
+/** One stretch of an article's text; `lead` is the index of its larger paragraph, −1 for none. */
+function Stretch({ nodes, lead, after }: { nodes: readonly Node[]; lead: number; after: ReactNode }) {
+  return nodes.map((node, index) =>
+    index === lead ? (
+      <Fragment key={index}>
+        <p className="prose-lead">{inside(node)}</p>
+        {after}
+      </Fragment>
+    ) : (
+      <Fragment key={index}>{drawn(node)}</Fragment>
+    ),
+  )
+}
+
 /** An article's text. Its first paragraph stands larger; `after` (a drawing) follows it. */
 export function Prose({ markdown, after }: { markdown: string; after?: ReactNode }) {
   const parts = useMemo(() => {
-    const nodes = [...proseOf(markdown).childNodes].filter(
-      (node) => node.textContent?.trim() !== '' || node instanceof Element,
+    const made = partsOf(markdown).map((part) =>
+      part.kind === 'loop'
+        ? part
+        : {
+            kind: 'text' as const,
+            nodes: [...proseOf(part.markdown).childNodes].filter(
+              (node) => node.textContent?.trim() !== '' || node instanceof Element,
+            ),
+          },
     )
-    const lead = nodes.findIndex((node) => node instanceof Element && node.tagName === 'P')
-    return { nodes, lead }
+    const isLead = (node: Node) => node instanceof Element && node.tagName === 'P'
+    const first = made.findIndex((part) => part.kind === 'text' && part.nodes.some(isLead))
+    return made.map((part, index) =>
+      part.kind === 'loop' ? part : { ...part, lead: index === first ? part.nodes.findIndex(isLead) : -1 },
+    )
   }, [markdown])
+  const led = parts.some((part) => part.kind === 'text' && part.lead >= 0)
   return (
     <div className="prose">
-      {parts.lead < 0 && after}
-      {parts.nodes.map((node, index) =>
-        index === parts.lead ? (
-          <Fragment key={index}>
-            <p className="prose-lead">{inside(node)}</p>
-            {after}
-          </Fragment>
+      {!led && after}
+      {parts.map((part, index) =>
+        part.kind === 'loop' ? (
+          <ArticleLoop key={index} block={part.block} />
         ) : (
-          <Fragment key={index}>{drawn(node)}</Fragment>
+          <Stretch key={index} nodes={part.nodes} lead={part.lead} after={after} />
         ),
       )}
     </div>

@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom'
 import type { CauseRow as Row, RankedCause } from '../../rules/ranking/diagnosis-types.ts'
 import type { Article } from '../../rules/edition/schema.ts'
 import { useDesk } from './desk.ts'
+import { useSelected } from './expected.ts'
 import { BriefEvidence, Ledger } from './ledger.tsx'
 import { actingAsFor, causeLabel, inSentence, percent, strengthOf } from './words.ts'
 
@@ -33,6 +34,7 @@ export type CauseRowProps = {
 
 function Links({ cause, article }: { cause: RankedCause; article: Article | undefined }) {
   const { edition } = useDesk()
+  const { cause: selected, select } = useSelected()
   const label = inSentence(causeLabel(edition, cause.cause))
   return (
     <p className="mt-1 flex flex-wrap gap-x-5 text-small">
@@ -44,6 +46,18 @@ function Links({ cause, article }: { cause: RankedCause; article: Article | unde
           Article: {article.title}
         </Link>
       )}
+      <button
+        type="button"
+        className="link-alone text-glow underline"
+        aria-label={`Expected readings and loop: ${label}`}
+        aria-pressed={selected === cause.cause}
+        onClick={() => {
+          select(cause.cause)
+          document.getElementById('loop')?.scrollIntoView({ block: 'start' })
+        }}
+      >
+        Expected readings and loop
+      </button>
     </p>
   )
 }

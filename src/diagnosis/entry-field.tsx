@@ -5,6 +5,7 @@ import { isPair, pairWords } from '../ui/pair-discs.tsx'
 import { ReadingField } from '../ui/reading-field.tsx'
 import { useToast } from '../ui/toast.tsx'
 import { useDesk } from './desk.ts'
+import { ExpectedBand } from './expected-band.tsx'
 import { meantBy } from './meant.ts'
 import { errorAt } from './raw-sheet.ts'
 import { readingOf } from './sheet-content.ts'
@@ -96,7 +97,12 @@ export function EntryField({ reading, seat = false, className = '' }: EntryField
         onText={(text) => type(text)}
         upper={entry?.upper}
         onUpper={(text) => type(text, 'upper')}
-        with={conditionOf(reading, entry)}
+        with={
+          <>
+            {conditionOf(reading, entry)}
+            <ExpectedBand reading={reading} entry={entry} />
+          </>
+        }
         error={sentence === undefined ? unkept : `${capital(name)} ${sentence}.`}
         question={
           meant && {

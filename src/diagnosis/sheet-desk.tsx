@@ -14,9 +14,10 @@ import { AlsoFound } from './also-found.tsx'
 import { Announcement } from './announcement.tsx'
 import { BondPlate } from './bond-plate.tsx'
 import { offersOf } from './choose-test.ts'
-import { DeskContext } from './desk.ts'
+import { DeskProviders } from './desk-providers.tsx'
 import { FieldStrip } from './field-strip.tsx'
 import { LikelyCauses } from './likely-causes.tsx'
+import { LoopSection } from './loop-section.tsx'
 import { ModeWays } from './mode-ways.tsx'
 import { MoreReadings } from './more-readings.tsx'
 import { NextStep } from './next-step.tsx'
@@ -29,7 +30,9 @@ import { undoes } from './sheet-state.ts'
 import { StopPanel } from './stop-panel.tsx'
 import { useDeskState } from './use-desk-state.ts'
 import { useDiagnosis } from './use-diagnosis.ts'
+import { useExpected } from './use-expected.ts'
 import { useKeys, useLetterKeys } from './use-keys.ts'
+import { useSelectedCause } from './use-selected-cause.ts'
 import type { OpenSheet } from './use-sheet.ts'
 import { WhatIfBar } from './what-if-bar.tsx'
 
@@ -50,6 +53,8 @@ export function SheetDesk({ sheet, edition, info, lines, contradictions }: Sheet
   const { typed, stored, dispatch, unkept, keepAgain } = sheet
   const { diagnosis, before, stops, bond, errors, failed } = useDiagnosis(edition, stored)
   const desk = useDeskState(edition, sheet, errors)
+  const selected = useSelectedCause(diagnosis)
+  const expected = useExpected(stored, desk.meterOhms, selected.cause)
   const { tests } = useProcedures(true)
   const { articles } = useArticles(true)
   const [letters, setLetters] = useLetterKeys()
@@ -98,7 +103,7 @@ export function SheetDesk({ sheet, edition, info, lines, contradictions }: Sheet
 
   const offer = offers.open.find((one) => one.key === picked) ?? offers.open[0]
   return (
-    <DeskContext value={desk}>
+    <DeskProviders desk={desk} selected={selected} expected={expected}>
       <Page title={`${typed.title}, Diagnosis`} width="none" className="desk">
         <SheetHead info={info} open={head} onOpen={setHead} letters={letters} onLetters={setLetters} />
         {unkept !== undefined && (
@@ -174,6 +179,7 @@ export function SheetDesk({ sheet, edition, info, lines, contradictions }: Sheet
             </>
           )}
         </div>
+        <LoopSection />
         <SignalPanel word="warning" slim className="desk-warning">
           Readings with a cover off and power on are for qualified people. Prove the meter on a known source,
           before and after. Local code and the authority having jurisdiction decide.
@@ -195,6 +201,6 @@ export function SheetDesk({ sheet, edition, info, lines, contradictions }: Sheet
         </div>
       )}
       <NumberPad />
-    </DeskContext>
+    </DeskProviders>
   )
 }

@@ -26,6 +26,7 @@ export const hostileMarkdown: readonly (readonly [tries: string, markdown: strin
   ['names of the page', `<a id="root" name="main" href="#">x</a><form id="location"></form>`],
   ['another base', `<base href="https://elsewhere.test/">`],
   ['a code block', '```\n<script>' + harm + '</script>\n```'],
+  ['a loop picture', '```loop\ncause: <img src=x onerror="' + harm + '">\n```'],
   ['code in a line', '`<img src=x onerror="' + harm + '">`'],
   ['a heading', `## <img src=x onerror="${harm}">`],
   ['a cell', `| a |\n|---|\n| <img src=x onerror="${harm}"> |`],

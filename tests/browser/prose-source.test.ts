@@ -1,6 +1,6 @@
 // @vitest-environment jsdom
 import { describe, expect, test } from 'vitest'
-import { proseOf, signalOf, targetOf } from '../../src/articles/prose-source.ts'
+import { partsOf, proseOf, signalOf, targetOf } from '../../src/articles/prose-source.ts'
 import { hostileMarkdown } from './hostile-markdown.ts'
 
 const allowed = new Set(
@@ -30,6 +30,20 @@ describe('hostile Markdown', () => {
   test('a picture is its words', () => {
     expect(proseOf('![a panel](https://elsewhere.test/p.png)').querySelector('img')).toBeNull()
     expect(proseOf('![a panel](https://elsewhere.test/p.png)').textContent?.trim()).toBe('a panel')
+  })
+})
+
+describe('loop pictures', () => {
+  test('a block named loop is cut out as data; the text around it stays', () => {
+    expect(partsOf('One.\n\n```loop\ncause: sound\n```\n\nTwo.')).toEqual([
+      { kind: 'text', markdown: 'One.\n\n' },
+      { kind: 'loop', block: 'cause: sound' },
+      { kind: 'text', markdown: expect.stringContaining('Two.') as string },
+    ])
+  })
+  test('other code stays text, and so does a loop inside a quotation', () => {
+    expect(partsOf('```\ncause: sound\n```').map((part) => part.kind)).toEqual(['text'])
+    expect(partsOf('> ```loop\n> cause: sound\n> ```').map((part) => part.kind)).toEqual(['text'])
   })
 })
 
