@@ -65,6 +65,8 @@ export const demoPerson = (role: Role) => {
 export async function signedIn(app: { url: string }, role: Role): Promise<Asker> {
   const asker = new Asker(app)
   const answer = await asker.post('/api/sign-in', demoPerson(role))
-  if (answer.status !== 200) throw new Error(`${role} was not let in: ${await answer.text()}`)
+  // Read to its end, which comes once the session is written.
+  const said = await answer.text()
+  if (answer.status !== 200) throw new Error(`${role} was not let in: ${said}`)
   return asker
 }
