@@ -40,7 +40,8 @@ export default defineConfig({
           environment: 'node',
           include: ['tests/{rules,server,commands,lint}/**/*.test.ts'],
           globalSetup,
-          testTimeout: 20_000,
+          // Thirty passwords checked, or a thousand cases ranked, take their time on a busy machine.
+          testTimeout: 60_000,
           hookTimeout: 60_000,
         },
       },
