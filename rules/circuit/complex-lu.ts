@@ -89,7 +89,9 @@ function findFilled(n: number, a: ComplexArray): Pick<Factors, 'filled' | 'start
 /** Solves for a right-hand side of n entries, in place. */
 export function substitute({ n, triangles: a, order, filled, starts }: Factors, x: ComplexArray): void {
   for (let k = 0; k < n; k++) if (order[k] !== k) swapRows(2, x, k, order[k]!)
-  for (let i = 0; i < n; i++) {
+  let first = 0
+  while (first < n && x[2 * first] === 0 && x[2 * first + 1] === 0) first++
+  for (let i = first; i < n; i++) {
     let [sr, si] = [x[2 * i]!, x[2 * i + 1]!]
     for (let c = starts[i]!; c < starts[i + 1]! && filled[c]! < i; c++) {
       const j = filled[c]!

@@ -6,6 +6,7 @@ import { meterOf } from './instruments/meter.ts'
 import type { Tester } from './instruments/plug-in-tester.ts'
 import type { ElectricalCause, WiringContext } from './wiring/context.ts'
 import { pointsIn } from './design.ts'
+import { relations, valueOf } from './relations.ts'
 import { measured } from './wiring/readings/measured.ts'
 import { takeReadings } from './wiring/take-readings.ts'
 import { typicalOf } from './wiring/parameters.ts'
@@ -19,10 +20,12 @@ export type States = { typical: string; can: readonly string[] }
 export type Expected = {
   readings: ReadonlyMap<string, Band>
   observations: ReadonlyMap<string, States>
+  /** By the place of each in `relations`; a gap where one of the two is not read here. */
+  together: readonly (Band | undefined)[]
 }
 
 const corners = 8
-const inners = 4
+const inners = 2
 
 /** Testers of both kinds, at the ends of what their lamps are made of. */
 const testers: readonly Tester[] = [
@@ -56,26 +59,31 @@ function predict(context: WiringContext, cause: ElectricalCause, meterOhms: numb
   const readings = new Map<string, Band>()
   const observations = new Map<string, { typical: string; can: string[] }>()
   const meter = meterOf(meterOhms)
+  const together: (Band | undefined)[] = []
+  const widened = (band: Band | undefined, value: number): Band => {
+    if (band === undefined) return { low: value, typical: value, high: value }
+    band.low = Math.min(band.low, value)
+    band.high = Math.max(band.high, value)
+    return band
+  }
   const take = (p: Parameters, turn: number) => {
     const m = measured(context, wire(context, cause, p), p)
     const tester = testers[turn % testers.length] as Tester
     const found = takeReadings(m, { meter, tester, bulbWatts: bulbWatts[turn % bulbWatts.length] ?? 60 })
     for (const [id, value] of Object.entries(found)) {
-      if (typeof value === 'number') {
-        const band = readings.get(id)
-        if (band === undefined) readings.set(id, { low: value, typical: value, high: value })
-        else {
-          band.low = Math.min(band.low, value)
-          band.high = Math.max(band.high, value)
-        }
-      } else {
+      if (typeof value === 'number') readings.set(id, widened(readings.get(id), value))
+      else {
         const states = observations.get(id)
         if (states === undefined) observations.set(id, { typical: value, can: [value] })
         else if (!states.can.includes(value)) states.can.push(value)
       }
     }
+    relations.forEach((relation, i) => {
+      const value = valueOf(relation, found)
+      if (value !== undefined) together[i] = widened(together[i], value)
+    })
   }
   take(typicalOf(ranges), 0)
   pointsIn(ranges, corners, inners).forEach(take)
-  return { readings, observations }
+  return { readings, observations, together }
 }

@@ -4,6 +4,7 @@
  */
 import { expect } from './expect.ts'
 import type { Band, Expected } from './expect.ts'
+import { relations, valueOf } from './relations.ts'
 import { nominalVolts } from './wiring/context.ts'
 import type { ElectricalCause, WiringContext } from './wiring/context.ts'
 import { causesIn } from './wiring/occurs.ts'
@@ -42,20 +43,42 @@ function beyond(id: string, value: number, band: Band, nominal: number): boolean
   return off > error + (band.high - band.low) / 3
 }
 
-/** The findings that lie outside of what a cause lets one expect. */
+/** What of the findings a cause does not let one expect: one reading each, or two that don't go together. */
 function outside(
   findings: Readonly<Record<string, number | string>>,
-  { readings, observations }: Expected,
+  { readings, observations, together }: Expected,
   nominal: number,
-): string[] {
-  return Object.entries(findings).flatMap(([id, value]) => {
+): (readonly string[])[] {
+  const alone = Object.entries(findings).flatMap(([id, value]) => {
     if (typeof value === 'string') {
       const states = judged.includes(id) ? observations.get(id) : undefined
-      return states !== undefined && !states.can.includes(value) ? [id] : []
+      return states !== undefined && !states.can.includes(value) ? [[id]] : []
     }
     const band = readings.get(id)
-    return band !== undefined && beyond(id, value, band, nominal) ? [id] : []
+    return band !== undefined && beyond(id, value, band, nominal) ? [[id]] : []
   })
+  const pairs = relations.flatMap((relation, i) => {
+    const [value, band] = [valueOf(relation, findings), together[i]]
+    return value !== undefined && band !== undefined && beyond(relation.ids[0], value, band, nominal)
+      ? [relation.ids]
+      : []
+  })
+  return [...alone, ...pairs]
+}
+
+/** The finding that the most of these speak of; of level ones the first. */
+function mostOften(complaints: readonly (readonly string[])[]): string | undefined {
+  const count = new Map<string, number>()
+  for (const id of complaints.flat()) count.set(id, (count.get(id) ?? 0) + 1)
+  const most = Math.max(...count.values())
+  return [...count].find(([, n]) => n === most)?.[0]
+}
+
+/** Findings to take again before nothing is left to complain of, the one most spoken of first. */
+function toTakeAgain(complaints: readonly (readonly string[])[]): string[] {
+  const again = mostOften(complaints)
+  if (again === undefined) return []
+  return [again, ...toTakeAgain(complaints.filter((ids) => !ids.includes(again)))]
 }
 
 /**
@@ -74,10 +97,10 @@ export function impossible(
   const rank = (cause: string) => (likely.includes(cause) ? likely.indexOf(cause) : likely.length)
   const all = causesIn(context).map((cause) => {
     const expected = expect(context, cause, meterOhms)
-    return { cause, expected, ids: outside(findings, expected, nominal) }
+    return { cause, expected, again: toTakeAgain(outside(findings, expected, nominal)) }
   })
-  const best = all.sort((a, b) => a.ids.length - b.ids.length || rank(a.cause) - rank(b.cause))[0]
-  const again = best?.ids[0]
+  const best = all.sort((a, b) => a.again.length - b.again.length || rank(a.cause) - rank(b.cause))[0]
+  const again = best?.again[0]
   if (best === undefined || again === undefined) return undefined
   return { again, band: best.expected.readings.get(again), cause: best.cause }
 }

@@ -6,6 +6,7 @@ import { writeFile } from 'node:fs/promises'
 import { resolve } from 'node:path'
 import { openEdition } from '../../rules/edition/open.ts'
 import type { Edition } from '../../rules/edition/open.ts'
+import { impossible } from '../../rules/circuit/possible.ts'
 import { electricalCauses } from '../../rules/circuit/wiring/context.ts'
 import { readStarterDiagnosis } from '../editions/read-starter.ts'
 import { callFolder } from './call-folder.ts'
@@ -58,6 +59,17 @@ async function pairs(edition: Edition, cases: readonly PairCase[], o: Options): 
   for (const [words, count] of s.missed.slice(0, o.confused)) console.log(`          ${count} × ${words}`)
 }
 
+/** How often no wiring of any one cause gives what was found: of one fault a false alarm, of two the truth. */
+function byPhysics(cases: readonly ModelCase[], both: readonly PairCase[]): void {
+  const called = (some: readonly ModelCase[]) =>
+    some.filter((c) => impossible(c.context, c.findings, c.context.meterOhms) !== undefined).length /
+    Math.max(1, some.length)
+  console.log(
+    `\nno wiring of any one cause gives the findings: ${three(called(cases))} of one fault, ` +
+      `${three(called(both))} of two`,
+  )
+}
+
 async function main(): Promise<number> {
   const o = readOptions(process.argv.slice(2))
   if (o === undefined) {
@@ -82,6 +94,7 @@ async function main(): Promise<number> {
   const counted = cases.filter((_, i) => i % o.each < o.steps)
   if (counted.length > 0) await furtherTests(edition, counted, o)
   if (both.length > 0) await pairs(edition, both, o)
+  if (o.physics) byPhysics(cases, both)
   return 0
 }
 

@@ -7,7 +7,7 @@ import { hasPanel, hasTwoLegs, nominalVolts, ohmsScale } from './context.ts'
 import type { ElectricalCause, WiringContext } from './context.ts'
 import { add, couple, join, move, open, remove, replace, swap } from './edits.ts'
 import type { Edit } from './edits.ts'
-import { capacitance, feedOf, resistance } from './healthy.ts'
+import { cableFaradsPerFoot, capacitance, feedOf, resistance } from './healthy.ts'
 import type { Choice, Parameters, Place, Ranges } from './parameters.ts'
 import { choice as of, even } from './ranges.ts'
 
@@ -40,7 +40,10 @@ const opened = (p: Parameters, context: WiringContext, wire: 'hot' | 'neutral' |
   const dead =
     p.faultAt === 'feeder' ? `panel.${wire}` : p.faultAt === 'branch' ? `joint.${wire}` : `box.${wire}`
   const beside = p.alongsideFeet > 0 && p.faultAt !== 'feeder' && wire !== 'hot'
-  return [open(name), ...(beside ? [couple('alongside', `${feed}.hot`, dead, 20e-12 * p.alongsideFeet)] : [])]
+  return [
+    open(name),
+    ...(beside ? [couple('alongside', `${feed}.hot`, dead, cableFaradsPerFoot * p.alongsideFeet)] : []),
+  ]
 }
 
 /** Two conductors exchanged: at the slots, before the receptacle ahead, or on the feeder. */

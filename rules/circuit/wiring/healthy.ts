@@ -56,10 +56,7 @@ export const feedOf = (context: WiringContext): 'panel' | 'source' => (hasPanel(
  * Lengths in feet as built: a sound circuit is kept short enough that a 10 A load takes no more than some 3.5 % of
  * it (the 3 % that the NEC recommends, and a little), and the last stretch is a part of it.
  */
-export function lengthsOf(
-  context: WiringContext,
-  p: Parameters,
-): { feeder: number; before: number; last: number } {
+function lengthsOf(context: WiringContext, p: Parameters): { feeder: number; before: number; last: number } {
   const feeder = hasPanel(context) ? p.feederFeet : 0
   const drop =
     0.035 * nominalVolts(context) - 20 * feeder * p.feederOhmsPerFoot * (hasTwoLegs(context) ? 0.5 : 1)

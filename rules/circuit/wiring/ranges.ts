@@ -1,4 +1,6 @@
 /** The ranges themselves: source, strays, grounds, wires, loads, and what only a fault has. */
+import { americanWireOhms } from '../conductors.ts'
+import type { Gauge } from '../conductors.ts'
 import { hasPanel } from './context.ts'
 import type { WiringContext } from './context.ts'
 import type { Choice, Choices, Place, Range, Ranges } from './parameters.ts'
@@ -136,6 +138,10 @@ function groundRanges(context: WiringContext) {
   }
 }
 
+/** Ω a foot of a copper conductor, one way. */
+const copper = (gauge: Gauge, solid: boolean, celsius: number): number =>
+  americanWireOhms({ gauge, metal: 'copper', solid, feet: 1, celsius })
+
 /** Wires and joints from the source to the slots. */
 function wireRanges(context: WiringContext) {
   const panel = hasPanel(context)
@@ -143,18 +149,18 @@ function wireRanges(context: WiringContext) {
   return {
     feederFeet: log(5, 30, 100, 'ft', 'source to panel, from wall to wall or across a yard'),
     feederOhmsPerFoot: log(
-      0.00041,
-      0.0007,
-      0.00124,
+      copper('6', false, 25),
+      copper('8', false, 40),
+      copper('10', false, 75),
       'Ω/ft',
-      'NEC chapter 9 table 8, 6 to 10 AWG copper stranded, 25 to 75 °C',
+      '6 to 10 AWG copper stranded, 25 to 75 °C',
     ),
     feederGroundOhmsPerFoot: even(
-      0.00104,
-      0.00115,
-      0.00124,
+      copper('10', false, 25),
+      copper('10', false, 40),
+      copper('10', false, 75),
       'Ω/ft',
-      'NEC chapter 9 table 8, 10 AWG copper stranded',
+      '10 AWG copper stranded, 25 to 75 °C',
     ),
     branchFeet: panel
       ? even(12, 45, 150, 'ft', 'panel to the farthest receptacle of a house')
@@ -164,18 +170,18 @@ function wireRanges(context: WiringContext) {
       : log(0.2, 2, 55, 'ft', 'the last cord'),
     branchOhmsPerFoot: panel
       ? even(
-          0.00162,
-          0.0018,
-          0.00307,
+          copper('12', true, 25),
+          copper('12', true, 40),
+          copper('14', true, 75),
           'Ω/ft',
-          'NEC chapter 9 table 8, 12 and 14 AWG copper solid, 25 to 75 °C',
+          '12 and 14 AWG copper solid, 25 to 75 °C',
         )
       : log(
-          0.00166,
-          0.0026,
-          0.005,
+          copper('12', false, 25),
+          copper('14', false, 25),
+          copper('16', false, 75),
           'Ω/ft',
-          'NEC chapter 9 table 8, 12 to 16 AWG copper stranded, 25 to 75 °C',
+          'cords of 12 to 16 AWG copper stranded, 25 to 75 °C',
         ),
     contactHotOhms: contact,
     contactNeutralOhms: contact,

@@ -8,6 +8,7 @@ export const usage = `npm run -s rank:model -- [options]
   --seed TEXT            another seed, other cases (1)
   --priors flat|field    (flat)
   --everything           also the readings that a call seldom takes
+  --physics              also how often no wiring of any one cause gives the findings (slow)
   --confused N           lines of what was taken for what (8)
   --write FILE           writes the cases as JSON Lines and scores nothing`
 
@@ -19,6 +20,7 @@ export type Options = {
   seed: string
   priors: Priors
   everything: boolean
+  physics: boolean
   confused: number
   write: string | undefined
 }
@@ -28,10 +30,21 @@ export function readOptions(args: readonly string[]): Options | undefined {
   const given: Record<string, string> = {}
   for (let i = 0; i < args.length; i++) {
     const name = args[i] ?? ''
-    if (name === '--everything') given[name] = 'yes'
+    if (name === '--everything' || name === '--physics') given[name] = 'yes'
     else given[name] = args[++i] ?? ''
   }
-  const known = ['part', 'each', 'pairs', 'steps', 'seed', 'priors', 'everything', 'confused', 'write']
+  const known = [
+    'part',
+    'each',
+    'pairs',
+    'steps',
+    'seed',
+    'priors',
+    'everything',
+    'physics',
+    'confused',
+    'write',
+  ]
   if (Object.keys(given).some((name) => !known.includes(name.replace(/^--/, '')))) return undefined
   const count = (name: string, usual: number) => {
     const text = given[name] ?? String(usual)
@@ -45,6 +58,7 @@ export function readOptions(args: readonly string[]): Options | undefined {
     confused: count('--confused', 8),
     seed: given['--seed'] ?? '1',
     everything: given['--everything'] !== undefined,
+    physics: given['--physics'] !== undefined,
     write: given['--write'],
   }
   if (part !== 'fit' && part !== 'held-back') return undefined

@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest'
+import { overLimitOhms } from '../../../rules/findings/sheet.ts'
 import { minus } from '../../../rules/circuit/complex.ts'
 import { magnitude } from '../../../rules/circuit/network.ts'
 import type { Complex } from '../../../rules/circuit/network.ts'
@@ -52,7 +53,10 @@ describe('against ngspice', () => {
       const { volts } = answers[i]!
       const theirs = volts.get(drive.from)!.re - volts.get(drive.to)!.re
       const ours = factor(dead).port(drive.from, drive.to).impedance.re
-      expect(Math.abs(ours - theirs), `${name}: ${ours} Ω against ${theirs} Ω`).toBeLessThan(theirs * part)
+      // Where only the leak joins them an ohmmeter shows over limit, and ngspice has a leak of its own.
+      if (theirs > overLimitOhms) expect(ours, name).toBeGreaterThan(overLimitOhms)
+      else
+        expect(Math.abs(ours - theirs), `${name}: ${ours} Ω against ${theirs} Ω`).toBeLessThan(theirs * part)
     })
   })
 
