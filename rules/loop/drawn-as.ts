@@ -14,7 +14,7 @@ export type DrawnAs = {
 }
 export type Undrawn = { because: string }
 
-export const usualLoadOhms = 12
+const usualLoadOhms = 12
 const as = (wiring: ElectricalCause, note?: string, more: Partial<DrawnAs> = {}): DrawnAs => ({
   wiring,
   edits: [],

@@ -1,5 +1,6 @@
 /** What is written at each place: its name, what was read there, its breaker and bonds, and whether its metal is live. */
 import { inAmps, inVolts } from './amounts.ts'
+import { breakerDoes } from './breaker.ts'
 import type { Frame } from './frame.ts'
 import { tieAlong, tieNames } from './lay-parts.ts'
 import { metalIsLive } from './loop-state.ts'
@@ -21,10 +22,15 @@ const titles = (state: LoopState): Readonly<Record<Place, string>> => ({
   panel: 'Panel',
   receptacle: state.places.includes('panel') ? 'Receptacle' : 'Its receptacle',
 })
-const breakerWords = ({ breaker }: LoopState): [string, string] => [
-  `breaker ${breaker.amps} A`,
-  breaker.sees < 1e-5 ? 'sees nothing' : `sees ${inAmps(breaker.sees)}`,
-]
+/** What an inverter gives into a fault is its own limit, not what the wires would let through. */
+function breakerWords(state: LoopState): [string, string] {
+  const { breaker, limited, drawn } = state
+  const upTo = limited && drawn === 'fault' && breakerDoes(breaker) !== 'stays' ? 'up to ' : ''
+  return [
+    `breaker ${breaker.amps} A`,
+    breaker.sees < 1e-5 ? 'sees nothing' : `sees ${upTo}${inAmps(breaker.sees)}`,
+  ]
+}
 const breakerIsAt = (state: LoopState, place: Place): boolean =>
   place === (state.places.includes('panel') ? 'panel' : 'source')
 

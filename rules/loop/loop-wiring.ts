@@ -32,7 +32,7 @@ const neutralAndCase = (place: 'source' | 'panel'): [Node, Node] =>
   place === 'source' ? ['source.neutral', 'source.case'] : ['panel.neutral', 'panel.ground']
 
 /** Follows a conductor of the circuit from where it begins to the terminal it ends on. */
-export function terminalOf({ branches }: Network, begin: Node): Node {
+function terminalOf({ branches }: Network, begin: Node): Node {
   let at = begin
   for (const stretch of ['branch', 'last', 'slot'])
     at =
@@ -41,7 +41,7 @@ export function terminalOf({ branches }: Network, begin: Node): Node {
   return at
 }
 /** `branch.hot`, but not the capacitances of its cable. */
-export const isWire = (name: string): boolean =>
+const isWire = (name: string): boolean =>
   /^(?:feeder|branch|last|slot)\.(?:hot2?|neutral|ground)$/.test(name)
 
 function baseOf(context: WiringContext, as: DrawnAs): { p: Parameters; network: Network } {

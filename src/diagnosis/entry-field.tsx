@@ -100,7 +100,9 @@ export function EntryField({ reading, seat = false, className = '' }: EntryField
         with={
           <>
             {conditionOf(reading, entry)}
-            <ExpectedBand reading={reading} entry={entry} />
+            <span className="band-slot">
+              <ExpectedBand reading={reading} entry={entry} />
+            </span>
           </>
         }
         error={sentence === undefined ? unkept : `${capital(name)} ${sentence}.`}
