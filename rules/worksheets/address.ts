@@ -13,8 +13,8 @@ export function flat(inputs: unknown, under = ''): Flat {
   return Object.assign({}, ...parts) as Flat
 }
 
-/** More parts than any worksheet has: an address from elsewhere makes no endless lists. */
-const mostRows = 32
+/** More rows than any worksheet takes: an address from elsewhere makes no endless lists. */
+export const mostRows = 32
 type Nested = { [key: string]: unknown }
 
 /** Builds nested inputs from flat ones; steps that are whole numbers make lists. Names of the language are refused. */

@@ -3,22 +3,26 @@ import { ghostOrFirm } from '../circuit/instruments/ghost-or-firm.ts'
 import type { GhostOrFirm, TakenWith } from '../circuit/instruments/ghost-or-firm.ts'
 import { meterOf } from '../circuit/instruments/meter.ts'
 import { filamentOhms } from '../circuit/instruments/test-bulb.ts'
-import { quantity } from './quantity.ts'
+import { chooseOne, quantity } from './quantity.ts'
 import { remembered, seen, whoDecides } from './result.ts'
 import type { Caution, Result, Step } from './result.ts'
 import { written } from './written.ts'
 
 const volts = quantity('the volts it showed', 0, 1000)
 /** One reading, with a meter of a known input resistance or with the test bulb in its place. */
-const Reading = z.discriminatedUnion('with', [
-  z.object({ with: z.literal('meter'), volts, ohms: quantity('the meter’s ohms', 100, 100_000_000) }),
-  z.object({
-    with: z.literal('bulb'),
-    volts,
-    ratedWatts: quantity('the bulb’s watts', 1, 200),
-    ratedVolts: quantity('the bulb’s volts', 12, 300),
-  }),
-])
+const Reading = z.discriminatedUnion(
+  'with',
+  [
+    z.object({ with: z.literal('meter'), volts, ohms: quantity('the meter’s ohms', 100, 100_000_000) }),
+    z.object({
+      with: z.literal('bulb'),
+      volts,
+      ratedWatts: quantity('the bulb’s watts', 1, 200),
+      ratedVolts: quantity('the bulb’s volts', 12, 300),
+    }),
+  ],
+  chooseOne,
+)
 
 /** What the ghost-or-firm worksheet asks: one voltage, read twice between the same two points. */
 export const GhostInputs = z.object({

@@ -1,11 +1,11 @@
 import * as z from 'zod/mini'
-import { mend, oneOf, quantity } from './quantity.ts'
+import { mend, oneOf, quantity, rows } from './quantity.ts'
 import { seen, whoDecides } from './result.ts'
 import type { Result } from './result.ts'
 import { written } from './written.ts'
 
 /** One thing that is switched on, as its nameplate says. */
-export const Load = z.object({
+const Load = z.object({
   leg: oneOf(['1', '2']),
   watts: quantity('its watts', 0.5, 50_000),
 })
@@ -18,7 +18,7 @@ export const LostNeutralInputs = z
     neutral: oneOf(['open', 'poor']),
     /** Of the neutral, where it is not open but poor. */
     neutralOhms: z.optional(quantity('ohms of the neutral', 0.001, 100_000)),
-    loads: z.array(Load).check(z.minLength(1), z.maxLength(16)),
+    loads: rows(Load, 'a load', 16),
   })
   .check((payload) => {
     const { neutral, neutralOhms } = payload.value

@@ -18,9 +18,21 @@ export function count(of: string, min: number, max: number) {
   return z.int({ error }).check(z.gte(min, { error }), z.lte(max, { error }))
 }
 
+/** For a choice that decides what else is asked. */
+export const chooseOne = { error: 'Choose one of these.' } as const
+
 /** One of a few words. */
 export const oneOf = <const Values extends readonly [string, ...string[]]>(values: Values) =>
-  z.enum(values, { error: 'Choose one of these.' })
+  z.enum(values, chooseOne)
+
+/**
+ * One row or more of a kind.
+ * @param one "a run"
+ */
+export function rows<Row extends z.core.$ZodType>(row: Row, one: string, most: number) {
+  const error = `Add ${one}: from 1 to ${most} of them.`
+  return z.array(row, { error }).check(z.minLength(1, { error }), z.maxLength(most, { error }))
+}
 
 type Issues = { value: unknown; issues: unknown[] }
 /** Adds a sentence to one field, for what only two fields together show. */

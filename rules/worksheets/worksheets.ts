@@ -30,7 +30,11 @@ function worksheet<Inputs>(schema: z.ZodMiniType<Inputs>, compute: (inputs: Inpu
     const read = schema.safeParse(typed)
     if (read.success) return { result: compute(read.data) }
     const errors: Record<string, string> = {}
-    for (const { path, message } of read.error.issues) errors[path.join('.')] ??= message
+    for (const { path, message, code } of read.error.issues) {
+      // A whole part that is missing has no sentence of its own in its schema.
+      const part = code === 'invalid_type' && message.startsWith('Invalid')
+      errors[path.join('.')] ??= part ? 'This part is missing.' : message
+    }
     return { errors }
   }
 }

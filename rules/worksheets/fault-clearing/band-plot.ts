@@ -1,7 +1,7 @@
 import type { Band } from '../protective-devices/band.ts'
 import { opensAfter } from '../protective-devices/band.ts'
 import type { Plot } from '../plot.ts'
-import { inTimes, written } from '../written.ts'
+import { between, inTimes, written } from '../written.ts'
 import type { Clearing } from './clearing.ts'
 
 const frame = { width: 420, height: 330 }
@@ -60,10 +60,10 @@ export function bandPlot(band: Band, clearing: Clearing): Plot | undefined {
       right: x(most),
       top: breaker.toSeconds === Infinity ? field.top : y(breaker.toSeconds),
       bottom: breaker.fromSeconds === Infinity ? field.top : y(breaker.fromSeconds),
-      text: least === most ? `${written(most)} A` : `${written(least)} to ${written(most)} A`,
+      text: `${between(least, most)} A`,
     },
     ends: [...new Set(ends)].map((time) => ({ y: y(time), text: `source lets go, ${written(time, 2)} s` })),
-    words: `${band.name}: from ${written(band.opensFrom * band.ratedAmps)} A it must open. At ${written(least)} to ${written(most)} A it opens: ${inTimes(breaker)}. The source lets go: ${inTimes(source)}.`,
+    words: `${band.name}: from ${written(band.opensFrom * band.ratedAmps)} A it must open. At ${between(least, most)} A it opens: ${inTimes(breaker)}. The source lets go: ${inTimes(source)}.`,
   }
 }
 

@@ -70,8 +70,8 @@ export function clearingWords(clearing: Clearing, fault: Fault): { verdict: stri
   const times = between(amps.least / band.ratedAmps, amps.most / band.ratedAmps)
   const flows =
     clearing.sourceLimits === 'no'
-      ? `${between(amps.least, amps.most)} A flow, set by the wires: ${times} times the rating of the ${band.name}.`
-      : `${name[0]?.toUpperCase()}${name.slice(1)} gives ${between(amps.least, amps.most)} A at most, where the wires would let ${written(source.volts / clearing.loopOhms)} A through. That is ${times} times the rating of the ${band.name}.`
+      ? `${between(amps.least, amps.most)} A flow, set by the whole loop: ${times} times the rating of the ${band.name}.`
+      : `${name[0]?.toUpperCase()}${name.slice(1)} gives ${between(amps.least, amps.most)} A at most, where the loop would let ${written(source.volts / clearing.loopOhms)} A through. That is ${times} times the rating of the ${band.name}.`
   const because = [flows]
   because.push(
     breaker.fromSeconds === Infinity

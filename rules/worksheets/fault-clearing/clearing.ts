@@ -16,7 +16,7 @@ export type FaultPath = {
   touchOhms: number
 }
 
-export type LeakageDevice = 'none' | 'gfci' | 'rcd'
+type LeakageDevice = 'none' | 'gfci' | 'rcd'
 
 export type Fault = {
   source: SourceLimit
@@ -27,7 +27,7 @@ export type Fault = {
 }
 
 /** What ends the fault. `breaker-or-source`: one of them, not sure which. `perhaps-breaker`: it may, or nothing does. */
-export type Clears = 'breaker' | 'leakage' | 'source' | 'breaker-or-source' | 'perhaps-breaker' | 'nothing'
+type Clears = 'breaker' | 'leakage' | 'source' | 'breaker-or-source' | 'perhaps-breaker' | 'nothing'
 
 export type Clearing = {
   clears: Clears

@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { mend, oneOf, quantity } from '../quantity.ts'
+import { chooseOne, mend, oneOf, quantity } from '../quantity.ts'
 import { remembered, seen } from '../result.ts'
 import type { Reference } from '../result.ts'
 import type { Times } from '../written.ts'
@@ -36,15 +36,19 @@ const limited = <Kind extends string>(kind: Kind) =>
     })
 
 /** What feeds the fault, as typed. */
-export const Source = z.discriminatedUnion('kind', [
-  z.object({
-    kind: z.literal('utility'),
-    /** Line to neutral, at its terminals. */
-    shortCircuitAmps: quantity('the short-circuit current in amps', 10, 200_000),
-  }),
-  limited('inverter'),
-  limited('generator'),
-])
+export const Source = z.discriminatedUnion(
+  'kind',
+  [
+    z.object({
+      kind: z.literal('utility'),
+      /** Line to neutral, at its terminals. */
+      shortCircuitAmps: quantity('the short-circuit current in amps', 10, 200_000),
+    }),
+    limited('inverter'),
+    limited('generator'),
+  ],
+  chooseOne,
+)
 export type Source = z.infer<typeof Source>
 type Kind = Source['kind']
 

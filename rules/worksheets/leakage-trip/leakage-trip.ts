@@ -129,7 +129,7 @@ export function leakageTrip(inputs: LeakageInputs): Result {
             'Up to 30 mA the standard lets 0.25 A stand for five times the rating, so 0.04 s counts from there.',
           ]
         : []),
-      'Between two currents of the table the time of the smaller one counts.',
+      ...(device === 'rcd' ? ['Between two currents of the table the time of the smaller one counts.'] : []),
     ],
     cautions: [
       {

@@ -4,7 +4,7 @@ import { justUnder } from './band.ts'
 
 export type Curve = 'B' | 'C' | 'D'
 /** Multiples of the rating: at the lower it must not open within 0.1 s, at the upper it must. */
-export const magneticOf: Readonly<Record<Curve, readonly [number, number]>> = {
+const magneticOf: Readonly<Record<Curve, readonly [number, number]>> = {
   B: [3, 5],
   C: [5, 10],
   D: [10, 20],

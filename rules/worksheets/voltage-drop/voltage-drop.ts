@@ -1,5 +1,5 @@
 import * as z from 'zod/mini'
-import { mend, oneOf, quantity } from '../quantity.ts'
+import { mend, oneOf, quantity, rows } from '../quantity.ts'
 import { remembered, seen, whoDecides } from '../result.ts'
 import type { Reference, Result } from '../result.ts'
 import { lengthUnit, noSuchWire, Units, wireReferences, wireSize } from '../wire.ts'
@@ -17,7 +17,7 @@ export const DropInputs = z
     /** Of the load; 1 for DC and for heat. */
     powerFactor: quantity('the power factor', 0.1, 1),
     celsius: quantity('the temperature of the wires in °C', -40, 150),
-    runs: z.array(Run).check(z.minLength(1), z.maxLength(8)),
+    runs: rows(Run, 'a run', 8),
   })
   .check((payload) => {
     const { units, runs } = payload.value
@@ -29,7 +29,7 @@ export const DropInputs = z
 export type DropInputs = z.infer<typeof DropInputs>
 
 /** NEC's advice, per cent: one branch or feeder, and all of it to the farthest outlet. */
-export const adviceOf = { each: 3, all: 5 } as const
+const adviceOf = { each: 3, all: 5 } as const
 
 /** Volts lost in a run: 2 · I · (R·cos φ + X·sin φ). */
 export const dropOf = (amps: number, { resistance, reactance }: RunOhms, powerFactor: number): number =>

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { expect, test } from 'vitest'
+import { computeWorksheet, worksheetNames } from '../../../rules/worksheets/worksheets.ts'
 import { flat, nested, worksheetAddress } from '../../../rules/worksheets/address.ts'
 
 test('inputs go into an address and come back', () => {
@@ -49,4 +50,34 @@ test('a hostile address reaches nothing but its own values', () => {
   })
   expect(found).toEqual({ ok: '5' })
   expect(({} as Record<string, unknown>)['x']).toBeUndefined()
+})
+
+/** Sentences of our own: none of these words is the validator's. */
+const foreign = /invalid|expected|received|unrecognized|undefined|NaN/i
+
+test.each(worksheetNames)('%s: whatever is missing or wrong is asked for in our words', (name) => {
+  const wrong = [{}, { units: 'furlongs', runs: 5, loads: 'x', source: 7, one: [], device: null }]
+  const halves = [
+    {
+      which: 'equipment',
+      source: { kind: 'inverter' },
+      device: { kind: 'ul489' },
+      one: { with: 'bulb' },
+      runs: [{}],
+    },
+    {
+      which: 'electrode',
+      source: { kind: 'utility' },
+      device: { kind: 'gG' },
+      loads: [{}],
+      feeder: {},
+      branch: {},
+    },
+  ]
+  for (const typed of [...wrong, ...halves]) {
+    const answer = computeWorksheet(name, typed)
+    const sentences = 'errors' in answer ? Object.values(answer.errors) : []
+    expect(sentences.length).toBeGreaterThan(0)
+    for (const sentence of sentences) expect(sentence).not.toMatch(foreign)
+  }
 })
