@@ -188,12 +188,12 @@ export const faults: Readonly<Record<ElectricalCause, Fault>> = {
   },
   'low-source-voltage': {
     is: 'the source gives too little',
-    needs: () => ({ sourceLevel: even(0.7, 0.82, 0.885, 'of nominal', 'below every limit a source has') }),
+    needs: () => ({ sourceLevel: even(0.64, 0.8, 0.885, 'of nominal', 'below every limit a source has') }),
     edits: () => [],
   },
   'high-source-voltage': {
     is: 'the source gives too much',
-    needs: () => ({ sourceLevel: even(1.1, 1.15, 1.25, 'of nominal', 'above every limit a source has') }),
+    needs: () => ({ sourceLevel: even(1.1, 1.16, 1.3, 'of nominal', 'above every limit a source has') }),
     edits: () => [],
   },
   'source-off': { is: 'the source gives nothing', edits: stopped },

@@ -74,8 +74,9 @@ function sourceParts(context: WiringContext, p: Parameters): Branch[] {
   const ohms = p.sourceOhms * ohmsScale(context)
   const utility = context.source === 'utility'
   const two = hasTwoLegs(context)
-  const neutralFilter = p.filterFarads * Math.exp(p.filterSkew)
-  const otherFilter = p.filterFarads * Math.exp(p.filterSkewOther)
+  const hotFilter = p.filterFarads * Math.exp(-p.filterSkew / 2)
+  const neutralFilter = p.filterFarads * Math.exp(p.filterSkew / 2)
+  const otherFilter = hotFilter * Math.exp(p.filterSkewOther)
   // A utility's neutral is earthed at its transformer, ahead of the service drop.
   const star = utility ? 'winding.neutral' : 'source.neutral'
   return [
@@ -88,7 +89,7 @@ function sourceParts(context: WiringContext, p: Parameters): Branch[] {
         ]
       : []),
     resistance('source.pin', 'source.case', 'source.ground', p.contactGroundOhms),
-    capacitance('filter.hot', 'source.hot', 'source.case', p.filterFarads),
+    capacitance('filter.hot', 'source.hot', 'source.case', hotFilter),
     capacitance('filter.neutral', 'source.neutral', 'source.case', neutralFilter),
     ...(two ? [capacitance('filter.hot2', 'source.hot2', 'source.case', otherFilter)] : []),
     capacitance('stray.hot', 'source.hot', earth, p.strayFarads),

@@ -1,4 +1,6 @@
 /** The ranges themselves: source, strays, grounds, wires, loads, and what only a fault has. */
+import { americanWireOhms } from '../conductors.ts'
+import type { Gauge } from '../conductors.ts'
 import { hasPanel } from './context.ts'
 import type { WiringContext } from './context.ts'
 import type { Choice, Choices, Place, Range, Ranges } from './parameters.ts'
@@ -78,7 +80,7 @@ function strayRanges(context: WiringContext) {
       ...even(-1.2, 0, 1.2, 'ln of ratio', 'one wire has more of them than the other: 25 to 75 % happens'),
       absent: 0.45,
     },
-    filterSkewOther: { ...even(-1.2, 0, 1.2, 'ln of ratio', 'the same for the other leg'), absent: 0.45 },
+    filterSkewOther: { ...even(-1.2, 0, 1.2, 'ln of ratio', 'the other leg against this one'), absent: 0.45 },
     strayFarads: panel
       ? log(50e-12, 300e-12, 2e-9, 'F', 'wires of a house to earth')
       : log(10e-12, 80e-12, 500e-12, 'F', 'a portable set and its cords to earth'),
@@ -136,6 +138,10 @@ function groundRanges(context: WiringContext) {
   }
 }
 
+/** Ω a foot of a copper conductor, one way. */
+const copper = (gauge: Gauge, solid: boolean, celsius: number): number =>
+  americanWireOhms({ gauge, metal: 'copper', solid, feet: 1, celsius })
+
 /** Wires and joints from the source to the slots. */
 function wireRanges(context: WiringContext) {
   const panel = hasPanel(context)
@@ -143,18 +149,18 @@ function wireRanges(context: WiringContext) {
   return {
     feederFeet: log(5, 30, 100, 'ft', 'source to panel, from wall to wall or across a yard'),
     feederOhmsPerFoot: log(
-      0.00041,
-      0.0007,
-      0.00124,
+      copper('6', false, 25),
+      copper('8', false, 40),
+      copper('10', false, 75),
       'Ω/ft',
-      'NEC chapter 9 table 8, 6 to 10 AWG copper stranded, 25 to 75 °C',
+      '6 to 10 AWG copper stranded, 25 to 75 °C',
     ),
     feederGroundOhmsPerFoot: even(
-      0.00104,
-      0.00115,
-      0.00124,
+      copper('10', false, 25),
+      copper('10', false, 40),
+      copper('10', false, 75),
       'Ω/ft',
-      'NEC chapter 9 table 8, 10 AWG copper stranded',
+      '10 AWG copper stranded, 25 to 75 °C',
     ),
     branchFeet: panel
       ? even(12, 45, 150, 'ft', 'panel to the farthest receptacle of a house')
@@ -164,18 +170,18 @@ function wireRanges(context: WiringContext) {
       : log(0.2, 2, 55, 'ft', 'the last cord'),
     branchOhmsPerFoot: panel
       ? even(
-          0.00162,
-          0.0018,
-          0.00307,
+          copper('12', true, 25),
+          copper('12', true, 40),
+          copper('14', true, 75),
           'Ω/ft',
-          'NEC chapter 9 table 8, 12 and 14 AWG copper solid, 25 to 75 °C',
+          '12 and 14 AWG copper solid, 25 to 75 °C',
         )
       : log(
-          0.00166,
-          0.0026,
-          0.005,
+          copper('12', false, 25),
+          copper('14', false, 25),
+          copper('16', false, 75),
           'Ω/ft',
-          'NEC chapter 9 table 8, 12 to 16 AWG copper stranded, 25 to 75 °C',
+          'cords of 12 to 16 AWG copper stranded, 25 to 75 °C',
         ),
     contactHotOhms: contact,
     contactNeutralOhms: contact,
@@ -220,11 +226,11 @@ function loadRanges(context: WiringContext) {
 /** Numbers that only a fault has; `faults.ts` says which fault uses which. */
 function faultRanges() {
   return {
-    jointOhms: log(0.5, 1, 2, 'Ω', 'a poor joint that shows: 5 to 20 V at 10 A'),
+    jointOhms: log(0.4, 1, 4, 'Ω', 'a poor joint that shows: 4 to 40 V at 10 A'),
     faultOhms: even(0, 0.5, 5, 'Ω', 'bare copper on metal, or through rust'),
     bootlegOhms: log(0.01, 0.02, 0.06, 'Ω', 'a jumper of some inches with two screws'),
     restVolts: even(0, 0, 1.2, 'V', 'what a dead output picks up'),
-    runDrop: even(0.06, 0.08, 0.12, 'of nominal', 'twice the advised 3 % and more, at 12 A'),
+    runDrop: even(0.055, 0.08, 0.15, 'of nominal', 'twice the advised 3 % and more, at 12 A'),
     stuckAmps: log(0.3, 2, 8, 'A', 'what runs on a multiwire circuit when its neutral goes'),
     stuckAmpsOther: log(0.3, 2, 8, 'A', 'the same on its other leg'),
     tieOhms: log(0.02, 0.08, 0.3, 'Ω', 'a center tap wired to the case'),
@@ -253,6 +259,9 @@ function faultRanges() {
     ),
   }
 }
+
+/** Parameters that only a fault has: two faults at once each have their own. */
+export const faultOnly = Object.keys(faultRanges()) as (keyof ReturnType<typeof faultRanges>)[]
 
 /** Every range and choice of a wiring in this context, before a fault narrows some of them. */
 export function rangesIn(context: WiringContext): Ranges {

@@ -23,13 +23,13 @@ export const usualKit: Kit = {
  * battery, a GFCI's time) is not among them, nor what people report: `readings/signs.ts` says what they notice.
  */
 export function takeReadings(m: Measured, kit: Kit): Found {
-  return {
-    ...volts(m, kit.meter),
-    ...testerLamps(m, kit.tester),
-    ...testBulbs(m, kit.bulbWatts, kit.meter),
-    ...deadOhms(m),
-    ...amps(m),
-    ...loopOhms(m),
-    ...gfci(m),
-  }
+  const found: Found = {}
+  volts(m, kit.meter, found)
+  testerLamps(m, kit.tester, found)
+  testBulbs(m, kit.bulbWatts, kit.meter, found)
+  deadOhms(m, found)
+  amps(m, found)
+  loopOhms(m, found)
+  gfci(m, found)
+  return found
 }

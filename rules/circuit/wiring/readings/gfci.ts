@@ -11,8 +11,8 @@ const limitAmps = (nominal: number): number => (nominal > 200 ? 0.022 : 0.005)
 const buttonAmps = (nominal: number): number => (nominal > 200 ? 0.03 : 0.0075)
 
 /** A GFCI where there is one: its own button, a plug-in tester's, and whether it stays on. */
-export function gfci({ context, p, running, loaded }: Measured): Found {
-  if (p.gfciAt === 'nowhere') return {}
+export function gfci({ context, p, running, loaded }: Measured, found: Found): void {
+  if (p.gfciAt === 'nowhere') return
   const nominal = nominalVolts(context)
   const onFeeder = p.gfciAt === 'source' && hasPanel(context)
   const through = onFeeder
@@ -24,9 +24,7 @@ export function gfci({ context, p, running, loaded }: Measured): Found {
   const pressed = running.loaded([
     { from: 'receptacle.hot', to: 'receptacle.ground', ohms: nominal / buttonAmps(nominal) },
   ])
-  return {
-    'gfci.own-test': live ? 'trips' : 'holds',
-    'gfci.plug-test': trips(pressed) ? 'trips' : 'holds',
-    'gfci.in-use': trips(running) ? 'trips-at-once' : trips(loaded) ? 'trips-with-load' : 'holds',
-  }
+  found['gfci.own-test'] = live ? 'trips' : 'holds'
+  found['gfci.plug-test'] = trips(pressed) ? 'trips' : 'holds'
+  found['gfci.in-use'] = trips(running) ? 'trips-at-once' : trips(loaded) ? 'trips-with-load' : 'holds'
 }

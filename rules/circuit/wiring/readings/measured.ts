@@ -3,7 +3,7 @@ import type { Factored } from '../../solve.ts'
 import type { Network } from '../../network.ts'
 import type { WiringContext } from '../context.ts'
 import type { Parameters } from '../parameters.ts'
-import { dead, disconnected, lifted, mainOpen, pluggedIn, testLoadOhms } from '../states.ts'
+import { dead, pluggedIn, testLoadOhms } from '../states.ts'
 
 /** A wiring solved in the states in which readings are taken; the dead ones are solved when first asked for. */
 export type Measured = {
@@ -16,12 +16,8 @@ export type Measured = {
   tested: Factored
   /** Running with the known load on at the receptacle. */
   loaded: Factored
-  /** Off, loads unplugged. */
-  dead: () => Factored
-  /** Off, main open and feeder neutral lifted. */
-  deadPanel: () => Factored
-  /** Off, nothing connected to the source. */
-  deadSource: () => Factored
+  /** Off, loads unplugged; the network itself, since most of it can be left out for one reading. */
+  dead: () => Network
 }
 
 const once = <T>(make: () => T): (() => T) => {
@@ -35,7 +31,6 @@ export function measured(context: WiringContext, network: Network, p: Parameters
   const tested = bare.loaded(pluggedIn(context, p))
   const running = p.pluggedInStays ? tested : bare
   const known = { from: 'receptacle.hot', to: 'receptacle.neutral', ohms: testLoadOhms(context, p) }
-  const off = once(() => dead(context, network, p))
   return {
     context,
     p,
@@ -43,9 +38,7 @@ export function measured(context: WiringContext, network: Network, p: Parameters
     running,
     tested,
     loaded: running.loaded([known]),
-    dead: once(() => factor(off())),
-    deadPanel: once(() => factor(lifted(off(), mainOpen))),
-    deadSource: once(() => factor(lifted(off(), disconnected(context)))),
+    dead: once(() => dead(context, network, p)),
   }
 }
 

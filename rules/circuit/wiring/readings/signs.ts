@@ -9,7 +9,8 @@ export type Extent = 'one-receptacle' | 'one-circuit' | 'everything'
 export type Signs = {
   /** How far what is wrong here shows; undefined where nothing shows. */
   extent: Extent | undefined
-  /** Volts a lamp gets on the same circuit and where the circuit begins, as parts of nominal. */
+  /** Volts a lamp gets in this receptacle, in the one before it, and where the circuit begins: parts of nominal. */
+  lampPluggedIn: number
   lampHere: number
   lampElsewhere: number
   /** The same on the other leg; where there is none, as elsewhere. */
@@ -70,6 +71,7 @@ export function signs(m: Measured): Signs {
   const elsewhere = across(running, `${feed}.hot`, `${feed}.neutral`) / nominal
   return {
     extent: extentOf(m),
+    lampPluggedIn: across(running, 'receptacle.hot', 'receptacle.neutral') / nominal,
     lampHere: across(running, 'joint.hot', 'joint.neutral') / nominal,
     lampElsewhere: elsewhere,
     lampOtherLeg:

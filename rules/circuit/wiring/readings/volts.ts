@@ -4,9 +4,8 @@ import { hasPanel, hasTwoLegs, hertzOf, nominalVolts } from '../context.ts'
 import type { Found, Measured } from './measured.ts'
 
 /** Every voltage of the catalogue, the meter held to the two points it is read between. */
-export function volts(m: Measured, meter: Meter): Found {
+export function volts(m: Measured, meter: Meter, found: Found): void {
   const { context, p, running, loaded } = m
-  const found: Found = {}
   const places = [
     ['receptacle', 'receptacle.ground'],
     ...(hasPanel(context) ? [['panel', 'panel.ground'] as const] : []),
@@ -33,5 +32,4 @@ export function volts(m: Measured, meter: Meter): Found {
   found['source.ng.volts.dc'] = 0
   if (Number(found['source.hn.volts']) > 0.3 * nominalVolts(context))
     found['source.hz'] = hertzOf(context) * p.hertzRatio
-  return found
 }
