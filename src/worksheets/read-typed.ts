@@ -28,10 +28,15 @@ export function readTyped(form: Form, values: Flat, units: Units): unknown {
   return nested(typed)
 }
 
-/** Names of fields and their labels, for a list of what is still to mend. */
+/** Fields and what they are called in a list of what is still to mend: "Breaker: Rating", "Run 2: Size". */
 export function labelsOf(form: Form, values: Flat, units: Units): ReadonlyMap<string, string> {
   const labels = new Map<string, string>()
-  for (const group of form.groups(values, units))
-    for (const field of fieldsNow([group], values)) labels.set(field.name, `${group.title}: ${field.label}`)
+  for (const group of form.groups(values, units)) {
+    const rows = group.parts.find((part) => part.kind === 'rows')
+    for (const { name, label } of fieldsNow([group], values)) {
+      const row = rows && name.startsWith(`${rows.name}.`) ? Number(name.split('.')[1]) + 1 : undefined
+      labels.set(name, `${row === undefined ? group.title : `${rows?.noun ?? ''} ${row}`}: ${label}`)
+    }
+  }
   return labels
 }

@@ -104,7 +104,7 @@ export function ResultView({ result }: { result: Result }) {
             {result.references.map(({ cite, fromMemory }) => (
               <li key={cite}>
                 {cite}
-                {fromMemory && <i> From memory: look it up in the adopted edition.</i>}
+                {fromMemory && <i> From memory: look it up before it decides anything.</i>}
               </li>
             ))}
           </ul>

@@ -252,13 +252,16 @@ test('the plot says in words what it draws, and the picture of the bond follows 
   await end()
 })
 
-test('on paper the inputs stand as a list, and nothing of the screen', async () => {
-  const { page, end } = await visit(browser, site)
+test('on paper the inputs stand as a list, black on white from a dark screen too, and nothing of the screen', async () => {
+  const { page, end } = await visit(browser, site, { theme: 'dark' })
   await page.goto('/worksheets/fault-clearing')
   await says(page, /./)
   await page.emulateMedia({ media: 'print' })
   expect(await page.locator('.ws-form').isVisible()).toBe(false)
   expect(await page.getByRole('button', { name: 'Print' }).isVisible()).toBe(false)
+  expect(await page.evaluate(() => getComputedStyle(document.documentElement).backgroundColor)).toBe(
+    'rgb(255, 255, 255)',
+  )
   const paper = await page.locator('section.ws-paper').innerText()
   expect(paper).toContain('3000 W')
   expect(paper).toContain('In the panel')

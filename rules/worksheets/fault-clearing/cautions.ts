@@ -4,17 +4,29 @@ import { rcdReferences } from '../leakage-trip/iec-61008.ts'
 import { seen, whoDecides } from '../result.ts'
 import type { Caution, Reference } from '../result.ts'
 import { wireReferences } from '../wire.ts'
+import { inTime, written } from '../written.ts'
 import type { Clearing, Fault } from './clearing.ts'
 import type { FaultInputs } from './fault-clearing.ts'
 import { sourceReferences } from './source-limit.ts'
+import type { Touch } from './touch.ts'
 
 /** The gravest first. */
-export function faultCautions(clearing: Clearing, { source, path }: Fault, { bond }: FaultInputs): Caution[] {
+export function faultCautions(
+  clearing: Clearing,
+  { source, path }: Fault,
+  touch: Touch,
+  { bond }: FaultInputs,
+): Caution[] {
   const all: Caution[] = []
   if (clearing.clears === 'nothing' || clearing.clears === 'perhaps-breaker')
     all.push({
       word: 'danger',
       text: 'A fault here leaves metal live, and nothing disconnects it. Keep people away from its metal and the system off until this is mended.',
+    })
+  else if (!touch.iecHolds)
+    all.push({
+      word: 'danger',
+      text: `Until the fault is cleared, its metal stands at ${written(touch.volts)} V, for up to ${inTime(touch.seconds)}. Keep people away from it and the system off until this is mended.`,
     })
   else if (clearing.clears !== 'breaker' && clearing.clears !== 'leakage')
     all.push({

@@ -73,11 +73,12 @@ function breakerTimes({ source, breaker }: Fault, least: number, most: number): 
   }
 }
 
-function leakageTimes({ source, path, leakage }: Fault, loopOhms: number, least: number, most: number) {
+function leakageTimes({ source, path, leakage }: Fault, least: number) {
   if (leakage === 'none' || path === undefined) return { times: never, starved: false }
-  const limited = most < source.volts / loopOhms
   if (leakage === 'rcd') return { times: rcdTimes(least * 1000, 30, 'general'), starved: false }
-  const starved = limited && most * loopOhms < gfciLeastVoltage * source.volts
+  // What the fault leaves of the voltage at the source's terminals, with the least that the source may give.
+  const left = least * (path.outOhms + path.backOhms)
+  const starved = left < gfciLeastVoltage * source.volts
   const felt = least * 1000 >= gfciMilliamps.mustFrom
   const times = felt && !starved ? { fromSeconds: 0, toSeconds: gfciLongest(least * 1000) } : never
   return { times, starved: starved && felt }
@@ -102,7 +103,7 @@ export function clearingOf(fault: Fault): Clearing {
   const { loopOhms, limits, ...amps } = currents(fault)
   const breaker = breakerTimes(fault, amps.least, amps.most)
   const stopping = path === undefined ? never : stops(source, amps)
-  const { times: leakage, starved } = leakageTimes(fault, loopOhms, amps.least, amps.most)
+  const { times: leakage, starved } = leakageTimes(fault, amps.least)
   return {
     clears: first(breaker, stopping, leakage),
     loopOhms,

@@ -59,7 +59,7 @@ export function faultClearing(inputs: FaultInputs): Result {
   const bonds = ['panel', 'source', 'rods', 'none'] as const
   const plot = bandPlot(fault.breaker, clearing)
   return {
-    judgment: judgmentOf[clearing.clears],
+    judgment: judgmentOf(clearing, touch.iecHolds),
     verdict,
     because: [...because, ...touch.sentences],
     figures: faultFigures(clearing, fault, touch),
@@ -79,6 +79,6 @@ export function faultClearing(inputs: FaultInputs): Result {
       ...fault.breaker.assumptions,
       'What energy is let through is not claimed.',
     ],
-    cautions: faultCautions(clearing, fault, inputs),
+    cautions: faultCautions(clearing, fault, touch, inputs),
   }
 }

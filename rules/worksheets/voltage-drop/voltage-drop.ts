@@ -4,6 +4,7 @@ import { remembered, seen, whoDecides } from '../result.ts'
 import type { Reference, Result } from '../result.ts'
 import { lengthUnit, noSuchWire, Units, wireReferences, wireSize } from '../wire.ts'
 import { written } from '../written.ts'
+import { adviceOn } from './advice.ts'
 import { Run, runOhms } from './run.ts'
 import type { RunOhms } from './run.ts'
 
@@ -28,8 +29,8 @@ export const DropInputs = z
   })
 export type DropInputs = z.infer<typeof DropInputs>
 
-/** NEC's advice, per cent: one branch or feeder, and all of it to the farthest outlet. */
-const adviceOf = { each: 3, all: 5 } as const
+/** Up to these volts a circuit is taken to run from hot to neutral, not from leg to leg. */
+const mostToNeutral = { american: 140, metric: 260 } as const
 
 /** Volts lost in a run: 2 · I · (R·cos φ + X·sin φ). */
 export const dropOf = (amps: number, { resistance, reactance }: RunOhms, powerFactor: number): number =>
@@ -47,29 +48,23 @@ export function voltageDrop(inputs: DropInputs): Result {
   const total = each.reduce((sum, { drop }) => sum + drop, 0)
   const percent = (100 * total) / volts
   const worst = Math.max(...each.map(({ drop }) => (100 * drop) / volts))
-  const within = percent <= adviceOf.all && worst <= adviceOf.each
+  const advice = adviceOn(units, percent, worst, runs.length)
   const left = volts - total
   const broken = left <= 0
   return {
-    judgment: within ? 'holds' : 'fails',
+    judgment: broken ? 'fails' : advice.kept ? 'holds' : 'depends',
     verdict: broken
       ? 'These wires can’t carry that current: it would take more than all the voltage.'
       : `${written(total)} V lost, ${written(percent)} %: ${written(left)} V are left at the load.`,
     because: [
-      within
-        ? runs.length === 1
-          ? 'That is within the 3 % the NEC recommends for one branch circuit or feeder.'
-          : 'That is within what the NEC recommends: 3 % for each, 5 % in all.'
-        : percent > adviceOf.all
-          ? 'The NEC recommends no more than 5 % to the farthest outlet, and 3 % in any one branch circuit or feeder.'
-          : 'The NEC recommends no more than 3 % in one branch circuit or feeder.',
+      advice.sentence,
       'Such drop is no danger by itself. Motors run hot and inverters shut down on it, and a poor joint looks the same: compare with a measurement.',
     ],
     figures: [
       { label: 'Lost', value: written(total), unit: 'V' },
       { label: 'Of the source’s voltage', value: written(percent), unit: '%' },
       { label: 'Left at the load', value: broken ? 'none' : written(left), unit: broken ? '' : 'V' },
-      ...(current === 'ac' && !broken
+      ...(current === 'ac' && !broken && volts <= mostToNeutral[units]
         ? [
             {
               label: 'Neutral–ground at the load',

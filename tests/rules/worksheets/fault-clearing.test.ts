@@ -200,6 +200,32 @@ describe('what clears it', () => {
     expect(faultClearing(of({ source: inverter, contactOhms: 10 })).cautions[0]?.word).toBe('danger')
   })
 
+  test('a breaker that opens late, with more than 50 V on the metal meanwhile, is no pass', () => {
+    // 40 A on 20 A: within 2 min by UL 489; more than 0.8 s (IEC 60364-4-41), and 59 V on the metal.
+    const result = faultClearing(of({ branch: branch('14', 480) }))
+    expect(result.verdict).toMatch(/^The breaker trips late: after up to/)
+    expect(result.judgment).toBe('fails')
+    expect(result.cautions[0]?.word).toBe('danger')
+    expect(result.because.join(' ')).toContain('AC-4')
+    // With little on the metal it is late all the same, but not by that.
+    const little = faultClearing(of({ contactOhms: 2.4, branch: branch('12', 20) }))
+    expect([little.judgment, little.verdict.slice(0, 22)]).toEqual(['depends', 'The breaker trips late'])
+  })
+
+  test('more than its rating but not the most it gives: the source may stop or not, and is not counted on', () => {
+    const inputs = of({ source: inverter, contactOhms: 5.5 })
+    const found = clearingOf(faultOf(inputs))
+    expect(found.source).toEqual({ fromSeconds: 0.01, toSeconds: Infinity })
+    expect(faultClearing(inputs).because.join(' ')).toContain('or not at all')
+  })
+
+  test('without a bond nothing is said of a time that a fault loop would need', () => {
+    const { because } = faultClearing(of({ bond: 'none' }))
+    expect(because.join(' ')).toContain('To earth only stray current flows')
+    expect(because.join(' ')).toContain('insulation monitoring')
+    expect(because.join(' ')).not.toContain('that is kept')
+  })
+
   test('the table by mode says it for each mode of a system', () => {
     const modes = [
       { mode: 'On utility', fault: faultOf(plain) },
