@@ -4,6 +4,7 @@ import { SignalPanel } from '../ui/signal-panel.tsx'
 import { Tick } from '../ui/tick.tsx'
 import { PlotView } from './plot-view.tsx'
 import { ResultTable } from './result-table.tsx'
+import './result.css'
 
 const tickOf: Readonly<Record<Judgment, 'yes' | 'no' | 'open' | undefined>> = {
   holds: 'yes',

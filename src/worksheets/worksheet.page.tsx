@@ -18,6 +18,7 @@ import { ToMend } from './to-mend.tsx'
 import { useWorksheet } from './use-worksheet.ts'
 import type { Worksheet } from './use-worksheet.ts'
 import './worksheets.css'
+import './paper.css'
 
 const unitWays = [
   { value: 'american', label: 'Feet, AWG' },

@@ -1,92 +1,10 @@
-import { typicalLimits } from '../../../rules/worksheets/fault-clearing/source-limit.ts'
-import { gGRatings } from '../../../rules/worksheets/protective-devices/fuses.ts'
 import { typicalMagnetic } from '../../../rules/worksheets/protective-devices/ul-489.ts'
-import { flat } from '../../../rules/worksheets/address.ts'
 import type { Flat } from '../../../rules/worksheets/address.ts'
 import type { Units } from '../../../rules/worksheets/wire.ts'
-import { buildPart, celsiusPart, lengthPart, metalPart, sizePart } from './parts.ts'
-import type { ChoicePart, FieldPart, Form, Group, NumberPart } from './parts.ts'
-
-const number = (name: string, label: string, unit: string, help?: string): NumberPart => ({
-  kind: 'number',
-  name,
-  label,
-  unit,
-  ...(help !== undefined && { help }),
-})
-const pair = (one: NumberPart | ChoicePart, other: NumberPart | ChoicePart): FieldPart => ({
-  kind: 'pair',
-  parts: [one, other],
-})
-const limits = (kind: keyof typeof typicalLimits): Flat => flat({ source: typicalLimits[kind] })
-
-function sourceParts(values: Flat): FieldPart[] {
-  const kind = values['source.kind']
-  const head: FieldPart[] = [
-    {
-      kind: 'choice',
-      name: 'source.kind',
-      label: 'Source',
-      look: 'ways',
-      ways: [
-        { value: 'inverter', label: 'Inverter' },
-        { value: 'generator', label: 'Generator' },
-        { value: 'utility', label: 'Utility' },
-      ],
-      brings: { inverter: limits('inverter'), generator: limits('generator') },
-    },
-    {
-      ...number('volts', 'Volts to ground', 'V'),
-      often: [
-        { label: '120', value: '120' },
-        { label: '230', value: '230' },
-      ],
-    },
-  ]
-  if (kind === 'utility')
-    return [
-      ...head,
-      number(
-        'source.shortCircuitAmps',
-        'Short-circuit current, line to neutral',
-        'A',
-        'From the utility, or measured with a loop tester. Where the panel is fed from far away, a few hundred.',
-      ),
-    ]
-  return [
-    ...head,
-    pair(
-      number('source.ratedWatts', 'Rated power', 'W'),
-      number('source.ratedVolts', 'At', 'V', '240 where it feeds two legs of 120'),
-    ),
-    pair(
-      number('source.timesLeast', 'In a fault, at least', '×', 'times its rated current'),
-      number('source.timesMost', 'At most', '×', 'from its instructions'),
-    ),
-    pair(number('source.secondsLeast', 'For at least', 's'), number('source.secondsMost', 'At most', 's')),
-    {
-      kind: 'choice',
-      name: 'source.then',
-      label: 'And then',
-      look: 'ways',
-      ways: [
-        { value: 'stops', label: kind === 'inverter' ? 'Shuts down' : 'Loses its field' },
-        { value: 'holds', label: 'Goes on with less' },
-      ],
-      brings: { holds: { 'source.thenTimes': '1' } },
-    },
-    ...(values['source.then'] === 'holds'
-      ? [
-          number(
-            'source.thenTimes',
-            'It goes on with',
-            '×',
-            'times its rated current, for as long as the fault stands',
-          ),
-        ]
-      : []),
-  ]
-}
+import { deviceParts } from './fault-device.ts'
+import { limits, sourceParts } from './fault-source.ts'
+import { buildPart, celsiusPart, lengthPart, metalPart, number, pair, sizePart } from './parts.ts'
+import type { ChoicePart, FieldPart, Form, Group } from './parts.ts'
 
 const bond: ChoicePart = {
   kind: 'choice',
@@ -99,65 +17,6 @@ const bond: ChoicePart = {
     { value: 'rods', label: 'In the source, rods only', note: 'no grounding conductor between' },
     { value: 'none', label: 'Nowhere', note: 'floating' },
   ],
-}
-
-function deviceParts(values: Flat): FieldPart[] {
-  const kind = values['device.kind']
-  const device: ChoicePart = {
-    kind: 'choice',
-    name: 'device.kind',
-    label: 'Breaker or fuse',
-    look: 'select',
-    ways: [
-      { value: 'ul489', label: 'Breaker, UL 489' },
-      { value: 'iec60898', label: 'Breaker, IEC 60898' },
-      { value: 'ul248', label: 'Fuse, UL 248' },
-      { value: 'gG', label: 'Fuse, IEC 60269 gG' },
-    ],
-    brings: {
-      ul489: {
-        'device.amps': '20',
-        'device.magneticLeast': String(typicalMagnetic.least),
-        'device.magneticMost': String(typicalMagnetic.most),
-      },
-      iec60898: { 'device.amps': '16', 'device.curve': 'B' },
-      ul248: { 'device.amps': '20' },
-      gG: { 'device.rating': '16' },
-    },
-  }
-  if (kind === 'gG')
-    return [
-      device,
-      {
-        kind: 'choice',
-        name: 'device.rating',
-        label: 'Rating',
-        look: 'select',
-        ways: gGRatings.map((value) => ({ value, label: `${value} A` })),
-      },
-    ]
-  const amps = number('device.amps', 'Rating', 'A')
-  if (kind === 'iec60898')
-    return [
-      device,
-      amps,
-      {
-        kind: 'choice',
-        name: 'device.curve',
-        label: 'Type',
-        look: 'ways',
-        ways: ['B', 'C', 'D'].map((value) => ({ value, label: value })),
-      },
-    ]
-  if (kind === 'ul248') return [device, amps]
-  return [
-    device,
-    amps,
-    pair(
-      number('device.magneticLeast', 'Trips at once from', '×', 'times its rating; 5 to 10 is typical'),
-      number('device.magneticMost', 'Surely from', '×', 'from its time-current curve'),
-    ),
-  ]
 }
 
 const leakage: ChoicePart = {

@@ -142,3 +142,17 @@ export const celsiusPart: NumberPart = {
     { label: '75', value: '75' },
   ],
 }
+
+/** A number field in short. */
+export const number = (name: string, label: string, unit: string, help?: string): NumberPart => ({
+  kind: 'number',
+  name,
+  label,
+  unit,
+  ...(help !== undefined && { help }),
+})
+/** Two fields side by side. */
+export const pair = (one: NumberPart | ChoicePart, other: NumberPart | ChoicePart): FieldPart => ({
+  kind: 'pair',
+  parts: [one, other],
+})
