@@ -11,6 +11,10 @@ export type Settings = {
   /** The sheet each page had open. */
   openTriage: string
   openDiagnosis: string
+  /** Feet and AWG, or meters and mm²: for the worksheets. Parse it again. */
+  worksheetUnits: unknown
+  /** What was last typed into each worksheet. Parse it again. */
+  [worksheet: `worksheet.${string}`]: unknown
 }
 
 /** A remembered value, or undefined. */

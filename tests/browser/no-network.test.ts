@@ -51,6 +51,8 @@ describe('one visit to the front page, then the server stops', () => {
     ['/causes/open-ground', 'Ground wire open to this receptacle'],
     ['/tests/tester-lamps', /tester/i],
     ['/editions', 'Edition 1'],
+    ['/worksheets', 'Worksheets'],
+    ['/worksheets/fault-clearing', 'What clears a fault'],
     ['/no-such-page', 'There is no such page'],
   ])('%s opens cold', async (path, title) => {
     const page = await cold(device, path)

@@ -47,6 +47,7 @@ test('neither search, nor Markdown, nor the tech’s pages are part of it', asyn
     'src/diagnosis/diagnosis.page.tsx',
     'src/articles/article.page.tsx',
     'src/editions/editions.page.tsx',
+    'src/worksheets/worksheet.page.tsx',
   ])
     expect([...check]).not.toContain(page)
 })
