@@ -1,6 +1,7 @@
 import type { Edition } from '../../../rules/edition/open.ts'
 import { bitsOf } from './bits.ts'
 import type { Bits } from './bits.ts'
+import { withSecondOpinion } from './second-opinion.ts'
 import { countModel } from './count.ts'
 import { computedGroups } from './plan.ts'
 
@@ -29,7 +30,7 @@ export function fittedBits(edition: Edition, seed = fitSeed, each = fitEach): Fi
       if (plan.byHand?.includes(tally.rule)) continue
       const says = bitsOf(tally, plan, edition.causeIds, written(tally.rule))
       if (says === undefined) tooRare.push(tally.rule)
-      else bits.set(tally.rule, says)
+      else bits.set(tally.rule, withSecondOpinion(tally.rule, says, edition.causeIds))
     }
   }
   return { bits, weights: outcomes.weights(), tooRare }

@@ -129,7 +129,7 @@ export const computedGroups: readonly Computed[] = [
     asWritten: showNowhere,
     because:
       'Told by people: now and then wrong, and never worth more than three bits. What shows nowhere has no extent ' +
-      'to compute; there half of what the trade says stands, since who finds nothing wrong says anything.',
+      'to compute; there what the trade says stands.',
   },
   {
     group: 'lights',
