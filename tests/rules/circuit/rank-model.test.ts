@@ -92,8 +92,9 @@ describe('causes that the findings at hand can’t part stand near even, and the
     ['rod-only-return', 'double-bond', alone, generatorPanel],
   ] as const)('%s, not %s', async (truth, other, taken, context) => {
     const { before, after } = await parted(context, truth, other, taken)
-    expect(before).toBeGreaterThan(1 / 4)
-    expect(before).toBeLessThan(4)
+    // Two bits at most: an open neutral, say, looks swapped only while something is plugged in, one time in four.
+    expect(before).toBeGreaterThanOrEqual(1 / 4)
+    expect(before).toBeLessThanOrEqual(4)
     expect(after).toBeGreaterThanOrEqual(4)
   })
 })
