@@ -1,7 +1,7 @@
 /** The conductors in circuit while certain sources are live and the switches, cords and relays are one way. */
 import { pointsApart } from './joined.ts'
 import type { Joined } from './joined.ts'
-import { isJoined, relayClosed, switchKey, way } from './state.ts'
+import { isChosen, isJoined, relayClosed } from './state.ts'
 import type { State } from './state.ts'
 import type { PowerPart, Source, Transformer } from './system.ts'
 import type { Bond, FeedAt, Wiring } from './wiring.ts'
@@ -20,18 +20,12 @@ export type Circuit = {
   reached: ReadonlySet<string>
   /** Where power is used: panels, receptacles, a transformer's primary; a source by itself where it feeds nothing. */
   places: readonly PowerPart[]
-  neutral: Joined
-  /** By wire and raceway; soil is left out. */
+  /** Which parts' grounds are joined by wire or raceway; soil is left out. */
   ground: Joined
-  /** Numbers of points: a part's neutral and ground have the same; the end of a run at a switch has its own. */
-  point: (partId: string) => number
-  endOf: (at: FeedAt) => number
-  /** Neutral points that are one piece of metal, with no run between them. */
-  bar: Joined
-  /** The two points that a run's neutral joins, where it has one and is there. */
-  neutralOf: (at: FeedAt) => readonly [number, number] | undefined
   /** Whether a neutral point is joined to the live source's neutral. */
   onNeutral: (point: number) => boolean
+  /** The same with the neutrals of some runs cut, to see what lies behind them. */
+  onNeutralBut: (cut: readonly FeedAt[]) => (point: number) => boolean
   /** The bonds whose neutral side is. */
   bonds: readonly Bond[]
 }
@@ -47,7 +41,7 @@ function follow(wiring: Wiring, live: readonly Live[], state: State) {
   for (let at = ahead.shift(); at !== undefined; at = ahead.shift()) {
     if (!isJoined(at, state)) continue
     const { to } = at
-    if (to.kind === 'switch' && way(state, switchKey(to.id)) !== at.input) {
+    if (!isChosen(at, state)) {
       waiting.push(at)
       continue
     }
@@ -60,52 +54,50 @@ function follow(wiring: Wiring, live: readonly Live[], state: State) {
   return { carrying, waiting, reached }
 }
 
-/**
- * The circuit of one state.
- * @param without keys of runs whose neutral counts as cut, to see what lies behind them
- */
-export function circuitOf(
-  wiring: Wiring,
-  live: readonly Live[],
-  state: State,
-  without: ReadonlySet<string> = new Set(),
-): Circuit {
-  const ids = [...wiring.parts.keys()]
-  const number = new Map(ids.map((id, i) => [id, i]))
-  const feedNumber = new Map(wiring.feeds.map(({ key }, i) => [key, ids.length + i]))
-  const point = (id: string) => number.get(id) ?? -1
-  // A switch's inputs and a transformer's primary end at points of their own; elsewhere a run ends at its part.
-  const endOf = ({ key, to }: FeedAt) =>
-    to.kind === 'switch' || to.kind === 'transformer' ? (feedNumber.get(key) ?? -1) : point(to.id)
-  const neutral = pointsApart(ids.length + wiring.feeds.length)
-  const ground = pointsApart(ids.length)
-  const bar = pointsApart(ids.length + wiring.feeds.length)
-  const neutralOf = (at: FeedAt): readonly [number, number] | undefined => {
-    const { feed, to, key } = at
-    const from = wiring.parts.get(feed.from)
-    const landsAt = to.kind === 'receptacle' ? (to.neutralAt ?? feed.from) : feed.from
-    const has = feed.neutral && !(from?.kind === 'source' && from.volts === '240') && number.has(landsAt)
-    return has && !without.has(key) && isJoined(at, state) ? [point(landsAt), endOf(at)] : undefined
-  }
+/** Which neutral points are joined, with the neutrals of some runs cut. */
+function neutralJoined(wiring: Wiring, state: State, cut: readonly FeedAt[]): Joined {
+  const joined = pointsApart(wiring.neutralPoints)
   for (const at of wiring.feeds) {
-    const { feed, to, input } = at
-    const ends = neutralOf(at)
-    if (ends !== undefined) neutral.join(...ends)
-    if (feed.ground && isJoined(at, state)) ground.join(point(feed.from), point(to.id))
-    if (to.kind === 'switch' && (to.neutral === 'solid' || way(state, switchKey(to.id)) === input))
-      for (const joined of [neutral, bar]) joined.join(endOf(at), point(to.id))
+    const { neutral, to, end } = at
+    if (neutral !== undefined && isJoined(at, state) && !cut.includes(at)) joined.join(...neutral)
+    if (to.kind === 'switch' && (to.neutral === 'solid' || isChosen(at, state)))
+      joined.join(end, wiring.point(to.id))
   }
-  for (const { id } of wiring.parts.values())
-    for (const other of wiring.group(id))
-      for (const joined of [neutral, bar, ground]) joined.join(point(id), point(other.id))
-  for (const { from, to } of wiring.groundWires) ground.join(point(from), point(to))
+  joinGroups(wiring, joined)
+  return joined
+}
 
+/** Outputs of sources in parallel are one piece of metal. */
+function joinGroups({ groups, point }: Wiring, joined: Joined): void {
+  for (const [first, ...others] of groups)
+    for (const { id } of others) if (first !== undefined) joined.join(point(first.id), point(id))
+}
+
+function groundJoined(wiring: Wiring, state: State): Joined {
+  const { parts, feeds, groundWires, point } = wiring
+  const joined = pointsApart(parts.size)
+  for (const at of feeds)
+    if (at.feed.ground && isJoined(at, state)) joined.join(point(at.feed.from), point(at.to.id))
+  for (const { from, to } of groundWires) joined.join(point(from), point(to))
+  joinGroups(wiring, joined)
+  return joined
+}
+
+/** The circuit of one state. */
+export function circuitOf(wiring: Wiring, live: readonly Live[], state: State): Circuit {
+  const { point } = wiring
   const { carrying, waiting, reached } = follow(wiring, live, state)
-  const roots = new Set<number>()
   const withoutNeutral = live.every(({ volts }) => volts === '240')
-  if (!withoutNeutral) for (const { id } of live) roots.add(neutral.of(point(id)))
-  for (const { to } of carrying) if (to.kind === 'autotransformer') roots.add(neutral.of(point(to.id)))
-  const onNeutral = (at: number) => roots.has(neutral.of(at))
+  const roots = [
+    ...(withoutNeutral ? [] : live.map(({ id }) => point(id))),
+    ...carrying.flatMap(({ to }) => (to.kind === 'autotransformer' ? [point(to.id)] : [])),
+  ]
+  const onNeutralBut = (cut: readonly FeedAt[]) => {
+    const joined = neutralJoined(wiring, state, cut)
+    const own = roots.map(joined.of)
+    return (at: number) => own.includes(joined.of(at))
+  }
+  const onNeutral = onNeutralBut([])
   const places = carrying
     .map(({ to }) => to)
     .filter(({ kind }) => kind === 'panel' || kind === 'receptacle' || kind === 'transformer')
@@ -123,13 +115,9 @@ export function circuitOf(
     waiting,
     reached,
     places: [...places, ...alone].sort(sameOrder),
-    neutral,
-    ground,
-    bar,
-    neutralOf,
-    point,
-    endOf,
+    ground: groundJoined(wiring, state),
     onNeutral,
+    onNeutralBut,
     bonds: wiring.bonds.filter((bond) => closed(bond) && onNeutral(point(bond.onto))),
   }
 }

@@ -13,7 +13,8 @@ export type Count = {
 /** Which exception lets this bond stand beside another, if one does. */
 function exceptionOf(circuit: Circuit, bond: Bond): 'outbuilding' | 'existing-range' | undefined {
   const { part } = bond
-  const { ground, point, bonds, reached } = circuit
+  const { ground, bonds, reached } = circuit
+  const { point } = circuit.wiring
   if (!reached.has(part.id) || (part.kind !== 'panel' && part.kind !== 'receptacle')) return undefined
   // All of them hold only where no metal joins this bond's ground to another's: else the two share the current.
   const joined = bonds.some(

@@ -7,7 +7,8 @@ import { factor } from '../circuit/solve.ts'
 import type { Circuit } from './circuit.ts'
 import { pointsApart } from './joined.ts'
 import { wayTo } from './paths.ts'
-import { isJoined } from './state.ts'
+import { withoutDeadEnds } from './loops-only.ts'
+import { isChosen, isJoined } from './state.ts'
 import { gauges, millimeters } from './system.ts'
 import type { PowerPart, Run, System } from './system.ts'
 
@@ -48,13 +49,17 @@ export function runOhms(run: Run | undefined, units: System['units']): { neutral
  * Nodes of the network. What has no run between it is one node: the bars of a panel, both sides of a bond, the cases
  * of sources that stand side by side.
  */
-function nodesOf({ wiring, bar, bonds, point }: Circuit) {
-  const grounds = wiring.parts.size + wiring.feeds.length
+function nodesOf({ wiring, state, bonds }: Circuit) {
+  const { point, neutralPoints: grounds } = wiring
   const one = pointsApart(grounds + wiring.parts.size)
-  for (let i = 0; i < grounds; i++) one.join(i, bar.of(i))
+  for (const at of wiring.feeds)
+    if (at.to.kind === 'switch' && (at.to.neutral === 'solid' || isChosen(at, state)))
+      one.join(at.end, point(at.to.id))
   for (const { part, onto } of bonds) one.join(point(onto), grounds + point(part.id))
-  for (const { id } of wiring.parts.values())
-    for (const other of wiring.group(id)) one.join(grounds + point(id), grounds + point(other.id))
+  for (const [first, ...others] of wiring.groups)
+    for (const { id } of others)
+      for (const offset of [0, grounds])
+        if (first !== undefined) one.join(offset + point(first.id), offset + point(id))
   return {
     neutralAt: (at: number) => `node ${one.of(at)}`,
     groundAt: (partId: string) => `node ${one.of(grounds + point(partId))}`,
@@ -64,29 +69,28 @@ function nodesOf({ wiring, bar, bonds, point }: Circuit) {
 type Path = { name: string; key: string; from: string; to: string; through: 'wire' | 'soil' }
 
 /** The network of neutrals, grounds and rods, with the live source between its neutral and a hot of no resistance. */
-function branchesOf(circuit: Circuit): { branches: Branch[]; wires: Path[]; assumed: boolean } {
+function branchesOf(circuit: Circuit, { neutralAt, groundAt }: ReturnType<typeof nodesOf>) {
   const { wiring, state, live } = circuit
   const { units } = wiring.system
-  const { neutralAt, groundAt } = nodesOf(circuit)
   const branches: Branch[] = []
   const wires: Path[] = []
-  let assumed = false
+  const without = new Set<string>()
   const add = (name: string, from: string, to: string, ohms: number) =>
     from !== to && branches.push({ kind: 'resistance', name, from, to, ohms })
   for (const at of wiring.feeds) {
     const { feed, key, to } = at
     if (!isJoined(at, state)) continue
-    if (feed.run === undefined) assumed = true
+    if (feed.run === undefined) for (const wire of ['neutral', 'ground']) without.add(`${wire} ${key}`)
     const ohms = runOhms(feed.run, units)
-    const ends = circuit.neutralOf(at)
-    if (ends !== undefined) add(`neutral ${key}`, neutralAt(ends[0]), neutralAt(ends[1]), ohms.neutral)
+    if (at.neutral !== undefined)
+      add(`neutral ${key}`, neutralAt(at.neutral[0]), neutralAt(at.neutral[1]), ohms.neutral)
     if (feed.ground) {
       add(`ground ${key}`, groundAt(feed.from), groundAt(to.id), ohms.ground)
       wires.push({ name: `ground ${key}`, key, from: feed.from, to: to.id, through: 'wire' })
     }
   }
   for (const { id, from, to, run } of wiring.groundWires) {
-    if (run === undefined) assumed = true
+    if (run === undefined) without.add(`ground ${id}`)
     add(`ground ${id}`, groundAt(from), groundAt(to), runOhms(run, units).ground)
     wires.push({ name: `ground ${id}`, key: id, from, to, through: 'wire' })
   }
@@ -101,14 +105,14 @@ function branchesOf(circuit: Circuit): { branches: Branch[]; wires: Path[]; assu
     branches.push({
       kind: 'source',
       name: 'supply',
-      from: neutralAt(circuit.point(at)),
+      from: neutralAt(wiring.point(at)),
       to: 'hot',
       volts: 120,
       degrees: 0,
       ohms: leastOhms,
     })
   }
-  return { branches, wires, assumed }
+  return { branches, wires, without }
 }
 
 /**
@@ -119,16 +123,20 @@ export function groundCurrent(circuit: Circuit): GroundCurrent | undefined {
   const { bonds, places, wiring } = circuit
   const loaded = places.filter(
     (place) =>
-      (place.kind === 'panel' || place.kind === 'receptacle') && circuit.onNeutral(circuit.point(place.id)),
+      (place.kind === 'panel' || place.kind === 'receptacle') && circuit.onNeutral(wiring.point(place.id)),
   )
   if (bonds.length < 2 || loaded.length === 0) return undefined
-  const { branches, wires, assumed } = branchesOf(circuit)
-  const { neutralAt } = nodesOf(circuit)
+  const nodes = nodesOf(circuit)
+  const { branches: all, wires, without } = branchesOf(circuit, nodes)
+  const supply = all.find(({ name }) => name === 'supply')
+  const { branches, hangsFrom } = withoutDeadEnds(all, new Set(supply && [supply.from, supply.to]))
   const network = factor({ hertz: 60, branches })
   const nameOf = (id: string) => wiring.parts.get(id)?.name ?? id
   const known = new Set(branches.map(({ name }) => name))
+  const assumed = branches.some(({ name }) => without.has(name))
+  const nodeOf = ({ id }: PowerPart) => hangsFrom(nodes.neutralAt(wiring.point(id)))
   const across = (place: PowerPart): GroundCurrent => {
-    const node = neutralAt(circuit.point(place.id))
+    const node = nodeOf(place)
     // Some amps are drawn, whatever the wires leave of them; everything is then scaled to the load's.
     const held = network.loaded([{ from: 'hot', to: node, ohms: 10 }])
     const drawn = magnitude(held.between('hot', node)) / 10
@@ -147,8 +155,10 @@ export function groundCurrent(circuit: Circuit): GroundCurrent | undefined {
     return { at: place.name, loadAmps, paths, most, assumed }
   }
   const farther = (a: PowerPart, b: PowerPart) => wayTo(circuit, b).length - wayTo(circuit, a).length
-  return [...loaded]
-    .sort((a, b) => farther(a, b) || (a.id < b.id ? -1 : 1))
+  const farthest = [...loaded].sort((a, b) => farther(a, b) || (a.id < b.id ? -1 : 1))
+  // Places that hang from one point send the same over ground.
+  return farthest
+    .filter((place, i) => farthest.findIndex((other) => nodeOf(other) === nodeOf(place)) === i)
     .map(across)
     .reduce((worst, one) => (one.most > worst.most + 1e-9 ? one : worst))
 }

@@ -4,7 +4,8 @@ import type { PowerPart } from './system.ts'
 
 /** `metal`: by wire to a bond in circuit; `soil`: by rods alone; `none`. */
 export function groundPathOf(circuit: Circuit, { id }: PowerPart): 'metal' | 'soil' | 'none' {
-  const { ground, point, bonds, wiring } = circuit
+  const { ground, bonds, wiring } = circuit
+  const { point } = wiring
   const own = ground.of(point(id))
   const ends = new Set(bonds.map(({ part }) => ground.of(point(part.id))))
   if (ends.has(own)) return 'metal'

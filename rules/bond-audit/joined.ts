@@ -6,7 +6,8 @@ export type Joined = {
 }
 
 export function pointsApart(count: number): Joined {
-  const up = Int32Array.from({ length: count }, (_, i) => i)
+  const up = new Int32Array(count)
+  for (let i = 0; i < count; i++) up[i] = i
   const of = (point: number): number => {
     let at = point
     while (up[at] !== at) at = up[at] = up[up[at]!]!

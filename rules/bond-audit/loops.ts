@@ -1,5 +1,5 @@
 import { pointsApart } from './joined.ts'
-import { cordKey, switchKey } from './state.ts'
+import { switchKey } from './device-keys.ts'
 import type { Wiring } from './wiring.ts'
 
 /**
@@ -7,23 +7,22 @@ import type { Wiring } from './wiring.ts'
  * the same two). Of these, two that are another way at once can do what neither does alone.
  */
 export function devicesOnLoops(wiring: Wiring): ReadonlySet<string> {
-  const ids = [...wiring.parts.keys()]
-  const number = new Map(ids.map((id, i) => [id, i]))
+  const { point, parts, groups } = wiring
   const edges = wiring.feeds.flatMap((at) => {
     const apart = at.to.kind === 'receptacle' && at.to.neutralAt !== undefined ? [at.to.neutralAt] : []
     return [at.feed.from, ...apart].map((from) => ({
       at,
-      from: number.get(from) ?? 0,
-      to: number.get(at.to.id) ?? 0,
+      from: point(from),
+      to: point(at.to.id),
     }))
   })
   // A run is on a loop when its ends stay joined without it.
   const onLoop = edges.filter((edge) => {
-    const joined = pointsApart(ids.length)
-    for (const id of ids)
-      for (const one of wiring.group(id)) joined.join(number.get(id) ?? 0, number.get(one.id) ?? 0)
+    const joined = pointsApart(parts.size)
+    for (const [first, ...others] of groups)
+      for (const { id } of others) if (first !== undefined) joined.join(point(first.id), point(id))
     for (const other of edges) if (other !== edge) joined.join(other.from, other.to)
     return joined.of(edge.from) === joined.of(edge.to)
   })
-  return new Set(onLoop.flatMap(({ at }) => [cordKey(at.key), switchKey(at.to.id), switchKey(at.feed.from)]))
+  return new Set(onLoop.flatMap(({ at }) => [at.cord, at.position, switchKey(at.feed.from)]))
 }

@@ -2,7 +2,7 @@
 import type { Live } from './circuit.ts'
 import type { Mode } from './modes.ts'
 import { listed } from './phrases.ts'
-import { switchKey, way } from './state.ts'
+import { way } from './state.ts'
 import type { Device, State } from './state.ts'
 import type { PowerPart } from './system.ts'
 import type { FeedAt, Wiring } from './wiring.ts'
@@ -62,9 +62,9 @@ export function modeName({ circuit: { wiring, live, state }, other }: Mode): str
 }
 
 /** What its way is: the switches it passes, one after another. Empty where it passes none. */
-export function modeDetail({ circuit: { wiring, carrying, state } }: Mode): string {
-  const passed = carrying.flatMap(({ to, feed, input }) => {
-    if (to.kind !== 'switch' || way(state, switchKey(to.id)) !== input) return []
+export function modeDetail({ circuit: { wiring, carrying } }: Mode): string {
+  const passed = carrying.flatMap(({ to, feed }) => {
+    if (to.kind !== 'switch') return []
     const inverter = to.inverter === undefined ? undefined : wiring.parts.get(to.inverter)
     if (to.operated !== 'built-in' || inverter === undefined)
       return [`${to.name} on ${wiring.parts.get(feed.from)?.name ?? feed.from}`]

@@ -10,7 +10,7 @@
 import { circuitOf } from './circuit.ts'
 import type { Circuit, Live } from './circuit.ts'
 import { devicesOnLoops } from './loops.ts'
-import { cordKey, devicesOf, switchKey } from './state.ts'
+import { devicesOf } from './state.ts'
 import type { Device, State } from './state.ts'
 import type { Source, System } from './system.ts'
 import { wiringOf } from './wiring.ts'
@@ -42,12 +42,11 @@ function restState(wiring: Wiring, live: readonly Live[]): State {
   const passed = new Set<string>()
   for (let at = ahead.shift(); at !== undefined; at = ahead.shift()) {
     if (at.feed.joined === 'taken-away') continue
-    if (at.feed.joined === 'cord') state.set(cordKey(at.key), 1)
+    if (at.feed.joined === 'cord') state.set(at.cord, 1)
     const { to } = at
     if (to.kind === 'switch') {
-      const key = switchKey(to.id)
-      if (state.has(key)) continue
-      state.set(key, at.input)
+      if (state.has(at.position)) continue
+      state.set(at.position, at.input)
     }
     if (passed.has(to.id)) continue
     passed.add(to.id)
@@ -58,7 +57,8 @@ function restState(wiring: Wiring, live: readonly Live[]): State {
 
 /** Whether putting a device another way can change what is live or what is joined to the live neutral. */
 function touches(circuit: Circuit, device: Device): boolean {
-  const { wiring, reached, onNeutral, point, endOf, live, waiting } = circuit
+  const { wiring, reached, onNeutral, live, waiting } = circuit
+  const { point } = wiring
   if (device.kind === 'relay')
     return (
       !wiring.group(device.part.id).some(({ id }) => live.some((one) => one.id === id)) &&
@@ -66,7 +66,7 @@ function touches(circuit: Circuit, device: Device): boolean {
     )
   if (device.kind === 'cord') {
     const { feed } = device.at
-    const ends = [point(feed.from), endOf(device.at)]
+    const ends = [point(feed.from), device.at.end]
     const onBus = wiring.group(feed.from).some(({ id }) => reached.has(id))
     return reached.has(feed.from) || onBus || (feed.neutral && ends.some(onNeutral))
   }
@@ -75,7 +75,7 @@ function touches(circuit: Circuit, device: Device): boolean {
   // Neutral alone: its position counts where it moves the neutral, or a relay with it.
   const moves = part.neutral === 'switched' || part.operated === 'built-in'
   const inputs = wiring.feeds.filter(({ to }) => to.id === part.id)
-  return moves && (onNeutral(point(part.id)) || inputs.some((at) => onNeutral(endOf(at))))
+  return moves && (onNeutral(point(part.id)) || inputs.some(({ end }) => onNeutral(end)))
 }
 
 /** Ways a device can be put: a switch can stand on an input whose cord was taken away, too. */

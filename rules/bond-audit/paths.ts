@@ -1,5 +1,4 @@
 /** Ways through a circuit: from a part back to its source, and past ground-fault protection. */
-import { circuitOf } from './circuit.ts'
 import type { Circuit } from './circuit.ts'
 import type { PowerPart } from './system.ts'
 import type { Bond, FeedAt } from './wiring.ts'
@@ -50,8 +49,8 @@ function protections(circuit: Circuit): { at: PowerPart; behind: readonly FeedAt
 export function straddled(circuit: Circuit): { at: PowerPart; ahead: Bond[]; behind: Bond[] }[] {
   if (circuit.bonds.length < 2) return []
   return protections(circuit).flatMap(({ at, behind: runs }) => {
-    const cut = circuitOf(circuit.wiring, circuit.live, circuit.state, new Set(runs.map(({ key }) => key)))
-    const ahead = circuit.bonds.filter(({ onto }) => cut.onNeutral(cut.point(onto)))
+    const isAhead = circuit.onNeutralBut(runs)
+    const ahead = circuit.bonds.filter(({ onto }) => isAhead(circuit.wiring.point(onto)))
     const behind = circuit.bonds.filter((bond) => !ahead.includes(bond))
     return ahead.length > 0 && behind.length > 0 ? [{ at, ahead, behind }] : []
   })

@@ -1,4 +1,5 @@
 /** What can be one way or another while a system runs: switches, cords, and relays of sources that run beside. */
+import { relayKey, switchKey } from './device-keys.ts'
 import type { FeedAt, Wiring } from './wiring.ts'
 import type { Source, Switch } from './system.ts'
 
@@ -12,9 +13,6 @@ export type Device =
 /** Which way each device is; those left out are at 0. */
 export type State = ReadonlyMap<string, number>
 
-export const switchKey = (id: string) => `switch:${id}`
-export const cordKey = (feedKey: string) => `cord:${feedKey}`
-export const relayKey = (id: string) => `relay:${id}`
 export const way = (state: State, key: string): number => state.get(key) ?? 0
 
 /** Everything in this system that can be one way or another. */
@@ -32,13 +30,17 @@ export function devicesOf(wiring: Wiring): Device[] {
       found.push({ key: relayKey(part.id), kind: 'relay', part, ways: 2 })
   }
   for (const at of wiring.feeds)
-    if (at.feed.joined === 'cord') found.push({ key: cordKey(at.key), kind: 'cord', at, ways: 2 })
+    if (at.feed.joined === 'cord') found.push({ key: at.cord, kind: 'cord', at, ways: 2 })
   return found.sort((a, b) => (a.key < b.key ? -1 : 1))
 }
 
 /** Whether a run is there in this state. A cord that was taken away never is. */
-export const isJoined = ({ key, feed }: FeedAt, state: State): boolean =>
-  feed.joined === 'wired' || (feed.joined === 'cord' && way(state, cordKey(key)) === 1)
+export const isJoined = ({ cord, feed }: FeedAt, state: State): boolean =>
+  feed.joined === 'wired' || (feed.joined === 'cord' && way(state, cord) === 1)
+
+/** Whether the switch a run ends at stands on it; true for a run that ends elsewhere. */
+export const isChosen = ({ to, position, input }: FeedAt, state: State): boolean =>
+  to.kind !== 'switch' || way(state, position) === input
 
 /** Whether a source's bond relay is closed while these sources are live. */
 export function relayClosed(wiring: Wiring, source: Source, live: readonly string[], state: State): boolean {

@@ -1,9 +1,22 @@
 /** A system looked up by its wires: what leaves each part, who runs beside whom, which bonds there are. */
+import { cordKey, switchKey } from './device-keys.ts'
 import { feedsOf, isPower } from './system.ts'
 import type { Feed, GroundWire, PowerPart, Rod, Source, Switch, System } from './system.ts'
 
 /** One run from a part to a part, or to one input of a switch. */
-export type FeedAt = { key: string; feed: Feed; to: PowerPart; input: number }
+export type FeedAt = {
+  key: string
+  feed: Feed
+  to: PowerPart
+  input: number
+  /** Where its neutral starts and ends, as numbers of points; undefined where it has none. */
+  neutral: readonly [number, number] | undefined
+  /** Where it ends: a part's number, or at a switch and a transformer a number of its own. */
+  end: number
+  /** Names of the devices it depends on: its own cord, and the switch it ends at. */
+  cord: string
+  position: string
+}
 
 /** A place where neutral and ground are joined, or a contact that can join them. */
 export type Bond = {
@@ -21,10 +34,15 @@ export type Wiring = {
   system: System
   parts: ReadonlyMap<string, PowerPart>
   feeds: readonly FeedAt[]
+  /** Each part's number. Neutral has a point for each part, then one for each run; ground one for each part. */
+  point: (partId: string) => number
+  neutralPoints: number
   /** Runs that start at this part or at one that runs into the same wires, in the order of their keys. */
   leaving: (id: string) => readonly FeedAt[]
   /** Sources that run into the same wires, this one among them, in the order of their ids. */
   group: (id: string) => readonly Source[]
+  /** All of those groups that have two or more. */
+  groups: readonly (readonly Source[])[]
   /** The switch inside the inverter of this source's group, and which input is its own output. */
   builtIn: (id: string) => { switch: Switch; own: number } | undefined
   bonds: readonly Bond[]
@@ -84,10 +102,27 @@ function busOf(id: string, parts: ReadonlyMap<string, PowerPart>): string {
 export function wiringOf(system: System): Wiring {
   const powers = system.parts.filter(isPower)
   const parts = new Map(powers.map((part) => [part.id, part]))
+  const numbers = new Map(powers.map(({ id }, i) => [id, i]))
+  const point = (id: string) => numbers.get(id) ?? -1
   const feeds = powers
-    .flatMap((to) => feedsOf(to).map(({ key, feed, input }): FeedAt => ({ key, feed, to, input })))
+    .flatMap((to) => feedsOf(to).map((one) => ({ ...one, to })))
     .filter(({ feed }) => parts.has(feed.from))
     .sort(byKey)
+    .map((one, i): FeedAt => {
+      const { feed, to, key } = one
+      const from = parts.get(feed.from)
+      const own = to.kind === 'switch' || to.kind === 'transformer'
+      const end = own ? powers.length + i : point(to.id)
+      const landsAt = to.kind === 'receptacle' ? (to.neutralAt ?? feed.from) : feed.from
+      const has = feed.neutral && !(from?.kind === 'source' && from.volts === '240') && parts.has(landsAt)
+      return {
+        ...one,
+        end,
+        neutral: has ? [point(landsAt), end] : undefined,
+        cord: cordKey(key),
+        position: switchKey(to.id),
+      }
+    })
   const bus = new Map(powers.map(({ id }) => [id, busOf(id, parts)]))
   const leaving = grouped(feeds, ({ feed }) => bus.get(feed.from) ?? feed.from)
   const inOrder = [...powers].sort((a, b) => (a.id < b.id ? -1 : 1))
@@ -110,8 +145,11 @@ export function wiringOf(system: System): Wiring {
     system,
     parts,
     feeds,
+    point,
+    neutralPoints: powers.length + feeds.length,
     leaving: (id) => leaving.get(bus.get(id) ?? id) ?? [],
     group,
+    groups: [...groups.values()].filter((all) => all.length > 1),
     builtIn: (id) => builtIn.get(bus.get(id) ?? id),
     bonds,
     rods: system.parts.filter((part): part is Rod => part.kind === 'rod' && parts.has(part.at)),

@@ -12,6 +12,7 @@ import { readCase } from '../../rules/findings/parse.ts'
 import { diagnose } from '../../rules/ranking/diagnose.ts'
 import { readStarterDiagnosis } from '../editions/read-starter.ts'
 import { answerCase } from './answer.ts'
+import { measureAudit } from './measure-audit.ts'
 import { measureSearch } from './measure-search.ts'
 
 /** A sheet with nearly everything taken: the worst a screen has to keep live. */
@@ -104,4 +105,5 @@ row(
   `${rank2000.toFixed(1)} s`,
   ((rank2000 * 1000) / many / raw).toFixed(1),
 )
+measureAudit()
 await measureSearch()

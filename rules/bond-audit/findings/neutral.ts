@@ -10,7 +10,8 @@ const strays = (part: PowerPart): part is Receptacle & { neutralAt: string } =>
 
 function shared(circuit: Circuit, part: Receptacle & { neutralAt: string }): Finding {
   const [hot, neutral] = [nameOf(circuit, part.feed.from), nameOf(circuit, part.neutralAt)]
-  const sameSource = circuit.reached.has(part.neutralAt) && circuit.onNeutral(circuit.point(part.neutralAt))
+  const sameSource =
+    circuit.reached.has(part.neutralAt) && circuit.onNeutral(circuit.wiring.point(part.neutralAt))
   return {
     kind: 'shared-neutral',
     parts: [part.id, part.neutralAt],
@@ -25,7 +26,8 @@ function shared(circuit: Circuit, part: Receptacle & { neutralAt: string }): Fin
 
 /** What is wrong with neutrals other than their bonds. */
 export function neutralFindings(circuit: Circuit): Finding[] {
-  const { live, places, carrying, onNeutral, point } = circuit
+  const { live, places, carrying, onNeutral } = circuit
+  const { point } = circuit.wiring
   const names = listed(live.map(({ name }) => name))
   const derived = carrying.some(({ to }) => to.kind === 'autotransformer')
   if (live.every(({ volts }) => volts === '240') && !derived)
