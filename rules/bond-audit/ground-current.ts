@@ -155,10 +155,17 @@ export function groundCurrent(circuit: Circuit): GroundCurrent | undefined {
     return { at: place.name, loadAmps, paths, most, assumed }
   }
   const farther = (a: PowerPart, b: PowerPart) => wayTo(circuit, b).length - wayTo(circuit, a).length
-  const farthest = [...loaded].sort((a, b) => farther(a, b) || (a.id < b.id ? -1 : 1))
+  // With several neutrals apart a load may be on one that the supply's loop does not touch: it sends nothing over it.
+  const inNetwork = new Set(branches.flatMap(({ from, to }) => [from, to]))
+  const farthest = loaded
+    .filter((place) => inNetwork.has(nodeOf(place)))
+    .sort((a, b) => farther(a, b) || (a.id < b.id ? -1 : 1))
   // Places that hang from one point send the same over ground.
   return farthest
     .filter((place, i) => farthest.findIndex((other) => nodeOf(other) === nodeOf(place)) === i)
     .map(across)
-    .reduce((worst, one) => (one.most > worst.most + 1e-9 ? one : worst))
+    .reduce<GroundCurrent | undefined>(
+      (worst, one) => (worst === undefined || one.most > worst.most + 1e-9 ? one : worst),
+      undefined,
+    )
 }
