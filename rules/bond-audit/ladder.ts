@@ -1,0 +1,82 @@
+/** The ladder of a mode: neutral and ground as two rails, a rung for each bond. */
+import type { Audited } from './audit.ts'
+import { groundPathOf } from './ground-path.ts'
+import type { PowerPart, System } from './system.ts'
+import { feedsOf, isPower } from './system.ts'
+
+export type LadderPost = {
+  id: string
+  name: string
+  /** Its neutral is joined to the live one. */
+  inCircuit: boolean
+  /** Its ground finds the bond by wire. */
+  grounded: boolean
+  /** `cut`: a bond that is there, but not on this neutral now. */
+  rung: 'none' | 'in' | 'excepted' | 'cut'
+  /** A finding names it. */
+  marked: boolean
+}
+
+/** Parts in the order power takes: a part after what feeds it, else as the system lists them. */
+export function inOrder(system: System): PowerPart[] {
+  const parts = system.parts.filter(isPower)
+  const depth = new Map<string, number>()
+  const depthOf = (part: PowerPart, seen: readonly string[]): number => {
+    const known = depth.get(part.id)
+    if (known !== undefined) return known
+    const before = feedsOf(part).flatMap(({ feed }) => {
+      const from = parts.find(({ id }) => id === feed.from)
+      return from === undefined || seen.includes(from.id) ? [] : [depthOf(from, [...seen, part.id])]
+    })
+    const own = before.length === 0 ? 0 : 1 + Math.max(...before)
+    depth.set(part.id, own)
+    return own
+  }
+  parts.forEach((part) => depthOf(part, []))
+  return [...parts].sort((a, b) => (depth.get(a.id) ?? 0) - (depth.get(b.id) ?? 0))
+}
+
+/** Where a bond can be, other than a receptacle that has none: switches have none of their own. */
+const hasPost = (part: PowerPart) =>
+  part.kind !== 'switch' &&
+  (part.kind !== 'receptacle' || part.bond !== 'none' || part.neutralAt !== undefined)
+
+/** The posts of one mode, the same ones in the same order in every mode of a system. */
+export function ladderOf({ circuit, counted, excepted, findings }: Audited): LadderPost[] {
+  const { wiring, onNeutral } = circuit
+  const marked = new Set(findings.flatMap(({ parts }) => parts))
+  const own = (part: PowerPart) => wiring.bonds.find((bond) => bond.part.id === part.id)
+  return inOrder(wiring.system)
+    .filter(hasPost)
+    .map((part) => {
+      const bond = own(part)
+      const inside = part.kind === 'source' ? wiring.builtIn(part.id)?.switch.id : undefined
+      const is = (list: readonly { part: PowerPart }[]) => list.some((one) => one.part.id === part.id)
+      return {
+        id: part.id,
+        name: part.name,
+        // An inverter with a transfer inside is on the neutral that its output is on.
+        inCircuit:
+          onNeutral(wiring.point(part.id)) || (inside !== undefined && onNeutral(wiring.point(inside))),
+        grounded: groundPathOf(circuit, part) === 'metal',
+        rung: is(counted) ? 'in' : is(excepted) ? 'excepted' : bond === undefined ? 'none' : 'cut',
+        marked: marked.has(part.id),
+      }
+    })
+}
+
+/** The ladder in words, for whoever can't see it. */
+export function ladderWords(posts: readonly LadderPost[]): string {
+  const rung = {
+    in: 'a bond in circuit',
+    excepted: 'a bond that may stay',
+    cut: 'a bond, cut off',
+    none: 'no bond',
+  }
+  return posts
+    .map(
+      ({ name, inCircuit, grounded, rung: is }) =>
+        `${name}: neutral ${inCircuit ? 'in circuit' : 'cut off'}, ${rung[is]}${grounded ? '' : ', no wire to the bond'}`,
+    )
+    .join('; ')
+}
