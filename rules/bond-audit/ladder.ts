@@ -1,8 +1,9 @@
 /** The ladder of a mode: neutral and ground as two rails, a rung for each bond. */
 import type { Audited } from './audit.ts'
+import { levelsOf } from './levels.ts'
 import { groundPathOf } from './ground-path.ts'
 import type { PowerPart, System } from './system.ts'
-import { feedsOf, isPower } from './system.ts'
+import { isPower } from './system.ts'
 
 export type LadderPost = {
   id: string
@@ -17,23 +18,11 @@ export type LadderPost = {
   marked: boolean
 }
 
-/** Parts in the order power takes: a part after what feeds it, else as the system lists them. */
+/** Parts in the order power takes: a part after what feeds it, a source just before; else as the system lists them. */
 export function inOrder(system: System): PowerPart[] {
   const parts = system.parts.filter(isPower)
-  const depth = new Map<string, number>()
-  const depthOf = (part: PowerPart, seen: readonly string[]): number => {
-    const known = depth.get(part.id)
-    if (known !== undefined) return known
-    const before = feedsOf(part).flatMap(({ feed }) => {
-      const from = parts.find(({ id }) => id === feed.from)
-      return from === undefined || seen.includes(from.id) ? [] : [depthOf(from, [...seen, part.id])]
-    })
-    const own = before.length === 0 ? 0 : 1 + Math.max(...before)
-    depth.set(part.id, own)
-    return own
-  }
-  parts.forEach((part) => depthOf(part, []))
-  return [...parts].sort((a, b) => (depth.get(a.id) ?? 0) - (depth.get(b.id) ?? 0))
+  const level = levelsOf(parts)
+  return [...parts].sort((a, b) => (level.get(a.id) ?? 0) - (level.get(b.id) ?? 0))
 }
 
 /** Where a bond can be, other than a receptacle that has none: switches have none of their own. */

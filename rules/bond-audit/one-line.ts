@@ -1,5 +1,6 @@
 /** The one-line picture of a mode: what stands where, px. The page draws it and decides nothing. */
 import type { Audited } from './audit.ts'
+import { levelsOf } from './levels.ts'
 import { isJoined } from './state.ts'
 import { feedsOf, isPower } from './system.ts'
 import type { PowerPart, System } from './system.ts'
@@ -32,32 +33,6 @@ export type OneLine = {
 }
 
 type Spot = { id: string; level: number; lane: number }
-
-/** A column for each part: after what feeds it; a source just before the first that it feeds. */
-function levelsOf(parts: readonly PowerPart[]): Map<string, number> {
-  const level = new Map<string, number>()
-  const byId = new Map(parts.map((part) => [part.id, part]))
-  const of = (part: PowerPart, seen: ReadonlySet<string>): number => {
-    const known = level.get(part.id)
-    if (known !== undefined) return known
-    const before = feedsOf(part)
-      .map(({ feed }) => byId.get(feed.from))
-      .filter((from) => from !== undefined && !seen.has(from.id))
-      .map((from) => (from === undefined ? 0 : of(from, new Set([...seen, part.id]))))
-    const own = before.length === 0 ? 0 : Math.max(...before) + 1
-    level.set(part.id, own)
-    return own
-  }
-  parts.forEach((part) => of(part, new Set([part.id])))
-  for (const part of parts) {
-    if (feedsOf(part).length > 0) continue
-    const next = parts.flatMap((other) =>
-      feedsOf(other).some(({ feed }) => feed.from === part.id) ? [level.get(other.id) ?? 1] : [],
-    )
-    if (next.length > 0) level.set(part.id, Math.min(...next) - 1)
-  }
-  return level
-}
 
 /**
  * Places parts in columns and lanes. A run that passes a column takes a lane of its own there, so that no line
@@ -103,24 +78,31 @@ function spotsOf(parts: readonly PowerPart[]): { spots: Map<string, Spot>; via: 
   return { spots, via }
 }
 
-const sizes = {
-  lying: { box: { width: 124, height: 48 }, level: 164, lane: 88 },
-  standing: { box: { width: 106, height: 48 }, level: 100, lane: 117 },
-} as const
+const boxHeight = 68
 const edge = 10
+/** Sizes: lying boxes are as wide as two words; standing ones share the room there is. */
+function sizesFor(way: Way, lanes: number, room: number) {
+  if (way === 'lying') return { box: { width: 112, height: boxHeight }, level: 148, lane: 92 }
+  const lane = Math.max(66, Math.min(160, (room - 2 * edge + 10) / lanes))
+  return { box: { width: lane - 10, height: boxHeight }, level: 112, lane }
+}
+export type Way = 'lying' | 'standing'
 
 /**
  * Lays a mode out.
  * @param way `lying`: power goes to the right; `standing`: down, for a phone
+ * @param room px that a standing picture may be wide
  */
 export function oneLineOf(
   { circuit, counted, excepted, findings }: Audited,
-  way: keyof typeof sizes,
+  way: Way,
+  room: number,
 ): OneLine {
   const { wiring, state, reached, carrying, live } = circuit
   const parts = wiring.system.parts.filter(isPower)
   const { spots, via } = spotsOf(parts)
-  const { box, level, lane } = sizes[way]
+  const lanes = 1 + Math.max(0, ...[...spots.values()].map((spot) => spot.lane))
+  const { box, level, lane } = sizesFor(way, lanes, room)
   const at = (id: string): readonly [number, number] => {
     const spot = spots.get(id) ?? { level: 0, lane: 0 }
     const [along, across] = [spot.level * level, spot.lane * lane]
@@ -163,7 +145,7 @@ export function oneLineOf(
   const far = (axis: 'x' | 'y') => Math.max(0, ...boxes.map((one) => one[axis]))
   return {
     width: far('x') + box.width / 2 + edge,
-    height: far('y') + box.height / 2 + edge + 14,
+    height: far('y') + box.height / 2 + edge,
     box,
     boxes,
     // What is live is drawn last, over the rest.
@@ -171,8 +153,8 @@ export function oneLineOf(
   }
 }
 
-/** Letters of one line of a box, and its lines at most. */
-export const boxLetters = { lying: 16, standing: 14 } as const
+/** Letters of 13 px that one line of a box has room for. */
+export const boxLetters = ({ box }: OneLine): number => Math.floor((box.width - 10) / 7.3)
 
 /** A name in up to two lines; what does not fit ends in an ellipsis. */
 export function nameLines(name: string, letters: number): string[] {

@@ -15,6 +15,7 @@ const forHomeowners = [
 const forStaff = [
   ['/diagnosis', 'Diagnosis'],
   ['/articles', 'Articles'],
+  ['/worksheets/bond-audit', 'Worksheets'],
   ['/editions', 'Editions'],
 ] as const
 const forAdmins = [...forStaff, ['/shop/people', 'Our shop']] as const

@@ -18,13 +18,14 @@ const articles = () => import('../articles/articles.page.tsx')
 const article = () => import('../articles/article.page.tsx')
 const cause = () => import('../articles/cause.page.tsx')
 const test = () => import('../articles/test.page.tsx')
+const bondAudit = () => import('../bond-audit/bond-audit.page.tsx')
 
 /**
  * The tech's page and what the shop knows, for a tab that stays open where no worker can keep the pages. The edition's
  * files come beside it, with the first look at what is in force. Not for whoever pays by the megabyte.
  */
 export const bringLibrary = async () =>
-  savesData() ? [] : Promise.all([diagnosis(), articles(), article(), cause(), test()])
+  savesData() ? [] : Promise.all([diagnosis(), articles(), article(), cause(), test(), bondAudit()])
 
 /** Every page, fetched when it is first opened. Loaders never wait for data: pages own waiting, failing, no network. */
 export const routes: RouteObject[] = [
@@ -53,6 +54,7 @@ export const routes: RouteObject[] = [
           { path: 'articles/:slug', lazy: article },
           { path: 'causes/:id', lazy: cause },
           { path: 'tests/:id', lazy: test },
+          { path: 'worksheets/bond-audit', lazy: bondAudit },
           { path: 'editions', lazy: () => import('../editions/editions.page.tsx') },
           { path: 'sign-in', lazy: () => import('../people/sign-in.page.tsx') },
           { path: 'sign-up', lazy: () => import('../people/sign-up.page.tsx') },

@@ -11,6 +11,8 @@ export type Settings = {
   /** The sheet each page had open. */
   openTriage: string
   openDiagnosis: string
+  /** The system last audited for its bonds, as its address writes it. */
+  bondAudit: string
 }
 
 /** A remembered value, or undefined. */

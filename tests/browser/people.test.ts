@@ -64,7 +64,7 @@ describe('signing in', () => {
     await typeSignIn(page, demoPerson('tech'))
     await page.waitForURL('**/diagnosis')
     await page.getByRole('heading', { name: 'Findings sheets on this device' }).waitFor()
-    expect(await nav(page)).toEqual(['Diagnosis', 'Articles', 'Editions'])
+    expect(await nav(page)).toEqual(['Diagnosis', 'Articles', 'Worksheets', 'Editions'])
     await page.getByRole('link', { name: 'Account: Demo tech' }).click()
     await heading(page, 'Account')
     await page.getByText('Signed in as tech.').waitFor()

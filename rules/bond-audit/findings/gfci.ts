@@ -7,7 +7,7 @@ import { bondWords, listed } from '../phrases.ts'
 export const gfciFindings = (circuit: Circuit): Finding[] =>
   straddled(circuit).map(({ at, ahead, behind }) => ({
     kind: 'gfci-trips',
-    parts: [at.id, ...behind.map(({ part }) => part.id)],
+    parts: [at.id],
     says: `Neutral is grounded again behind the GFCI of ${at.name}, by ${listed(behind.map(bondWords))}; ahead of it by ${listed(ahead.map(bondWords))}.`,
     danger:
       'Part of the neutral current goes back by ground, so the GFCI trips with the first load, or with none. Whoever takes it out loses its protection and keeps the two bonds.',
