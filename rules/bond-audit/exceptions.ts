@@ -3,11 +3,11 @@ import type { Circuit } from './circuit.ts'
 import type { Count } from './count.ts'
 import { groundPathOf } from './ground-path.ts'
 import { isProtected } from './paths.ts'
-import { listed } from './phrases.ts'
+import { bondWords, listed } from './phrases.ts'
 import type { SectionId } from './standards.ts'
 
 export type Exception = {
-  kind: 'outbuilding' | 'existing-range' | 'no-ground-behind-gfci' | 'portable' | 'separated' | 'rod-with-rcd'
+  kind: 'outbuilding' | 'existing-range' | 'no-ground-behind-gfci' | 'portable' | 'bonded-outside' | 'separated' | 'rod-with-rcd'
   parts: readonly string[]
   says: string
   /** All of them must hold. */
@@ -41,13 +41,20 @@ const existingRange = (name: string, id: string): Exception => ({
   sections: ['nec-250.140', 'nec-250.142'],
 })
 
+/** A portable source that feeds plug-in loads alone. */
 const isPortable = ({ live, places }: Circuit): boolean =>
   live.every(
+    (part) => part.kind === 'source' && (part.type === 'portable-generator' || part.type === 'power-station'),
+  ) && places.every(({ kind }) => kind === 'receptacle' || kind === 'source')
+
+/** An inverter or power station without a bond of its own: whether one outside it is allowed its instructions say. */
+const isBondedOutside = ({ live }: Circuit): boolean =>
+  live.some(
     (part) =>
       part.kind === 'source' &&
-      (part.type === 'portable-generator' || part.type === 'power-station') &&
-      (part.output === 'floating' || part.output === 'isolated' || part.output === 'balanced'),
-  ) && places.every(({ kind }) => kind === 'receptacle' || kind === 'source')
+      (part.type === 'inverter' || part.type === 'power-station') &&
+      (part.output === 'floating' || part.output === 'isolated'),
+  )
 
 const isSeparated = ({ live, places }: Circuit): boolean =>
   live.some((part) => part.kind === 'source' && part.output === 'balanced') &&
@@ -61,6 +68,30 @@ export function exceptionsOf(circuit: Circuit, { counted, excepted }: Count): Ex
   )
   const names = listed(live.map(({ name }) => name))
   const ids = live.map(({ id }) => id)
+  const [only] = counted
+  if (only !== undefined && counted.length === 1 && isBondedOutside(circuit))
+    found.push({
+      kind: 'bonded-outside',
+      parts: ids,
+      says: `The one bond of ${names} is outside it: ${bondWords(only)}.`,
+      conditions: [
+        'Its instructions allow its neutral to be bonded outside it. Many isolated outputs allow none.',
+        'It is not balanced: Diagnosis released the bond by the test bulb at its own terminals, 2 V or less both ways.',
+      ],
+      sections: ['nec-250.30-1'],
+    })
+  if (counted.length === 1 && isPortable(circuit))
+    found.push({
+      kind: 'portable',
+      parts: ids,
+      says: `No rod is wanted at ${names}: it feeds plug-in loads alone.`,
+      conditions: [
+        'Only loads with cords, plugged into its own receptacles; no building wiring.',
+        'Its receptacles’ grounds and its metal are tied to its frame.',
+        'Of 15 kW or less and bonded: all its 125 V, 15 and 20 A receptacles have GFCI.',
+      ],
+      sections: ['nec-250.34', 'nec-250.34-c', 'nec-445.20'],
+    })
   if (counted.length === 0 && isPortable(circuit))
     found.push({
       kind: 'portable',

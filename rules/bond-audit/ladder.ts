@@ -12,6 +12,8 @@ export type LadderPost = {
   inCircuit: boolean
   /** Its ground finds the bond by wire. */
   grounded: boolean
+  /** The same for all posts whose grounds are joined by wire. */
+  groundGroup: number
   /** `cut`: a bond that is there, but not on this neutral now. */
   rung: 'none' | 'in' | 'excepted' | 'cut'
   /** A finding names it. */
@@ -32,7 +34,7 @@ const hasPost = (part: PowerPart) =>
 
 /** The posts of one mode, the same ones in the same order in every mode of a system. */
 export function ladderOf({ circuit, counted, excepted, findings }: Audited): LadderPost[] {
-  const { wiring, onNeutral } = circuit
+  const { wiring, onNeutral, ground } = circuit
   const marked = new Set(findings.flatMap(({ parts }) => parts))
   const own = (part: PowerPart) => wiring.bonds.find((bond) => bond.part.id === part.id)
   return inOrder(wiring.system)
@@ -48,11 +50,26 @@ export function ladderOf({ circuit, counted, excepted, findings }: Audited): Lad
         inCircuit:
           onNeutral(wiring.point(part.id)) || (inside !== undefined && onNeutral(wiring.point(inside))),
         grounded: groundPathOf(circuit, part) === 'metal',
+        groundGroup: ground.of(wiring.point(part.id)),
         rung: is(counted) ? 'in' : is(excepted) ? 'excepted' : bond === undefined ? 'none' : 'cut',
         marked: marked.has(part.id),
       }
     })
 }
+
+/**
+ * Whether a wire of ground passes between a post and the next. A group of joined grounds reaches from its first post
+ * to its last, past those between that have none.
+ */
+export function groundBetween(posts: readonly LadderPost[], after: number): boolean {
+  const before = new Set(posts.slice(0, after + 1).map(({ groundGroup }) => groundGroup))
+  return posts.slice(after + 1).some(({ groundGroup }) => before.has(groundGroup))
+}
+
+/** The same for the neutral in circuit. */
+export const neutralBetween = (posts: readonly LadderPost[], after: number): boolean =>
+  posts.slice(0, after + 1).some(({ inCircuit }) => inCircuit) &&
+  posts.slice(after + 1).some(({ inCircuit }) => inCircuit)
 
 /** The ladder in words, for whoever can't see it. */
 export function ladderWords(posts: readonly LadderPost[]): string {

@@ -1,17 +1,14 @@
+import { groundBetween, neutralBetween } from '../../rules/bond-audit/ladder.ts'
 import type { LadderPost } from '../../rules/bond-audit/ladder.ts'
 import { nameLines } from '../../rules/bond-audit/one-line.ts'
 
 const pitch = { lying: 88, standing: 40 }
 
-/** A stretch of neutral between two posts: drawn through where both are joined to the live neutral. */
-const neutralLook = (a: boolean, b: boolean) => (a && b ? 'lad-n' : 'lad-n lad-cut')
-
-/** Where the neutral in circuit begins and ends: a post between that is cut off lets the line pass by. */
-const span = (posts: readonly LadderPost[], is: (post: LadderPost) => boolean) => {
-  const at = posts.flatMap((post, i) => (is(post) ? [i] : []))
-  return { first: at[0] ?? -1, last: at.at(-1) ?? -1 }
-}
-const within = ({ first, last }: { first: number; last: number }, i: number) => i >= first && i <= last
+/** The stretch of a rail after a post. */
+const neutralLook = (posts: readonly LadderPost[], i: number) =>
+  neutralBetween(posts, i) ? 'lad-n' : 'lad-n lad-cut'
+const groundLook = (posts: readonly LadderPost[], i: number) =>
+  groundBetween(posts, i) ? 'lad-g' : 'lad-g lad-cut'
 
 const rungLook = { in: 'lad-rung', excepted: 'lad-rung lad-excepted', cut: 'lad-rung lad-off', none: '' }
 
@@ -19,7 +16,6 @@ const rungLook = { in: 'lad-rung', excepted: 'lad-rung lad-excepted', cut: 'lad-
 export function LyingLadder({ posts, amps }: { posts: readonly LadderPost[]; amps: string | undefined }) {
   const x = (i: number) => 52 + i * pitch.lying
   const [n, g] = [60, 108]
-  const [neutral, ground] = [span(posts, (post) => post.inCircuit), span(posts, (post) => post.grounded)]
   const width = x(posts.length - 1) + 46
   return (
     <svg
@@ -37,14 +33,8 @@ export function LyingLadder({ posts, amps }: { posts: readonly LadderPost[]; amp
       </text>
       {posts.slice(1).map((post, i) => (
         <g key={post.id}>
-          <path
-            className={neutralLook(within(neutral, i), within(neutral, i + 1))}
-            d={`M${x(i)} ${n}H${x(i + 1)}`}
-          />
-          <path
-            className={within(ground, i) && within(ground, i + 1) ? 'lad-g' : 'lad-g lad-cut'}
-            d={`M${x(i)} ${g}H${x(i + 1)}`}
-          />
+          <path className={neutralLook(posts, i)} d={`M${x(i)} ${n}H${x(i + 1)}`} />
+          <path className={groundLook(posts, i)} d={`M${x(i)} ${g}H${x(i + 1)}`} />
         </g>
       ))}
       {posts.map((post, i) => (
@@ -73,7 +63,6 @@ export function LyingLadder({ posts, amps }: { posts: readonly LadderPost[]; amp
 export function StandingLadder({ posts }: { posts: readonly LadderPost[] }) {
   const y = (i: number) => 44 + i * pitch.standing
   const [n, g] = [20, 72]
-  const [neutral, ground] = [span(posts, (post) => post.inCircuit), span(posts, (post) => post.grounded)]
   const height = y(posts.length - 1) + 20
   return (
     <svg
@@ -91,14 +80,8 @@ export function StandingLadder({ posts }: { posts: readonly LadderPost[] }) {
       </text>
       {posts.slice(1).map((post, i) => (
         <g key={post.id}>
-          <path
-            className={neutralLook(within(neutral, i), within(neutral, i + 1))}
-            d={`M${n} ${y(i)}V${y(i + 1)}`}
-          />
-          <path
-            className={within(ground, i) && within(ground, i + 1) ? 'lad-g' : 'lad-g lad-cut'}
-            d={`M${g} ${y(i)}V${y(i + 1)}`}
-          />
+          <path className={neutralLook(posts, i)} d={`M${n} ${y(i)}V${y(i + 1)}`} />
+          <path className={groundLook(posts, i)} d={`M${g} ${y(i)}V${y(i + 1)}`} />
         </g>
       ))}
       {posts.map((post, i) => (

@@ -266,7 +266,7 @@ export const knownAnswers: Known[] = [
     what: 'a floating inverter, its panel bonded as first disconnect',
     section: '250.30(A)(1)',
     parts: [inverter(), panel('cabin', 'inverter', { bond: true })],
-    modes: { 'On battery': '1' },
+    modes: { 'On battery': '1 +bonded-outside' },
   },
   {
     what: 'a floating inverter, nothing bonded',
@@ -278,7 +278,7 @@ export const knownAnswers: Known[] = [
     what: 'a floating inverter, bonded in the second panel only',
     section: '250.30(A)(1)',
     parts: [inverter(), panel('cabin', 'inverter'), panel('loft', 'cabin', { bond: true })],
-    modes: { 'On battery': '1 wrong-place' },
+    modes: { 'On battery': '1 wrong-place +bonded-outside' },
   },
   {
     what: 'a balanced output into a panel',
@@ -322,13 +322,13 @@ export const knownAnswers: Known[] = [
     what: 'a 120 V inverter that feeds circuits with a shared neutral',
     section: '710.15(C)',
     parts: [inverter(), panel('cabin', 'inverter', { bond: true, multiwire: true })],
-    modes: { 'On battery': '1 multiwire' },
+    modes: { 'On battery': '1 multiwire +bonded-outside' },
   },
   {
     what: 'a 120/240 V inverter that feeds circuits with a shared neutral',
     section: '210.4, 710.15(C)',
     parts: [inverter({ volts: '120/240' }), panel('cabin', 'inverter', { bond: true, multiwire: true })],
-    modes: { 'On battery': '1' },
+    modes: { 'On battery': '1 +bonded-outside' },
   },
   {
     what: 'a 240 V inverter with an autotransformer, its own bond relay off, the panel bonded',
@@ -371,7 +371,7 @@ export const knownAnswers: Known[] = [
     what: 'an inverter whose case no grounding conductor reaches',
     section: '250.4(A)(5)',
     parts: [inverter(), panel('cabin', feed('inverter', noGround), { bond: true })],
-    modes: { 'On battery': '1 ground-missing' },
+    modes: { 'On battery': '1 ground-missing +bonded-outside' },
   },
 
   // Two inverters into the same wires
@@ -473,7 +473,7 @@ export const knownAnswers: Known[] = [
       through('inverter', 'main', { neutral: 'solid' }),
       panel('backed-up', 'inverter-transfer'),
     ],
-    modes: { 'On utility': '1', 'On battery': '1' },
+    modes: { 'On utility': '1', 'On battery': '1 +bonded-outside' },
   },
   {
     what: 'a backed-up panel with its screw left in',
@@ -488,7 +488,7 @@ export const knownAnswers: Known[] = [
     modes: {
       'On utility': '2 two-bonds',
       'On utility, inverter-transfer on inverter': '1',
-      'On battery': '1',
+      'On battery': '1 +bonded-outside',
     },
   },
   {
@@ -654,7 +654,7 @@ export const knownAnswers: Known[] = [
     what: 'a bonded portable generator with plug-in loads alone',
     section: '250.34(A), (C), 445.20',
     parts: [generator({ output: 'bonded', gfci: true })],
-    modes: { 'On generator': '1' },
+    modes: { 'On generator': '1 +portable' },
   },
   {
     what: 'the house bond reached only over the generator’s and the service’s common neutral, which is cut',
@@ -696,7 +696,7 @@ export const knownAnswers: Known[] = [
     what: 'an isolated power station into a bonded panel by a cord',
     section: '250.30(A)(1)',
     parts: [station({ output: 'isolated' }), panel('cabin', feed('station', cord), { bond: true })],
-    modes: { 'On battery': '1' },
+    modes: { 'On battery': '1 +bonded-outside' },
   },
 
   // 230 V
