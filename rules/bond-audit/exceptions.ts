@@ -7,7 +7,14 @@ import { bondWords, listed } from './phrases.ts'
 import type { SectionId } from './standards.ts'
 
 export type Exception = {
-  kind: 'outbuilding' | 'existing-range' | 'no-ground-behind-gfci' | 'portable' | 'bonded-outside' | 'separated' | 'rod-with-rcd'
+  kind:
+    | 'outbuilding'
+    | 'existing-range'
+    | 'no-ground-behind-gfci'
+    | 'portable'
+    | 'bonded-outside'
+    | 'separated'
+    | 'rod-with-rcd'
   parts: readonly string[]
   says: string
   /** All of them must hold. */

@@ -41,7 +41,7 @@ export type Finding = {
 export type Found = { count: Count; findings: readonly Finding[]; exceptions: readonly Exception[] }
 
 /** Whether the live output has no neutral to bond: both its wires stand at half voltage. */
-export const isBalanced = ({ live }: Circuit): boolean =>
+const isBalanced = ({ live }: Circuit): boolean =>
   live.some((part) => part.kind === 'source' && part.output === 'balanced')
 
 /** Everything found in one mode. No findings: it passes. */

@@ -29,7 +29,7 @@ export type GroundCurrent = {
 }
 
 /** Ohms of a run's neutral and of its grounding conductor, one way, stranded, at 75 °C. */
-export function runOhms(run: Run | undefined, units: System['units']): { neutral: number; ground: number } {
+function runOhms(run: Run | undefined, units: System['units']): { neutral: number; ground: number } {
   if (run === undefined) return { neutral: leastOhms, ground: leastOhms }
   const ohms = (size: string) => {
     const gauge = gauges.find((one) => one === size)

@@ -16,7 +16,7 @@ export type Box = {
   marked: boolean
   bond: 'none' | 'in' | 'excepted' | 'cut'
 }
-export type Wire = {
+type Wire = {
   key: string
   points: readonly (readonly [number, number])[]
   /** `dead` is there without power; `out` is a cord that is not plugged in. */

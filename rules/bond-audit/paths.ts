@@ -1,7 +1,7 @@
 /** Ways through a circuit: from a part back to its source, and past ground-fault protection. */
 import type { Circuit } from './circuit.ts'
 import type { PowerPart } from './system.ts'
-import type { Bond, FeedAt } from './wiring.ts'
+import type { Bond, FeedAt, Wiring } from './wiring.ts'
 
 /** The runs between the live source and a part, the source's first. */
 export function wayTo({ carrying, live }: Circuit, part: PowerPart): FeedAt[] {
@@ -23,6 +23,22 @@ export const firstPanels = (circuit: Circuit): PowerPart[] => [
     }),
   ),
 ]
+
+/** Whether utility can feed a part, however the switches stand: then a bond in it is on utility's neutral as well. */
+export function utilityReaches({ parts, feeds }: Wiring, partId: string): boolean {
+  const seen = new Set<string>()
+  const ahead = [partId]
+  for (let id = ahead.pop(); id !== undefined; id = ahead.pop()) {
+    if (seen.has(id)) continue
+    seen.add(id)
+    const part = parts.get(id)
+    if (part?.kind === 'source' && part.type === 'utility') return true
+    // Behind a transformer the neutral is another.
+    if (part?.kind !== 'transformer')
+      for (const { to, feed } of feeds) if (to.id === id) ahead.push(feed.from)
+  }
+  return false
+}
 
 /** Ground-fault protection that the live current passes, with the runs behind it. */
 function protections(circuit: Circuit): { at: PowerPart; behind: readonly FeedAt[] }[] {

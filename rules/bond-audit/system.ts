@@ -41,7 +41,7 @@ export const Feed = z.strictObject({
   run: z.optional(Run),
 })
 
-export const volts = ['120', '120/240', '240', '230'] as const
+const volts = ['120', '120/240', '240', '230'] as const
 /**
  * Somewhere power comes from. `output` says what ties its neutral to its own ground: `bonded` a wire, `relay` a
  * contact that closes in the states `relay` lists, `floating` nothing, `isolated` nothing, with the receptacles'

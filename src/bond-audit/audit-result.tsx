@@ -37,7 +37,7 @@ export function AuditResult({ system }: { system: System }) {
           </SignalPanel>
         )
       )}
-      <Rail title="As it stands" action={<b className="text-small">{tally}</b>}>
+      <Rail id="as-it-stands" title="As it stands" action={<b className="text-small">{tally}</b>}>
         <p className="sr-only" role="status">
           {tally}
         </p>

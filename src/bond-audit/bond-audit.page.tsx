@@ -33,6 +33,11 @@ export function Component() {
           </Button>
         )}
       </header>
+      {system !== undefined && system.parts.length > 0 && faults.length === 0 && (
+        <a className="audit-jump screen-only" href="#as-it-stands">
+          To the answer, mode by mode
+        </a>
+      )}
       {damaged && (
         <Failed title="This address holds no system that can be read.">
           It may be cut short. What this device kept is shown instead.

@@ -94,7 +94,7 @@ function ReceptacleFields({ part, system, errorAt, onPart }: PartFieldsProps<Rec
 }
 
 /** The fields that only this kind of part has. */
-export function OwnFields({ part, ...rest }: PartFieldsProps) {
+function OwnFields({ part, ...rest }: PartFieldsProps) {
   const { system, errorAt, onPart } = rest
   switch (part.kind) {
     case 'source':

@@ -1,5 +1,5 @@
 import type { Audited } from '../audit.ts'
-import { firstPanels } from '../paths.ts'
+import { firstPanels, utilityReaches } from '../paths.ts'
 import { change } from './change.ts'
 import type { Change } from './change.ts'
 
@@ -11,7 +11,9 @@ export const bondsMissing = (failing: readonly Audited[]): Change[] =>
     const utility = live.some((part) => part.kind === 'source' && part.type === 'utility')
     // Many isolated outputs allow no bond: another way is looked for first.
     const work = live.some((part) => part.kind === 'source' && part.output === 'isolated') ? 7 : 4
-    const panels = utility ? places : firstPanels(circuit)
+    const panels = utility
+      ? places
+      : firstPanels(circuit).filter(({ id }) => !utilityReaches(circuit.wiring, id))
     return panels.flatMap((part) => {
       if (part.kind !== 'panel' || part.bond || (utility && part.role !== 'main')) return []
       const bonded = { ...part, bond: true }

@@ -28,7 +28,7 @@ export function balancedFindings({ live, places, bonds }: Circuit): Finding[] {
     found.push({
       kind: 'bond-on-balanced',
       parts: bonds.map(({ part }) => part.id),
-      says: `${listed(bonds.map(bondWords))} ties one wire of a balanced output to ground.`,
+      says: `One wire of a balanced output is tied to ground, by ${listed(bonds.map(bondWords))}.`,
       danger: `It shorts half of the output through the source’s own ground: ${names} can be destroyed, or its case made live.`,
       change: [
         `Switch ${names} off and disconnect it from this wiring. Take no reading with it connected.`,

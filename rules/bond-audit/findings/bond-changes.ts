@@ -1,6 +1,6 @@
 /** What to do about a bond: how one is taken out, and where one belongs. */
 import type { Circuit } from '../circuit.ts'
-import { firstPanels } from '../paths.ts'
+import { firstPanels, utilityReaches } from '../paths.ts'
 import { listed } from '../phrases.ts'
 import type { Bond } from '../wiring.ts'
 
@@ -49,7 +49,7 @@ const gate =
 
 /** Where the one bond belongs that is missing. The bond is held back until the readings release it. */
 export function whereItBelongs(circuit: Circuit): string[] {
-  const { live, carrying } = circuit
+  const { live, carrying, wiring } = circuit
   const sources = live.flatMap((part) => (part.kind === 'source' ? [part] : []))
   if (sources.some(({ type }) => type === 'utility')) {
     const mains = carrying
@@ -60,7 +60,9 @@ export function whereItBelongs(circuit: Circuit): string[] {
     ]
   }
   const names = listed(live.map(({ name }) => name))
-  const panels = firstPanels(circuit).map(({ name }) => name)
+  const panels = firstPanels(circuit)
+    .filter(({ id }) => !utilityReaches(wiring, id))
+    .map(({ name }) => name)
   const relays = sources.filter(({ output }) => output === 'relay').map(({ name }) => name)
   const isolated = sources.some(({ output }) => output === 'isolated')
   const parting = carrying

@@ -1,6 +1,7 @@
 import type { Circuit } from '../circuit.ts'
 import type { Finding } from '../findings.ts'
 import { straddled } from '../paths.ts'
+import { takeOut } from './bond-changes.ts'
 import { bondWords, listed } from '../phrases.ts'
 
 /** Ground-fault protection between two bonds: part of the neutral current passes it by. */
@@ -11,6 +12,12 @@ export const gfciFindings = (circuit: Circuit): Finding[] =>
     says: `Neutral is grounded again behind the GFCI of ${at.name}, by ${listed(behind.map(bondWords))}; ahead of it by ${listed(ahead.map(bondWords))}.`,
     danger:
       'Part of the neutral current goes back by ground, so the GFCI trips with the first load, or with none. Whoever takes it out loses its protection and keeps the two bonds.',
-    change: [`Leave the GFCI in. One of the bonds goes: ${listed(behind.map(bondWords))}, or the one ahead.`],
+    // The service's own bond is never the one that goes.
+    change: [
+      'Leave the GFCI in.',
+      ...[...behind, ...ahead]
+        .filter(({ part }) => !(part.kind === 'panel' && part.role === 'main'))
+        .flatMap((bond) => takeOut(circuit, bond)),
+    ],
     sections: ['ul-943', 'nec-250.6'],
   }))

@@ -122,3 +122,34 @@ describe('of any system', () => {
     )
   })
 })
+
+describe('what a finding says to change', () => {
+  const changes = (...parts: Part[]) =>
+    auditSystem(system(...parts))
+      .modes.flatMap(({ findings }) => findings)
+      .flatMap(({ change }) => change)
+      .join(' ')
+
+  test('never the service’s own bond (NEC 250.24, 250.28)', () => {
+    for (const { parts } of knownAnswers)
+      expect(changes(...parts)).not.toMatch(/main: (take|have)|bond screw in main, or/)
+  })
+
+  test('no bond in a panel that utility can feed too: it would be a second one there', () => {
+    const says = changes(
+      utility(),
+      main('utility'),
+      generator({ type: 'standby-generator' }),
+      transfer('transfer', ['main', 'generator'], { neutral: 'switched' }),
+      panel('backed-up', 'transfer'),
+    )
+    expect(says).toContain('bond in generator.')
+    expect(says).not.toContain('in backed-up')
+  })
+
+  test('a bond that is missing is held back until Diagnosis releases it', () => {
+    expect(changes(inverter(), panel('cabin', 'inverter'))).toMatch(
+      /installed only after Diagnosis has released it/,
+    )
+  })
+})
