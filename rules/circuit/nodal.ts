@@ -1,4 +1,4 @@
-import { nothing, over, polar } from './complex.ts'
+import { nothing, over, polar, times } from './complex.ts'
 import { zeros } from './complex-lu.ts'
 import type { ComplexArray } from './complex-lu.ts'
 import { earth } from './network.ts'
@@ -51,25 +51,68 @@ function admittance(branch: Branch, hertz: number): Complex {
   return over({ re: 1, im: 0 }, { re: Math.max(branch.ohms, leastOhms), im: reactance })
 }
 
-/** A number that no circuit has would run through every answer as NaN; better said at once. */
+/** What no circuit has would run through every answer as NaN; better said at once. */
 function check(branch: Branch): void {
-  const wrong = Object.entries(branch).find(
-    ([part, value]) =>
-      typeof value === 'number' &&
-      (Number.isNaN(value) ||
-        (part !== 'ohms' && !Number.isFinite(value)) ||
-        (value < 0 && part !== 'degrees')),
-  )
-  if (wrong) throw new Error(`Branch "${branch.name}": ${wrong[0]} can't be ${String(wrong[1])}.`)
+  const { kind } = branch
+  if (kind !== 'capacitance' && !(branch.ohms >= 0)) refuse(branch, 'ohms', branch.ohms)
+  if (kind === 'capacitance' && !isAmount(branch.farads)) refuse(branch, 'farads', branch.farads)
+  if (kind === 'winding' && !isAmount(branch.henries)) refuse(branch, 'henries', branch.henries)
+  if (kind === 'source' && !isAmount(branch.volts)) refuse(branch, 'volts', branch.volts)
+  if (kind === 'source' && !Number.isFinite(branch.degrees)) refuse(branch, 'degrees', branch.degrees)
+}
+const isAmount = (value: number): boolean => value >= 0 && value < Infinity
+function refuse({ name }: Branch, what: string, value: number): never {
+  throw new Error(`Branch "${name}": ${what} can't be ${String(value)}.`)
 }
 
-/** Nodes with the fewest branches first: eliminating those leaves the fewest new entries in the matrix. */
-function numberNodes(branches: readonly Branch[]): Map<Node, number> {
-  const ends = new Map<Node, number>()
-  for (const { from, to } of branches)
-    for (const node of [from, to]) if (node !== earth) ends.set(node, (ends.get(node) ?? 0) + 1)
-  const fewestFirst = [...ends].sort((a, b) => a[1] - b[1])
-  return new Map([[earth, -1], ...fewestFirst.map(([node], i): [Node, number] => [node, i])])
+/** The two ends of every branch by their nodes' numbers, −1 for earth. */
+type Numbered = { nodes: Map<Node, number>; ends: number[] }
+
+/**
+ * Numbers the nodes from 0, those with the fewest branches first: eliminating them leaves the fewest new entries in
+ * the matrix.
+ */
+function numberNodes(branches: readonly Branch[]): Numbered {
+  const nodes = new Map<Node, number>([[earth, -1]])
+  const ends: number[] = []
+  const branchesAt: number[] = []
+  for (let i = 0; i < 2 * branches.length; i++) {
+    const branch = branches[i >> 1]!
+    const node = i % 2 === 0 ? branch.from : branch.to
+    let number = nodes.get(node)
+    if (number === undefined) {
+      number = branchesAt.push(0) - 1
+      nodes.set(node, number)
+    }
+    if (number >= 0) branchesAt[number]! += 1
+    ends.push(number)
+  }
+  const place = branchesAt.map(() => 0)
+  const fewestFirst = branchesAt.map((_, number) => number).sort((a, b) => branchesAt[a]! - branchesAt[b]!)
+  fewestFirst.forEach((number, i) => (place[number] = i))
+  for (const [node, number] of nodes) if (number >= 0) nodes.set(node, place[number]!)
+  return { nodes, ends: ends.map((number) => (number < 0 ? number : place[number]!)) }
+}
+
+/** Adds an admittance between two nodes to the matrix. */
+function connect(matrix: ComplexArray, n: number, { from, to, admittance: { re, im } }: Conducts): void {
+  if (from >= 0) add(matrix, from * n + from, re, im)
+  if (to >= 0) add(matrix, to * n + to, re, im)
+  if (from < 0 || to < 0) return
+  add(matrix, from * n + to, -re, -im)
+  add(matrix, to * n + from, -re, -im)
+}
+
+/** Adds a source's short-circuit current, which leaves `from` and enters `to`. */
+function inject(injected: ComplexArray, { from, to, admittance, push }: Conducts): void {
+  const { re, im } = times(admittance, push)
+  if (from >= 0) add(injected, from, -re, -im)
+  if (to >= 0) add(injected, to, re, im)
+}
+
+function add(array: ComplexArray, i: number, re: number, im: number): void {
+  array[2 * i]! += re
+  array[2 * i + 1]! += im
 }
 
 /**
@@ -80,35 +123,27 @@ function numberNodes(branches: readonly Branch[]): Map<Node, number> {
  * @throws Error naming the branch, where two have one name or a value is negative or no number
  */
 export function nodalEquations({ hertz, branches }: Network): Equations {
-  const nodes = numberNodes(branches)
+  const { nodes, ends } = numberNodes(branches)
   const n = nodes.size - 1
   const [matrix, injected] = [zeros(n * n), zeros(n)]
   const named = new Map<string, Conducts>()
-  const put = (row: number, column: number, { re, im }: Complex, sign: number) => {
-    if (row < 0 || column < 0) return
-    matrix.re[row * n + column]! += sign * re
-    matrix.im[row * n + column]! += sign * im
-  }
-  const inject = (node: number, { re, im }: Complex, factor: number) => {
-    if (node < 0) return
-    injected.re[node]! += factor * re
-    injected.im[node]! += factor * im
-  }
-  for (let i = 0; i < n; i++) matrix.re[i * n + i] = leakSiemens
-  for (const branch of branches) {
+  for (let i = 0; i < n; i++) add(matrix, i * n + i, leakSiemens, 0)
+  branches.forEach((branch, i) => {
     check(branch)
-    if (named.has(branch.name)) throw new Error(`Two branches are named "${branch.name}".`)
-    const [from, to] = [nodes.get(branch.from) ?? -1, nodes.get(branch.to) ?? -1]
-    const y = admittance(branch, hertz)
     const runs = branch.kind === 'source' && hertz > 0
-    const push = runs ? polar(branch.volts, branch.degrees) : nothing
-    named.set(branch.name, { from, to, admittance: y, push })
-    put(from, from, y, 1)
-    put(to, to, y, 1)
-    put(from, to, y, -1)
-    put(to, from, y, -1)
-    inject(to, push, y.re)
-    inject(from, push, -y.re)
-  }
+    const conducts = {
+      from: ends[2 * i]!,
+      to: ends[2 * i + 1]!,
+      admittance: admittance(branch, hertz),
+      push: runs ? polar(branch.volts, branch.degrees) : nothing,
+    }
+    named.set(branch.name, conducts)
+    connect(matrix, n, conducts)
+    if (runs) inject(injected, conducts)
+  })
+  if (named.size < branches.length) throw new Error(`Two branches have one name: ${twice(branches)}.`)
   return { nodes, branches: named, matrix, injected }
 }
+
+const twice = (branches: readonly Branch[]): string | undefined =>
+  branches.map(({ name }) => name).find((name, i, names) => names.indexOf(name) < i)

@@ -1,6 +1,6 @@
 import { minus, nothing, over, plus, times } from './complex.ts'
-import { factorMatrix, zeros } from './complex-lu.ts'
-import type { ComplexArray } from './complex-lu.ts'
+import { factorMatrix, substitute, zeros } from './complex-lu.ts'
+import type { ComplexArray, Factors } from './complex-lu.ts'
 import { admittanceOf, nodalEquations } from './nodal.ts'
 import type { Equations } from './nodal.ts'
 import type { Complex, Network, Node } from './network.ts'
@@ -36,14 +36,6 @@ export type Factored = {
   loaded: (loads: readonly Load[]) => Factored
 }
 
-/** The bare network, and the volts of every node for one amp driven in at `a` and out at `b`. */
-type Bare = {
-  equations: Equations
-  hertz: number
-  volts: ComplexArray
-  drive: (a: Node, b: Node) => ComplexArray
-}
-
 /**
  * Solves a network once, so that meters, bulbs and loads can then be held to it at little cost: each is one more
  * substitution into the factors, kept for the next that touches the same two points.
@@ -52,104 +44,151 @@ type Bare = {
  */
 export function factor(network: Network): Factored {
   const equations = nodalEquations(network)
-  const { matrix, injected } = equations
-  const n = injected.re.length
-  const substitute = factorMatrix(n, matrix)
-  substitute(injected)
-  const driven = new Map<string, ComplexArray>()
-  function drive(a: Node, b: Node): ComplexArray {
-    const key = `${a}\n${b}`
-    let answer = driven.get(key)
-    if (answer === undefined) {
-      const [from, to] = [nodeNumber(equations, a), nodeNumber(equations, b)]
-      answer = zeros(n)
-      if (from >= 0) answer.re[from]! += 1
-      if (to >= 0) answer.re[to]! -= 1
-      substitute(answer)
-      driven.set(key, answer)
-    }
-    return answer
-  }
-  return holding({ equations, hertz: network.hertz, volts: injected, drive }, [])
+  const { injected, matrix } = equations
+  const factors = factorMatrix(equations.nodes.size - 1, matrix)
+  substitute(factors, injected)
+  const bare = { equations, factors, hertz: network.hertz, volts: injected, driven: new Map() }
+  return new Holding(bare, [])
 }
 
-/** The network with loads held to it. */
-function holding(bare: Bare, loads: readonly Load[]): Factored {
-  const { equations, hertz } = bare
-  const relieve = loads.length === 0 ? (volts: ComplexArray) => volts : pullDown(bare, loads)
-  const volts = relieve(bare.volts)
-  const of = (node: Node) => at(volts, nodeNumber(equations, node))
-  const between = (a: Node, b: Node) => minus(of(a), of(b))
-  return {
-    hertz,
-    volts: of,
-    between,
-    amps: (name) => {
-      const branch = equations.branches.get(name)
-      if (!branch) throw new Error(`This network has no branch "${name}".`)
-      const across = minus(at(volts, branch.from), at(volts, branch.to))
-      return times(branch.admittance, plus(across, branch.push))
-    },
-    port: (a, b) => {
-      const answer = relieve(bare.drive(a, b))
-      const impedance = minus(at(answer, nodeNumber(equations, a)), at(answer, nodeNumber(equations, b)))
-      return { open: between(a, b), impedance }
-    },
-    loaded: (more) => holding(bare, [...loads, ...more]),
+/** The network without loads. */
+type Bare = {
+  equations: Equations
+  factors: Factors
+  hertz: number
+  volts: ComplexArray
+  /** By the numbers of the two nodes. */
+  driven: Map<number, ComplexArray>
+}
+
+/** Something held to the bare network. */
+type Held = { from: number; to: number; admittance: Complex; drives: ComplexArray }
+
+/** Volts of the bare network, whatever drives it, and the amps of each load because of them. */
+type Driven = { bare: ComplexArray; amps: ComplexArray }
+
+/**
+ * A network with loads. By superposition each load's current takes away what an amp there does; the currents follow
+ * from (1 + Y·Z)·i = Y·v, where v are the volts across the loads without them, Y the loads' admittances, and Z what
+ * an amp at one load does at another.
+ */
+class Holding implements Factored {
+  readonly hertz: number
+  readonly #bare: Bare
+  readonly #loads: readonly Load[]
+  readonly #held: readonly Held[]
+  /** Factors of 1 + Y·Z; none without loads. */
+  readonly #interplay: Factors | undefined
+  readonly #running: Driven
+
+  constructor(bare: Bare, loads: readonly Load[]) {
+    this.hertz = bare.hertz
+    this.#bare = bare
+    this.#loads = loads
+    this.#held = loads.map((load) => hold(bare, load))
+    this.#interplay = loads.length === 0 ? undefined : factorMatrix(loads.length, interplay(this.#held))
+    this.#running = this.#flow(bare.volts)
   }
+
+  volts(node: Node): Complex {
+    return this.#at(this.#running, nodeNumber(this.#bare, node))
+  }
+
+  between(a: Node, b: Node): Complex {
+    return this.#across(this.#running, nodeNumber(this.#bare, a), nodeNumber(this.#bare, b))
+  }
+
+  amps(name: string): Complex {
+    const branch = this.#bare.equations.branches.get(name)
+    if (!branch) throw new Error(`This network has no branch "${name}".`)
+    const across = this.#across(this.#running, branch.from, branch.to)
+    return times(branch.admittance, plus(across, branch.push))
+  }
+
+  port(a: Node, b: Node): Port {
+    const [from, to] = [nodeNumber(this.#bare, a), nodeNumber(this.#bare, b)]
+    const driven = this.#flow(drive(this.#bare, from, to))
+    return { open: this.#across(this.#running, from, to), impedance: this.#across(driven, from, to) }
+  }
+
+  loaded(more: readonly Load[]): Factored {
+    return new Holding(this.#bare, this.#loads.concat(more))
+  }
+
+  #flow(bare: ComplexArray): Driven {
+    if (this.#interplay === undefined) return { bare, amps: noAmps }
+    const amps = zeros(this.#held.length)
+    for (let i = 0; i < this.#held.length; i++) {
+      const { from, to, admittance } = this.#held[i]!
+      put(amps, i, times(admittance, minus(at(bare, from), at(bare, to))))
+    }
+    substitute(this.#interplay, amps)
+    return { bare, amps }
+  }
+
+  /** Volts of a node with the loads in place. */
+  #at({ bare, amps }: Driven, node: number): Complex {
+    let volts = at(bare, node)
+    for (let i = 0; i < this.#held.length; i++)
+      volts = minus(volts, times(at(amps, i), at(this.#held[i]!.drives, node)))
+    return volts
+  }
+
+  #across(driven: Driven, from: number, to: number): Complex {
+    return minus(this.#at(driven, from), this.#at(driven, to))
+  }
+}
+
+const noAmps = zeros(0)
+
+function hold(bare: Bare, { from, to, ohms, farads }: Load): Held {
+  if (!(ohms >= 0)) throw new Error(`A load of ${ohms} Ω can't be.`)
+  const [a, b] = [nodeNumber(bare, from), nodeNumber(bare, to)]
+  const admittance = admittanceOf(ohms, farads ?? 0, bare.hertz)
+  return { from: a, to: b, admittance, drives: drive(bare, a, b) }
 }
 
 /**
- * What loads make of the volts the bare network has without them, whatever drives it. By superposition: each load's
- * current takes away what an amp there does. The currents follow from (1 + Y·Z)·i = Y·v, where v are the volts
- * across the loads without them, Y the loads' admittances, and Z what an amp at one load does at another.
+ * Volts of every node for one amp driven in at `from` and out at `to`. Always at two points at once: an amp into one
+ * point of a floating wiring would lift all of it by gigavolts, and the difference of two such is noise.
  */
-function pullDown(bare: Bare, loads: readonly Load[]): (volts: ComplexArray) => ComplexArray {
-  const k = loads.length
-  const held = loads.map(({ from, to, ohms, farads }) => {
-    if (!(ohms >= 0)) throw new Error(`A load of ${ohms} Ω can't be.`)
-    return {
-      from: nodeNumber(bare.equations, from),
-      to: nodeNumber(bare.equations, to),
-      admittance: admittanceOf(ohms, farads ?? 0, bare.hertz),
-      drives: bare.drive(from, to),
-    }
-  })
-  const matrix = zeros(k * k)
-  held.forEach(({ from, to, admittance }, row) =>
-    held.forEach(({ drives }, column) => {
-      const part = times(admittance, minus(at(drives, from), at(drives, to)))
-      matrix.re[row * k + column] = part.re + (row === column ? 1 : 0)
-      matrix.im[row * k + column] = part.im
-    }),
-  )
-  const substitute = factorMatrix(k, matrix)
-  return (volts) => {
-    const amps = zeros(k)
-    held.forEach(({ from, to, admittance }, i) => {
-      const { re, im } = times(admittance, minus(at(volts, from), at(volts, to)))
-      amps.re[i] = re
-      amps.im[i] = im
-    })
-    substitute(amps)
-    const left = { re: volts.re.slice(), im: volts.im.slice() }
-    held.forEach(({ drives }, i) => {
-      const [ir, ii] = [amps.re[i]!, amps.im[i]!]
-      for (let node = 0; node < left.re.length; node++) {
-        const [dr, di] = [drives.re[node]!, drives.im[node]!]
-        left.re[node]! -= ir * dr - ii * di
-        left.im[node]! -= ir * di + ii * dr
-      }
-    })
-    return left
-  }
+function drive({ factors, driven }: Bare, from: number, to: number): ComplexArray {
+  const key = (from + 1) * (factors.n + 1) + to + 1
+  const known = driven.get(key)
+  if (known !== undefined) return known
+  const volts = zeros(factors.n)
+  if (from >= 0) volts[2 * from]! += 1
+  if (to >= 0) volts[2 * to]! -= 1
+  substitute(factors, volts)
+  driven.set(key, volts)
+  return volts
 }
 
-const at = ({ re, im }: ComplexArray, i: number): Complex =>
-  i < 0 ? nothing : { re: re[i] ?? 0, im: im[i] ?? 0 }
+/** 1 + Y·Z, k × k in rows. */
+function interplay(held: readonly Held[]): ComplexArray {
+  const k = held.length
+  const matrix = zeros(k * k)
+  for (let row = 0; row < k; row++) {
+    const { from, to, admittance } = held[row]!
+    for (let column = 0; column < k; column++) {
+      const { drives } = held[column]!
+      put(matrix, row * k + column, times(admittance, minus(at(drives, from), at(drives, to))))
+    }
+    matrix[2 * (row * k + row)]! += 1
+  }
+  return matrix
+}
 
-function nodeNumber({ nodes }: Equations, node: Node): number {
-  const number = nodes.get(node)
+const at = (array: ComplexArray, i: number): Complex =>
+  i < 0 ? nothing : { re: array[2 * i]!, im: array[2 * i + 1]! }
+
+function put(array: ComplexArray, i: number, { re, im }: Complex): void {
+  array[2 * i] = re
+  array[2 * i + 1] = im
+}
+
+function nodeNumber({ equations }: Bare, node: Node): number {
+  const number = equations.nodes.get(node)
   if (number === undefined) throw new Error(`This network has no node "${node}".`)
   return number
 }

@@ -40,6 +40,8 @@ const shares = ['none', 'little', 'small', 'half', 'most'] as const
 /** Hot–neutral against the limits for this kind of source. */
 const supplies = ['far-low', 'low', 'lowish', 'within', 'highish', 'high', 'far-high'] as const
 export type Supply = (typeof supplies)[number]
+const ghosts = ['short', 'cable', 'filters', 'held', 'firm'] as const
+export type Ghost = (typeof ghosts)[number]
 const ohmBands = ['tied', 'poor', 'rods', 'load', 'open'] as const
 const bulbStates = ['dark', 'dim', 'bright'] as const
 
@@ -59,6 +61,8 @@ const derived: Record<string, 'number' | readonly string[]> = {
   'panel.against-source': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
   'receptacle.against-panel': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
   'receptacle.against-source': ['same', 'less', 'gone', 'fed-elsewhere', 'more'],
+  // One voltage to ground read with two instruments: what ties ground at the receptacle
+  'receptacle.ghost': ghosts,
   // Two legs
   'legs.pattern': ['equal', 'apart', 'opposite', 'one-dead', 'both-dead', 'same-phase', 'not-twice'],
   'legs.ground': ['equal', 'apart', 'one-on-ground'],

@@ -2,10 +2,11 @@ import type { Edition } from '../edition/open.ts'
 import { acrossModes } from './across-modes.ts'
 import { clampFacts } from './clamp-facts.ts'
 import { deadFacts } from './dead-facts.ts'
+import { ghostFacts } from './ghost-facts.ts'
 import { legFacts } from './leg-facts.ts'
 import { loadFacts } from './load-facts.ts'
 import { placeFacts } from './place-facts.ts'
-import type { Sheet, Taken, TakenReading } from './sheet.ts'
+import type { Earlier, Sheet, Taken, TakenReading } from './sheet.ts'
 import { sourceFacts } from './source-facts.ts'
 import { testFacts } from './test-facts.ts'
 
@@ -21,6 +22,8 @@ export type Findings = {
   observed: (id: string) => string | undefined
   /** Input resistance of the instrument that took it, ohms. */
   meterOhms: (id: string) => number
+  /** The same reading with another instrument before, where it was taken twice. */
+  earlier: (id: string) => Earlier | undefined
   /** Source kind: the limits of its voltage are its own. */
   source: string
   nominalVolts: number
@@ -31,7 +34,16 @@ export type Findings = {
 /** Adds a derived fact; `from` names the findings it rests on. */
 export type Say = (fact: string, value: FactValue, from: readonly string[]) => void
 
-const derivations = [placeFacts, loadFacts, legFacts, deadFacts, testFacts, clampFacts, sourceFacts]
+const derivations = [
+  placeFacts,
+  ghostFacts,
+  loadFacts,
+  legFacts,
+  deadFacts,
+  testFacts,
+  clampFacts,
+  sourceFacts,
+]
 
 function deriveAt(
   edition: Edition,
@@ -61,6 +73,10 @@ function deriveAt(
     meterOhms: (id) => {
       const one = taken.get(id)
       return one?.kind === 'reading' ? one.meterOhms : context.meterOhms
+    },
+    earlier: (id) => {
+      const one = taken.get(id)
+      return one?.kind === 'reading' ? one.earlier : undefined
     },
     source: context.source,
     nominalVolts: system.nominalVolts,

@@ -35,7 +35,7 @@ function readContext(edition: Edition, raw: unknown, errors: FieldErrors): Conte
   return { source, system, wiring, mode, meterOhms: isNumber(ohms) && ohms > 0 ? ohms : defaultMeterOhms }
 }
 
-type Amount = Pick<TakenReading, 'value' | 'overLimit' | 'between'> & { meterOhms?: number }
+type Amount = Pick<TakenReading, 'value' | 'overLimit' | 'between' | 'earlier'> & { meterOhms?: number }
 
 /** A reading as typed: a number, or on the screens with its instrument, wandering or over limit. */
 function readAmount(raw: unknown, detailed: boolean): Amount | string {
@@ -48,7 +48,9 @@ function readAmount(raw: unknown, detailed: boolean): Amount | string {
   const own = raw['meterOhms']
   if (own !== undefined && !(isNumber(own) && own > 0))
     return 'the instrument’s resistance must be above 0 ohms'
-  const meter = isNumber(own) ? { meterOhms: own } : {}
+  const earlier = readEarlier(raw['earlier'])
+  if (typeof earlier === 'string') return earlier
+  const meter = { ...(isNumber(own) ? { meterOhms: own } : {}), ...(earlier ? { earlier } : {}) }
   if (raw['overLimit'] === true)
     return { value: overLimitOhms, overLimit: true, between: undefined, ...meter }
   const between = raw['between']
@@ -60,6 +62,15 @@ function readAmount(raw: unknown, detailed: boolean): Amount | string {
   }
   const plain = readAmount(raw['value'], false)
   return typeof plain === 'string' ? plain : { ...plain, ...meter }
+}
+
+/** What another instrument showed before. */
+function readEarlier(raw: unknown): TakenReading['earlier'] | string {
+  if (raw === undefined) return undefined
+  const { value, meterOhms } = isObject(raw) ? raw : {}
+  if (!isNumber(value) || value < 0) return 'the reading before must be a number of 0 or more'
+  if (!isNumber(meterOhms) || meterOhms <= 0) return 'the instrument before must have ohms above 0'
+  return { value, meterOhms }
 }
 
 function readFinding(
@@ -89,6 +100,7 @@ function readFinding(
       meterOhms: amount.meterOhms ?? context.meterOhms,
       overLimit,
       between: amount.between,
+      ...(amount.earlier === undefined ? {} : { earlier: amount.earlier }),
     }
   }
   const observation = edition.observations.get(id)

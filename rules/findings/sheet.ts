@@ -29,17 +29,20 @@ export type TakenReading = {
   overLimit: boolean
   /** The two numbers an unsteady reading wanders between. */
   between: readonly [number, number] | undefined
+  /** The same taken before, with another instrument: its value in the same unit, and that instrument's ohms. */
+  earlier?: Earlier
 }
+export type Earlier = { value: number; meterOhms: number }
 export type TakenObservation = { kind: 'observation'; id: string; mode: string; value: string }
 export type Taken = TakenReading | TakenObservation
 
 export type Sheet = { context: Context; taken: readonly Taken[] }
 
-/** A finding as the screens keep it: plain, or with its instrument, its wandering or its limit. */
+/** A finding as the screens keep it: plain, or with its instrument, its wandering, its limit, or what it was before. */
 export type RawFinding =
   | number
   | string
-  | { value: number; meterOhms?: number; between?: [number, number] }
+  | { value: number; meterOhms?: number; between?: [number, number]; earlier?: Earlier }
   | { overLimit: true; meterOhms?: number }
 
 /** A sheet as it is typed, stored and sent; `findings` belong to `context.mode`. */

@@ -13,6 +13,7 @@ import { diagnose } from '../../rules/ranking/diagnose.ts'
 import { readStarterDiagnosis } from '../editions/read-starter.ts'
 import { answerCase } from './answer.ts'
 import { measureAudit } from './measure-audit.ts'
+import { measureCircuit } from './measure-circuit.ts'
 import { measureSearch } from './measure-search.ts'
 
 /** A sheet with nearly everything taken: the worst a screen has to keep live. */
@@ -106,4 +107,5 @@ row(
   ((rank2000 * 1000) / many / raw).toFixed(1),
 )
 measureAudit()
+measureCircuit()
 await measureSearch()

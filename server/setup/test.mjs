@@ -4,6 +4,7 @@ import { join } from 'node:path'
 import { needChromium } from './chromium.mjs'
 import { needClient } from './client.mjs'
 import { sayWhy } from './fault.mjs'
+import { needNgspice } from './ngspice.mjs'
 import { needPackages } from './packages.mjs'
 import { dataFolder, root } from './places.mjs'
 import { needPostgres } from './postgres-programs.mjs'
@@ -61,6 +62,7 @@ async function main() {
   await needPackages()
   await needPostgres()
   await needChromium()
+  await needNgspice()
   await needClient()
   await check('Types', 'typescript-native/bin/tsc', ['-p', 'tsconfig.json', '--noEmit'])
   await check('Types of the core', 'typescript-native/bin/tsc', ['-p', 'rules/tsconfig.json', '--noEmit'])

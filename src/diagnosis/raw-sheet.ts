@@ -25,7 +25,14 @@ export function meterOhmsOf(meter: Meter): number {
 function rawOf(entry: Entry, ohms: boolean): RawFinding | undefined {
   if (entry.kind === 'observation') return entry.value
   if (entry.unreachable === true || entry.text.trim() === '') return undefined
-  const own = entry.meterOhms === undefined ? {} : { meterOhms: entry.meterOhms }
+  const before = entry.earlier && numberIn(entry.earlier.text)
+  const own = {
+    ...(entry.meterOhms === undefined ? {} : { meterOhms: entry.meterOhms }),
+    // What was no number before says nothing of the one there is now.
+    ...(before === undefined || !entry.earlier
+      ? {}
+      : { earlier: { value: before, meterOhms: entry.earlier.meterOhms } }),
+  }
   if (ohms && isOverLimit(entry.text)) return { overLimit: true, ...own }
   const value = numberIn(entry.text)
   // Text that is no number goes on as it is: the core says so beside its field.
@@ -35,7 +42,7 @@ function rawOf(entry: Entry, ohms: boolean): RawFinding | undefined {
     const other = numberIn(upper)
     return other === undefined ? upper : { value, between: [value, other], ...own }
   }
-  return entry.meterOhms === undefined ? value : { value, ...own }
+  return Object.keys(own).length === 0 ? value : { value, ...own }
 }
 
 function findingsOf(edition: Edition, here: Entries[string]): Record<string, RawFinding> {

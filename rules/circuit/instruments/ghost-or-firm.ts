@@ -4,7 +4,10 @@ import type { Meter } from './meter.ts'
 export type TakenWith = { volts: number; meter: Meter }
 
 export type GhostOrFirm =
-  /** The voltage falls away under load: what couples it, and what it could deliver. */
+  /**
+   * The voltage falls away under load: what couples it, and what it could deliver. A ghost is not harmless for being
+   * one: from half a milliamp a person feels it (IEC 60479-1, line a).
+   */
   | { kind: 'ghost'; farads: number; openVolts: number; amps: number }
   /** It falls to less than the heavier instrument can show: the coupling and the current are these at most. */
   | { kind: 'ghost-at-most'; farads: number; amps: number }

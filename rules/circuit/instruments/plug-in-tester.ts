@@ -34,8 +34,6 @@ const staysLit = 0.8
  * from about a twentieth of a lamp's usual 1 mA.
  */
 const glowAmps = 50e-6
-/** A neon that is out: its own capacitance, and insulation. */
-const outLamp = { ohms: 1e9, farads: 1e-12 }
 
 const pairs = ['hn', 'hg', 'ng'] as const
 type Pair = (typeof pairs)[number]
@@ -80,10 +78,10 @@ function neonShows(
   const burning = new Set<Pair>()
   /** Amps while it lasted, of lamps that strike and go out again. */
   const flickering = new Map<Pair, number>()
+  // A neon that is out is not there: its picofarad is less than the slot's own.
   const voltsNow = () => {
-    const plugged = network.loaded(
-      pairs.map((pair) => ({ ...between[pair], ...(burning.has(pair) ? { ohms: ohms[pair] } : outLamp) })),
-    )
+    const lit = pairs.filter((pair) => burning.has(pair))
+    const plugged = network.loaded(lit.map((pair) => ({ ...between[pair], ohms: ohms[pair] })))
     return (pair: Pair) => magnitude(plugged.between(between[pair].from, between[pair].to))
   }
   let volts = voltsNow()

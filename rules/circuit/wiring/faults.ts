@@ -7,8 +7,9 @@ import { hasPanel, hasTwoLegs, nominalVolts, ohmsScale } from './context.ts'
 import type { ElectricalCause, WiringContext } from './context.ts'
 import { add, couple, join, move, open, remove, replace, swap } from './edits.ts'
 import type { Edit } from './edits.ts'
-import { capacitance, feedOf, resistance } from './healthy.ts'
-import type { Choice, Parameters, Place, Range, Ranges } from './parameters.ts'
+import { cableFaradsPerFoot, capacitance, feedOf, resistance } from './healthy.ts'
+import type { Choice, Parameters, Place, Ranges } from './parameters.ts'
+import { choice as of, even } from './ranges.ts'
 
 export type Fault = {
   /** What is wrong, in a few words. */
@@ -18,18 +19,6 @@ export type Fault = {
   edits: (p: Parameters, context: WiringContext) => Edit[]
 }
 
-const of = <T>(because: string, ...options: (readonly [T, number])[]): Choice<T> => ({
-  options: options.filter(([, weight]) => weight > 0).map(([value, weight]) => ({ value, weight })),
-  because,
-})
-const even = (low: number, typical: number, high: number, unit: string, because: string): Range => ({
-  low,
-  typical,
-  high,
-  unit,
-  spread: 'even',
-  because,
-})
 /** Weighted places of a fault; a feeder only where there is one. */
 const at = (context: WiringContext, places: Partial<Record<Place, number>>): Choice<Place> =>
   of(
@@ -51,7 +40,10 @@ const opened = (p: Parameters, context: WiringContext, wire: 'hot' | 'neutral' |
   const dead =
     p.faultAt === 'feeder' ? `panel.${wire}` : p.faultAt === 'branch' ? `joint.${wire}` : `box.${wire}`
   const beside = p.alongsideFeet > 0 && p.faultAt !== 'feeder' && wire !== 'hot'
-  return [open(name), ...(beside ? [couple('alongside', `${feed}.hot`, dead, 20e-12 * p.alongsideFeet)] : [])]
+  return [
+    open(name),
+    ...(beside ? [couple('alongside', `${feed}.hot`, dead, cableFaradsPerFoot * p.alongsideFeet)] : []),
+  ]
 }
 
 /** Two conductors exchanged: at the slots, before the receptacle ahead, or on the feeder. */
@@ -199,12 +191,12 @@ export const faults: Readonly<Record<ElectricalCause, Fault>> = {
   },
   'low-source-voltage': {
     is: 'the source gives too little',
-    needs: () => ({ sourceLevel: even(0.7, 0.82, 0.885, 'of nominal', 'below every limit a source has') }),
+    needs: () => ({ sourceLevel: even(0.64, 0.8, 0.885, 'of nominal', 'below every limit a source has') }),
     edits: () => [],
   },
   'high-source-voltage': {
     is: 'the source gives too much',
-    needs: () => ({ sourceLevel: even(1.1, 1.15, 1.25, 'of nominal', 'above every limit a source has') }),
+    needs: () => ({ sourceLevel: even(1.1, 1.16, 1.3, 'of nominal', 'above every limit a source has') }),
     edits: () => [],
   },
   'source-off': { is: 'the source gives nothing', edits: stopped },

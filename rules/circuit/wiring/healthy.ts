@@ -56,10 +56,7 @@ export const feedOf = (context: WiringContext): 'panel' | 'source' => (hasPanel(
  * Lengths in feet as built: a sound circuit is kept short enough that a 10 A load takes no more than some 3.5 % of
  * it (the 3 % that the NEC recommends, and a little), and the last stretch is a part of it.
  */
-export function lengthsOf(
-  context: WiringContext,
-  p: Parameters,
-): { feeder: number; before: number; last: number } {
+function lengthsOf(context: WiringContext, p: Parameters): { feeder: number; before: number; last: number } {
   const feeder = hasPanel(context) ? p.feederFeet : 0
   const drop =
     0.035 * nominalVolts(context) - 20 * feeder * p.feederOhmsPerFoot * (hasTwoLegs(context) ? 0.5 : 1)
@@ -74,8 +71,9 @@ function sourceParts(context: WiringContext, p: Parameters): Branch[] {
   const ohms = p.sourceOhms * ohmsScale(context)
   const utility = context.source === 'utility'
   const two = hasTwoLegs(context)
-  const neutralFilter = p.filterFarads * Math.exp(p.filterSkew)
-  const otherFilter = p.filterFarads * Math.exp(p.filterSkewOther)
+  const hotFilter = p.filterFarads * Math.exp(-p.filterSkew / 2)
+  const neutralFilter = p.filterFarads * Math.exp(p.filterSkew / 2)
+  const otherFilter = hotFilter * Math.exp(p.filterSkewOther)
   // A utility's neutral is earthed at its transformer, ahead of the service drop.
   const star = utility ? 'winding.neutral' : 'source.neutral'
   return [
@@ -88,7 +86,7 @@ function sourceParts(context: WiringContext, p: Parameters): Branch[] {
         ]
       : []),
     resistance('source.pin', 'source.case', 'source.ground', p.contactGroundOhms),
-    capacitance('filter.hot', 'source.hot', 'source.case', p.filterFarads),
+    capacitance('filter.hot', 'source.hot', 'source.case', hotFilter),
     capacitance('filter.neutral', 'source.neutral', 'source.case', neutralFilter),
     ...(two ? [capacitance('filter.hot2', 'source.hot2', 'source.case', otherFilter)] : []),
     capacitance('stray.hot', 'source.hot', earth, p.strayFarads),

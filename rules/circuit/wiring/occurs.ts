@@ -3,7 +3,7 @@ import type { ElectricalCause, WiringContext } from './context.ts'
 
 type Possible = { sources?: readonly string[]; systems?: readonly string[]; wirings?: readonly string[] }
 /** Where alone a cause can occur, as the edition's `causes.json` says it too. */
-export const possibleWhere: Partial<Record<ElectricalCause, Possible>> = {
+const possibleWhere: Partial<Record<ElectricalCause, Possible>> = {
   'floating-neutral': { sources: sourceKinds.filter((s) => s !== 'utility') },
   'balanced-output': { sources: sourceKinds.filter((s) => s !== 'utility'), systems: ['120', '230'] },
   'isolated-output': { sources: sourceKinds.filter((s) => s !== 'utility') },

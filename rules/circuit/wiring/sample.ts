@@ -3,7 +3,7 @@ import { systemKinds } from './context.ts'
 import type { ElectricalCause, SourceKind, SystemKind, WiringContext } from './context.ts'
 import { canOccur } from './occurs.ts'
 import { isRange } from './parameters.ts'
-import type { Choice, Option, Parameters, Range } from './parameters.ts'
+import type { Choice, Option, Parameters, Range, Ranges } from './parameters.ts'
 import { rangesWith } from './wire.ts'
 
 /** Numbers from 0 to under 1, one after another. */
@@ -55,13 +55,17 @@ function draw(chance: Chance, one: Range | Choice<unknown>): unknown {
 const uneven = (p: Parameters): boolean =>
   Math.max(p.houseAmps, p.houseAmpsOther) > 1.3 * Math.min(p.houseAmps, p.houseAmpsOther)
 
+/** Parameters drawn from these ranges. */
+export const sampleFrom = (chance: Chance, ranges: Ranges): Parameters =>
+  Object.fromEntries(
+    Object.entries(ranges).map(([name, one]) => [name, draw(chance, one as Range | Choice<unknown>)]),
+  ) as Parameters
+
 /** A wiring's parameters within their ranges, for this cause. */
 export function sampleParameters(chance: Chance, context: WiringContext, cause: ElectricalCause): Parameters {
   const ranges = rangesWith(context, cause)
   for (;;) {
-    const p = Object.fromEntries(
-      Object.entries(ranges).map(([name, one]) => [name, draw(chance, one as Range | Choice<unknown>)]),
-    ) as Parameters
+    const p = sampleFrom(chance, ranges)
     if (cause !== 'shared-neutral-lost' || p.faultAt !== 'feeder' || uneven(p)) return p
   }
 }

@@ -5,7 +5,7 @@ import { applyEdit } from './edits.ts'
 import type { Edit } from './edits.ts'
 import { faults } from './faults.ts'
 import { healthy } from './healthy.ts'
-import { rangesIn } from './parameters.ts'
+import { rangesIn } from './ranges.ts'
 import type { Parameters, Ranges } from './parameters.ts'
 
 /** The ranges of a wiring with this fault: those of the context, narrowed to where the fault can be. */
