@@ -12,6 +12,7 @@ import { readCase } from '../../rules/findings/parse.ts'
 import { diagnose } from '../../rules/ranking/diagnose.ts'
 import { readStarterDiagnosis } from '../editions/read-starter.ts'
 import { answerCase } from './answer.ts'
+import { measureAudit } from './measure-audit.ts'
 import { measureCircuit } from './measure-circuit.ts'
 import { measureSearch } from './measure-search.ts'
 
@@ -105,5 +106,6 @@ row(
   `${rank2000.toFixed(1)} s`,
   ((rank2000 * 1000) / many / raw).toFixed(1),
 )
+measureAudit()
 measureCircuit()
 await measureSearch()

@@ -21,6 +21,7 @@ const cause = () => import('../articles/cause.page.tsx')
 const test = () => import('../articles/test.page.tsx')
 const worksheets = () => import('../worksheets/worksheets.page.tsx')
 const worksheet = () => import('../worksheets/worksheet.page.tsx')
+const bondAudit = () => import('../bond-audit/bond-audit.page.tsx')
 
 /**
  * The tech's pages and what the shop knows, for a tab that stays open where no worker can keep the pages. The edition's
@@ -29,7 +30,16 @@ const worksheet = () => import('../worksheets/worksheet.page.tsx')
 export const bringLibrary = async () =>
   savesData()
     ? []
-    : Promise.all([diagnosis(), articles(), article(), cause(), test(), worksheets(), worksheet()])
+    : Promise.all([
+        diagnosis(),
+        articles(),
+        article(),
+        cause(),
+        test(),
+        worksheets(),
+        worksheet(),
+        bondAudit(),
+      ])
 
 /** Every page, fetched when it is first opened. Loaders never wait for data: pages own waiting, failing, no network. */
 export const routes: RouteObject[] = [
@@ -64,6 +74,7 @@ export const routes: RouteObject[] = [
           { path: 'tests/:id', lazy: test },
           { path: 'worksheets', lazy: worksheets },
           { path: 'worksheets/:name', lazy: worksheet },
+          { path: 'worksheets/bond-audit', lazy: bondAudit },
           { path: 'editions', lazy: () => import('../editions/editions.page.tsx') },
           { path: 'sign-in', lazy: () => import('../people/sign-in.page.tsx') },
           { path: 'sign-up', lazy: () => import('../people/sign-up.page.tsx') },

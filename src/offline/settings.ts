@@ -11,6 +11,8 @@ export type Settings = {
   /** The sheet each page had open. */
   openTriage: string
   openDiagnosis: string
+  /** The system last audited for its bonds, as its address writes it. */
+  bondAudit: string
   /** Feet and AWG, or meters and mm²: for the worksheets. Parse it again. */
   worksheetUnits: unknown
   /** What was last typed into each worksheet. Parse it again. */

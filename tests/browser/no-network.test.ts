@@ -50,6 +50,7 @@ describe('one visit to the front page, then the server stops', () => {
     ['/articles/open-ground', /ground/i],
     ['/causes/open-ground', 'Ground wire open to this receptacle'],
     ['/tests/tester-lamps', /tester/i],
+    ['/worksheets/bond-audit', 'Bond audit'],
     ['/editions', 'Edition 1'],
     ['/worksheets', 'Worksheets'],
     ['/worksheets/fault-clearing', 'What clears a fault'],
