@@ -31,8 +31,8 @@ export function AuditResult({ system }: { system: System }) {
           <SignalPanel word="warning" className="mb-5">
             <p>
               <b>Never bond a balanced output.</b> No bond can fix this. Replace the source, or install a
-              listed isolation transformer with a bonded secondary. Until then a single-pole breaker leaves a
-              wire live.
+              listed isolation transformer with a bonded secondary. Until then a breaker of one pole opens one
+              live wire of two.
             </p>
           </SignalPanel>
         )

@@ -12,7 +12,7 @@ export function balancedFindings({ live, places, bonds }: Circuit): Finding[] {
   const panels = places.filter(({ kind }) => kind === 'panel')
   const mend = [
     `Replace ${names} with a source that has a neutral, or feed a listed isolation transformer with a bonded secondary from it.`,
-    'Until then keep it off the panel: a single-pole breaker leaves a wire live.',
+    'Until then keep it off the panel: a breaker of one pole opens one live wire of two.',
   ]
   if (panels.length > 0)
     found.push({
