@@ -75,6 +75,8 @@ export type Part = { kind: 'text'; markdown: string } | { kind: 'loop'; block: s
 
 /** An article's text, cut where a loop picture stands: a fenced block named `loop`, outside of lists and quotations. */
 export function partsOf(markdown: string): Part[] {
+  // Before the lexer sees it: that calls itself for each depth, too.
+  if (tooMuchMarkdown(markdown) !== undefined) return [{ kind: 'text', markdown }]
   const parts: Part[] = []
   for (const token of marked.lexer(markdown)) {
     const last = parts.at(-1)
