@@ -28,7 +28,12 @@ export function SavedWhere() {
     <SavingState state={online && pagesKept ? state : 'here'}>
       {!online && 'No network. '}
       {/* On a phone there is room for one of the two, and what lies here alone weighs more. */}
-      {!pagesKept && (online ? here === 0 && 'Works only with a network. ' : 'Keep this page open. ')}
+      {!pagesKept &&
+        (online ? (
+          <span className={here > 0 ? 'hidden desk:inline' : ''}>Works only with a network. </span>
+        ) : (
+          'Keep this page open. '
+        ))}
       {refused + waiting > 0 && state === 'here' ? (
         <Link to="/not-sent" className="underline">
           {words}
