@@ -52,7 +52,12 @@ const textsIn = (value: unknown): string[] =>
 const sentences = (text: string) =>
   text
     .split(/\n+|(?<=[.:;?!])\s+/)
-    .map((part) => part.replace(/^[\s>#*|\-\d.]+/, '').trim())
+    .map((part) =>
+      part
+        .replace(/^[\s>#*|\-\d.]+/, '')
+        .replace(/[.:;?!*]+$/, '')
+        .trim(),
+    )
     .filter((part) => part.length >= 40)
 
 /** What everyone may read, as its writers wrote it. Stock phrases that stand there too are nobody's secret. */
@@ -249,5 +254,6 @@ test('no file of the built pages holds a sentence of it', () => {
     .map((name) => join(dist, name))
     .filter((path) => statSync(path).isFile())
   expect(files.some((path) => path.endsWith('.js'))).toBe(true)
-  for (const path of files) expect([path, leaks(readFileSync(path, 'utf8'))]).toEqual([path, []])
+  const found = files.map((path) => [path, leaks(readFileSync(path, 'utf8'))] as const)
+  expect(found.filter(([, sentences]) => sentences.length > 0)).toEqual([])
 })
