@@ -117,12 +117,16 @@ test('a diagnosis by keyboard alone', async () => {
   const first = page.locator('[data-cause]').first()
   expect(await first.evaluate((head) => head === document.activeElement)).toBe(true)
   const last = page.locator('[data-cause]').last()
-  // Ranking goes on beside the keys: the last row is the last once it has ended.
+  // Ranking goes on beside the keys, and a row that has gone takes the cursor along: steady once it has ended.
   await expect
-    .poll(async () => {
-      await keyboard.press('End')
-      return last.evaluate((head) => head === document.activeElement)
-    })
+    .poll(
+      async () => {
+        await keyboard.press('c')
+        await keyboard.press('End')
+        return last.evaluate((head) => head === document.activeElement)
+      },
+      { timeout: 15_000 },
+    )
     .toBe(true)
   expect(await last.getAttribute('aria-expanded')).toBe('false')
   await keyboard.press('Enter')
