@@ -1,5 +1,15 @@
-/** The worksheets as they are listed: by what is asked. */
+/** The worksheets as they are listed: by what is asked. The bond audit is a page of its own among them. */
 export const sheetList = [
+  {
+    title: 'Bonds',
+    sheets: [
+      {
+        to: 'bond-audit',
+        name: 'Bond audit',
+        asks: 'Is there exactly one bond in every operating mode?',
+      },
+    ],
+  },
   {
     title: 'Faults and shock',
     sheets: [

@@ -108,7 +108,8 @@ describe('npm run rank:model', () => {
     const words = run('--each', '1', '--steps', '1', '--pairs', '4', '--confused', '0')
     for (const part of ['22 model cases, held-back', 'kit', 'meter', 'call', 'next', 'fixed', '4 pairs'])
       expect(words).toContain(part)
-  })
+    // A process of its own, and ranking upon ranking: on a busy machine it takes its time.
+  }, 240_000)
   test('knows its options, and refuses others', () => {
     expect(readOptions([])).toMatchObject({ part: 'held-back', each: 30, priors: 'flat', everything: false })
     expect(readOptions(['--everything', '--each', '2'])).toMatchObject({ everything: true, each: 2 })

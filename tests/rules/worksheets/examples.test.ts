@@ -61,8 +61,9 @@ describe.each(all)('%s, %s', (name, unit) => {
   })
 })
 
-test('the list of worksheets has each once, by its own title', () => {
-  const listed = sheetList.flatMap(({ sheets }) => sheets.map(({ to, name }) => [to, name]))
+test('the list of worksheets has each once, by its own title, and the bond audit before them', () => {
+  const [audit, ...listed] = sheetList.flatMap(({ sheets }) => sheets.map(({ to, name }) => [to, name]))
+  expect(audit).toEqual(['bond-audit', 'Bond audit'])
   expect(listed.sort()).toEqual(worksheetNames.map((name) => [name, forms[name].title]).sort())
 })
 
